@@ -1,0 +1,39 @@
+import type { Declaration } from '../declaration.js'
+
+export const declaration = {
+  kind: 'loss',
+  role: 'component',
+  title: 'Loss on the way',
+  summary:
+    'A lossy stretch between a port and the detector. It passes a part of the power and mixes in the noise of its own bath.',
+  nature: 'chain',
+  family: 'detection',
+  fields: {
+    reads: { type: 'name', of: 'port', required: true, meaning: 'port, loss or amplifier in front of it' },
+    transmission: {
+      type: 'quantity',
+      dimension: 'power-ratio',
+      symbol: '\\eta',
+      range: 'positive-fraction',
+      required: true,
+      meaning: 'part of the power that passes',
+    },
+    temperature: {
+      type: 'quantity',
+      dimension: 'temperature',
+      range: 'non-negative',
+      meaning: 'temperature of the lossy stretch',
+    },
+    occupancy: { type: 'quantity', dimension: 'number', range: 'non-negative', meaning: 'quanta of its bath' },
+  },
+  exclusive: [{ keys: ['temperature', 'occupancy'], need: 'at most one' }],
+  equations: [
+    {
+      name: 'loss',
+      tex: 'a_{\\mathrm{out}} = \\sqrt{\\eta}\\,a_{\\mathrm{in}} + \\sqrt{1-\\eta}\\,a_{\\mathrm{bath}},\\quad V = \\left(n+\\tfrac12\\right)\\mathbb 1',
+    },
+  ],
+  symbols: { n: 'quanta of the bath', V: 'symmetrised covariance of the bath' },
+  references: ['clerk-2010'],
+  validity: 'A loss that is flat over the band.',
+} as const satisfies Declaration

@@ -1,0 +1,32 @@
+import type { Declaration } from '../declaration.js'
+
+export const declaration = {
+  kind: 'sideband',
+  role: 'component',
+  title: 'One sideband',
+  summary:
+    'Records the field at one side of the pump only, at the pump frequency plus or minus the signal frequency, as a spectrum analyser behind an amplifier does.',
+  nature: 'detector',
+  family: 'detection',
+  fields: {
+    reads: { type: 'name', of: 'port', required: true, meaning: 'port, loss or amplifier in front of it' },
+    side: { type: 'choice', options: ['upper', 'lower'], default: 'upper', meaning: 'above or below the pump' },
+    efficiency: {
+      type: 'quantity',
+      dimension: 'power-ratio',
+      symbol: '\\eta',
+      range: 'positive-fraction',
+      default: '1',
+      meaning: 'power transmission between the port and the detector',
+    },
+  },
+  equations: [
+    {
+      name: 'record',
+      tex: 'y = \\sqrt\\eta\\,a_{\\mathrm{out}}(\\omega)\\ \\text{(upper)},\\quad y = \\sqrt\\eta\\,a_{\\mathrm{out}}^\\dagger(\\omega)\\ \\text{(lower)}',
+    },
+  ],
+  symbols: { 'a_{\\mathrm{out}}': 'field that leaves the port' },
+  references: ['clerk-2010', 'caves-1982'],
+  validity: 'The other sideband does not reach the record.',
+} as const satisfies Declaration

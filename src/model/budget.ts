@@ -1,0 +1,116 @@
+import type { Place } from './problem.js'
+
+/** One number a person wrote: a named parameter, or a quantity written inline (its id is then its path). */
+export interface Root {
+  /** `mass`, or `cavity.pump.power`. */
+  readonly id: string
+  /** In the canonical unit of its declared dimension (see `quantity/declared.ts`). */
+  readonly value: number
+  /** Standard uncertainty in the same unit; 0 where none is stated. */
+  readonly uncertainty: number
+  /** Name of the declared dimension it is used as: `mass`, `rate`, `frequency` … */
+  readonly dimension: string
+  /** The quantity as it stands in the file: `3.1(2) ng`. */
+  readonly text: string
+  readonly about: string | null
+  /** `assumed`, a key or a note; null where the file says nothing. */
+  readonly evidence: string | null
+  /** ISO date of the measurement, or null. */
+  readonly measured: string | null
+  readonly place: Place
+}
+
+/** A number that a kernel will be given: an index into the roots, or a default that a declaration states. */
+export type Slot = { readonly root: number } | { readonly constant: number }
+
+/**
+ * What a component or a contribution of its own was given, in the shape of its declaration's fields:
+ * `quantity` → Slot, `choice`, `name` → string, `map` → Record, `group` → Parameters, `density` → DensitySpec.
+ * Fields that the file leaves out and that have no default are absent.
+ */
+export interface Parameters {
+  readonly [field: string]: Slot | string | DensitySpec | Parameters
+}
+
+/** A density as the file states it; the engine turns each into a one-sided power density. */
+export type DensitySpec =
+  | {
+      readonly density: 'level'
+      readonly level: Slot
+      readonly power: boolean
+      readonly exponent: Slot
+      readonly reference: Slot | null
+    }
+  | { readonly density: 'table'; readonly table: number }
+
+/** Numbers from a file, already in canonical SI units, ascending in the first column. */
+export interface Table {
+  readonly file: string
+  readonly place: Place
+  /** In Hz, strictly ascending, > 0. */
+  readonly frequency: Float64Array
+  /** One-sided power density in canonical SI units, > 0. */
+  readonly psd: Float64Array
+}
+
+export interface ComponentSpec {
+  readonly id: string
+  readonly kind: string
+  readonly parameters: Parameters
+  readonly place: Place
+  /** Places of fields by path below the component (`pump.power`), for refusals found later. */
+  readonly places: ReadonlyMap<string, Place>
+}
+
+export type PartName = 'imprecision' | 'back-action' | 'heating'
+
+/** A line of the budget: what it claims, or a source of its own. */
+export interface LineSpec {
+  readonly id: string
+  readonly title: string | null
+  readonly about: string | null
+  readonly evidence: string | null
+  readonly place: Place
+  readonly claims:
+    LineClaim | { readonly kind: string; readonly parameters: Parameters; readonly places: ReadonlyMap<string, Place> }
+}
+
+export interface LineClaim {
+  /** Ids of implied noises (`cavity.front`) or of components (`cavity`: all of its noises). */
+  readonly of: readonly string[]
+  readonly part: PartName | null
+}
+
+export interface MeasurandSpec {
+  readonly quantity: 'force' | 'acceleration' | 'displacement'
+  /** Weights d_k of the pushed modes by component id; null: as the quantity's default says. */
+  readonly weights: ReadonlyMap<string, number> | null
+  /** `at: <component>`: pushes as that component senses. */
+  readonly at: string | null
+  readonly place: Place
+}
+
+/** A budget that passed the border: names resolved, dimensions checked, numbers in SI. */
+export interface Budget {
+  /** The folder's name. */
+  readonly sensor: string
+  readonly file: string
+  readonly format: number
+  readonly title: string
+  readonly summary: string | null
+  readonly revision: string
+  readonly measurand: MeasurandSpec
+  /** Id of the detector component whose output is y. */
+  readonly readout: string
+  readonly readoutPlace: Place
+  /** In Hz. */
+  readonly band: { readonly low: number; readonly high: number; readonly place: Place }
+  /** In Hz, or null: then headlines are given at the best frequency only. */
+  readonly reference: number | null
+  readonly roots: readonly Root[]
+  readonly tables: readonly Table[]
+  /** In the order of the file. */
+  readonly components: readonly ComponentSpec[]
+  readonly lines: readonly LineSpec[]
+  readonly warnings: readonly import('./problem.js').Problem[]
+}
