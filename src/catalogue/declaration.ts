@@ -30,10 +30,13 @@ export interface ChoiceField extends Common {
   readonly default?: string
 }
 
-/** Names one component (`cavity`) or a port of one (`cavity.back`). */
+/**
+ * Names a component by what it can do, or a port of one (`cavity.back`, or a chain component). `mode`: a mechanical mode,
+ * which can be pushed; `sensing`: a component with `weights`, whose coordinate can be shifted; `recorder`: a detector of light.
+ */
 export interface NameField extends Common {
   readonly type: 'name'
-  readonly of: 'component' | 'port'
+  readonly of: 'port' | 'mode' | 'sensing' | 'recorder'
 }
 
 /** Names a key of a sibling map field: `pump.port` is a key of `ports`. */
@@ -82,6 +85,16 @@ export interface Exclusive {
   readonly need: 'exactly one' | 'at most one'
 }
 
+/** A noise that a component brings by itself; a line of the budget claims it as `<component>.<channel>`. */
+export interface ImpliedNoise {
+  /** `added`; with `each`, the channel's name where the file does not give that map. */
+  readonly channel: string
+  /** A map field: one channel for each of its names. */
+  readonly each?: string
+  /** Whether a line may claim `imprecision`, `back-action` or `heating` of it alone. */
+  readonly parts: boolean
+}
+
 export interface Declaration {
   /** The word after `kind:`. */
   readonly kind: string
@@ -95,6 +108,8 @@ export interface Declaration {
   readonly family?: Family
   readonly fields: Fields
   readonly exclusive?: readonly Exclusive[]
+  /** Noises of a component, none where left out. */
+  readonly noises?: readonly ImpliedNoise[]
   /** Display equations in TeX. */
   readonly equations: readonly { readonly name: string; readonly tex: string }[]
   /** Symbols of the equations that are not fields: TeX → meaning. */

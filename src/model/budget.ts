@@ -20,8 +20,11 @@ export interface Root {
   readonly place: Place
 }
 
-/** A number that a kernel will be given: an index into the roots, or a default that a declaration states. */
-export type Slot = { readonly root: number } | { readonly constant: number }
+/**
+ * A number that a kernel will be given: an index into the roots, or a default that a declaration states. `scale` multiplies
+ * the root where one parameter is used both as a frequency (cycles) and as a rate (angular).
+ */
+export type Slot = { readonly root: number; readonly scale?: number } | { readonly constant: number }
 
 /**
  * What a component or a contribution of its own was given, in the shape of its declaration's fields:

@@ -25,6 +25,7 @@ export const declaration = {
       meaning: 'power gain; left out, it is so large that nothing behind it matters',
     },
   },
+  noises: [{ channel: 'added', parts: true }],
   equations: [
     {
       name: 'added noise',

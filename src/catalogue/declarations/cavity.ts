@@ -147,6 +147,7 @@ export const declaration = {
     },
   },
   exclusive: [{ keys: ['coupling', 'g0'], need: 'exactly one' }],
+  noises: [{ channel: 'ports', each: 'ports', parts: true }],
   equations: [
     {
       name: 'field',

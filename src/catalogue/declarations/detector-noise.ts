@@ -8,7 +8,7 @@ export const declaration = {
   nature: 'noise',
   family: 'detection',
   fields: {
-    into: { type: 'name', of: 'component', required: true, meaning: 'detector that it enters' },
+    into: { type: 'name', of: 'recorder', required: true, meaning: 'detector that it enters' },
     density: { type: 'density', of: 'quanta', required: true, meaning: 'quanta at the detector’s input' },
   },
   equations: [{ name: 'density', tex: 'S_y(f) = 2\\,n_0\\,(f/f_0)^{p}\\left(|u|^2+|v|^2\\right)' }],

@@ -11,7 +11,7 @@ export const declaration = {
   fields: {
     into: {
       type: 'name',
-      of: 'component',
+      of: 'sensing',
       required: true,
       meaning: 'cavity or plain readout whose coordinate it moves',
     },

@@ -16,6 +16,7 @@ export const declaration = {
     },
     noise: { type: 'density', of: 'length', required: true, meaning: 'displacement noise of the readout' },
   },
+  noises: [{ channel: 'noise', parts: false }],
   equations: [{ name: 'record', tex: 'y = \\sum_k c_k x_k + x_n' }],
   symbols: { c_k: 'weight of mode $k$', x_n: 'noise of the readout, as a displacement' },
   references: ['clerk-2010'],

@@ -8,7 +8,7 @@ export const declaration = {
   nature: 'noise',
   family: 'stray',
   fields: {
-    into: { type: 'name', of: 'component', required: true, meaning: 'mechanical mode that it pushes' },
+    into: { type: 'name', of: 'mode', required: true, meaning: 'mechanical mode that it pushes' },
     density: { type: 'density', of: 'force', required: true, meaning: 'one-sided density of the force' },
   },
   equations: [{ name: 'density', tex: 'S_F(f) = S_0\\,(f/f_0)^{p}' }],

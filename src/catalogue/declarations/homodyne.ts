@@ -27,6 +27,7 @@ export const declaration = {
       meaning: 'power transmission between the port and the detector',
     },
   },
+  noises: [{ channel: 'loss', parts: true }],
   equations: [
     {
       name: 'record',

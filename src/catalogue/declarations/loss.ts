@@ -27,6 +27,7 @@ export const declaration = {
     occupancy: { type: 'quantity', dimension: 'number', range: 'non-negative', meaning: 'quanta of its bath' },
   },
   exclusive: [{ keys: ['temperature', 'occupancy'], need: 'at most one' }],
+  noises: [{ channel: 'loss', parts: true }],
   equations: [
     {
       name: 'loss',

@@ -96,6 +96,7 @@ export const declaration = {
       meaning: 'mass that the frame’s acceleration moves with the mode, the integral of density times mode shape',
     },
   },
+  noises: [{ channel: 'bath', each: 'losses', parts: false }],
   equations: modeEquations,
   symbols: modeSymbols,
   references: ['callen-welton-1951', 'saulson-1990'],

@@ -10,6 +10,7 @@ export const declaration = {
   nature: 'mechanical',
   family: 'thermal',
   fields: modeFields,
+  noises: [{ channel: 'bath', each: 'losses', parts: false }],
   equations: modeEquations,
   symbols: modeSymbols,
   references: ['callen-welton-1951', 'saulson-1990'],
