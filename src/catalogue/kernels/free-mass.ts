@@ -1,0 +1,22 @@
+import type { declaration } from '../declarations/free-mass.js'
+import type { Kernel } from '../kernel.js'
+import type { ValuesOf } from '../values.js'
+
+export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  assemble(instance, net) {
+    const { mass } = instance.values
+    const unknown = net.unknown(instance.id, 'mechanical')
+    net.stamp(unknown, unknown, { form: 'oscillator', mass, frequency: 0, gamma: 0, phi: 0 })
+    net.mode({
+      id: instance.id,
+      unknown,
+      mass,
+      frequency: 0,
+      gamma: 0,
+      phi: 0,
+      movedMass: mass,
+      thermalOccupancy: 0,
+      zeroPoint: null,
+    })
+  },
+}
