@@ -44,8 +44,12 @@ export interface Assembly {
   reads(id: string): void
 }
 
+export type Stage = 'mechanical' | 'field' | 'chain' | 'detector' | 'noise'
+
 /** The numerical face of a kind: puts unknowns, equations and sources into the network. */
 export interface Kernel<Values = never> {
+  /** When it is called: what it refers to at once must be there already. */
+  readonly stage: Stage
   assemble(instance: Instance<Values>, net: Assembly): void
 }
 

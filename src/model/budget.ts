@@ -28,11 +28,12 @@ export type Slot = { readonly root: number; readonly scale?: number } | { readon
 
 /**
  * What a component or a contribution of its own was given, in the shape of its declaration's fields:
- * `quantity` → Slot, `choice`, `name` → string, `map` → Record, `group` → Parameters, `density` → DensitySpec.
+ * `quantity` → Slot, `choice`, `name`, `key` → string, `group` → Parameters, `map` → Map of Parameters, `weights` → Map of
+ * Slots (names that a person chose are keys of a Map, never of an object), `density` → DensitySpec.
  * Fields that the file leaves out and that have no default are absent.
  */
 export interface Parameters {
-  readonly [field: string]: Slot | string | DensitySpec | Parameters
+  readonly [field: string]: Slot | string | DensitySpec | ReadonlyMap<string, Parameters | Slot> | Parameters
 }
 
 /** A density as the file states it; the engine turns each into a one-sided power density. */

@@ -10,6 +10,7 @@ import { recordSource } from '../record-source.js'
  * amplifier's input, gain 1, and the reader of budgets has made sure that nothing noisy follows.
  */
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'chain',
   assemble(instance, net) {
     const { reads, added, gain = 1 } = instance.values
     net.output(instance.id, {

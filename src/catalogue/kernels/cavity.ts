@@ -137,6 +137,7 @@ function stampFields(
 }
 
 export const kernel: Kernel<Values> = {
+  stage: 'field',
   assemble(instance, net) {
     const modes = sensedModes(instance, net)
     const point = workingPoint(instance, couplingPerMetre(instance, modes))

@@ -5,6 +5,7 @@ import { recordSource } from '../record-source.js'
 import type { ValuesOf } from '../values.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'noise',
   assemble(instance, net) {
     const { density } = instance.values
     if (net.detector === null) return

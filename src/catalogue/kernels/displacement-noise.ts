@@ -4,6 +4,7 @@ import type { Kernel } from '../kernel.js'
 import type { ValuesOf } from '../values.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'noise',
   assemble(instance, net) {
     const { into: target, density } = instance.values
     net.source({

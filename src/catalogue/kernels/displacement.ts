@@ -4,6 +4,7 @@ import type { Kernel } from '../kernel.js'
 import type { ValuesOf } from '../values.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'detector',
   assemble(instance, net) {
     if (!net.isReadout(instance.id)) return
     const { modes, noise } = instance.values

@@ -3,6 +3,7 @@ import type { Kernel } from '../kernel.js'
 import type { ValuesOf } from '../values.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'mechanical',
   assemble(instance, net) {
     const { mass } = instance.values
     const unknown = net.unknown(instance.id, 'mechanical')

@@ -7,6 +7,7 @@ import type { ValuesOf } from '../values.js'
 
 /** u = e^{−i(θ+ψ)}, v = u*, with ψ the phase of the mean carrier that leaves the port. */
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'detector',
   assemble(instance, net) {
     if (!net.isReadout(instance.id)) return
     const { reads, angle, efficiency } = instance.values

@@ -6,6 +6,7 @@ import type { ValuesOf } from '../values.js'
 import { recordSource } from '../record-source.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'chain',
   assemble(instance, net) {
     const { reads, transmission, occupancy = 0 } = instance.values
     net.output(instance.id, {

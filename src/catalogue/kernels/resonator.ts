@@ -129,6 +129,7 @@ export function assembleMode(instance: Instance<ModeValues>, net: Assembly, move
 }
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'mechanical',
   assemble(instance, net) {
     assembleMode(instance, net, instance.values.moved_mass ?? null)
   },

@@ -4,6 +4,7 @@ import type { ValuesOf } from '../values.js'
 import { assembleMode } from './resonator.js'
 
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'mechanical',
   assemble(instance, net) {
     assembleMode(instance, net, instance.values.mass)
   },

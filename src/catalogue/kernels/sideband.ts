@@ -6,6 +6,7 @@ import type { ValuesOf } from '../values.js'
 
 /** (u, v) = (1, 0) above the pump, (0, 1) below it. */
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
+  stage: 'detector',
   assemble(instance, net) {
     if (!net.isReadout(instance.id)) return
     const { reads, side, efficiency } = instance.values
