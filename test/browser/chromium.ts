@@ -1,7 +1,4 @@
-import { mkdtempSync, rmSync } from 'node:fs'
-import { tmpdir } from 'node:os'
-import { join } from 'node:path'
-import { chromium, type BrowserContext } from 'playwright-core'
+import { chromium, type Browser } from 'playwright-core'
 import { findBrowser, howToInstall } from '../../.ci/browser.mjs'
 
 const quiet = [
@@ -14,22 +11,9 @@ const quiet = [
   '--disable-sync',
 ]
 
-export interface OpenBrowser {
-  readonly context: BrowserContext
-  close(): Promise<void>
-}
-
-/** The browser of this machine with a profile of its own; without one the tests fail and say how to get it. */
-export async function openBrowser(): Promise<OpenBrowser> {
+/** The browser of this machine with a new profile; without one the tests fail and say how to get it. */
+export async function openBrowser(): Promise<Browser> {
   const executablePath = findBrowser()
   if (executablePath === null) throw new Error(howToInstall)
-  const profile = mkdtempSync(join(tmpdir(), 'floorbook-profile-'))
-  const context = await chromium.launchPersistentContext(profile, { executablePath, headless: true, args: quiet })
-  return {
-    context,
-    close: async () => {
-      await context.close()
-      rmSync(profile, { recursive: true, force: true, maxRetries: 5 })
-    },
-  }
+  return await chromium.launch({ executablePath, headless: true, args: quiet })
 }

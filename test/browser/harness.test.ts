@@ -2,12 +2,13 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { openBrowser, type OpenBrowser } from './chromium.js'
+import type { BrowserContext } from 'playwright-core'
+import { openBrowser } from './chromium.js'
 import { figures, overflow, visit, type Visit } from './visit.js'
 
 const folder = mkdtempSync(join(tmpdir(), 'floorbook-pages-'))
 const policy = `default-src 'none'; script-src 'self'; style-src 'self'; img-src 'self'`
-let browser: OpenBrowser
+let context: BrowserContext
 
 /** Opens a page with this body; the page's own policy comes first. */
 async function open(body: string, withPolicy = true): Promise<Visit> {
@@ -17,15 +18,15 @@ async function open(body: string, withPolicy = true): Promise<Visit> {
     file,
     `<!doctype html><html lang="en"><head><meta charset="utf-8">${head}<title>p</title></head><body>${body}`,
   )
-  return await visit(browser.context, file, { width: 390, height: 800 })
+  return await visit(context, file, { width: 390, height: 800 })
 }
 
 beforeAll(async () => {
-  browser = await openBrowser()
+  context = await (await openBrowser()).newContext()
 })
 
 afterAll(async () => {
-  await browser?.close()
+  await context?.browser()?.close()
   rmSync(folder, { recursive: true, force: true })
 })
 
