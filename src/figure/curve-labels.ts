@@ -1,0 +1,71 @@
+import type { Curve } from './curves.js'
+import { placeInside } from './inside-labels.js'
+import { makeLabel, type Label } from './label.js'
+import { MARGIN_AFTER, MARGIN_BEFORE, marginLabels, type Ending } from './margin-labels.js'
+import type { Occupancy } from './occupancy.js'
+import type { Box, Mark } from './scene.js'
+
+/** The widest text of a label in pixels. */
+const WIDEST = 168
+const LINES = 2
+
+/** The width of the margin that labels need at the right of a frame. */
+export function labelMargin(curves: readonly { readonly title: string; readonly ink: Curve['ink'] }[], size: number): number {
+  const labels = curves.map(curve => makeLabel(curve as Curve, size, WIDEST, LINES))
+  return MARGIN_BEFORE + MARGIN_AFTER + Math.max(40, ...labels.map(label => label.width))
+}
+
+/**
+ * A label for every curve: in the right margin where the curve ends there, inside the frame where it does not and there
+ * is room, else in the margin with an arrow towards the edge that the curve has left the frame through.
+ */
+export function wideLabels(curves: readonly Curve[], frame: Box, occupancy: Occupancy, size: number): Mark[] {
+  const endings: Ending[] = []
+  const marks: Mark[] = []
+  for (const curve of byWeight(curves)) {
+    const label = makeLabel(curve, size, WIDEST, LINES)
+    const y = endAt(curve, frame.right)
+    if (y !== null) {
+      endings.push({ label, y })
+      continue
+    }
+    const inside = placeInside(label, occupancy, frame.right, size)
+    if (inside !== null) marks.push(inside)
+    else endings.push(leaving(curve, frame, size))
+  }
+  return [...marks, ...marginLabels(endings, frame, size).marks]
+}
+
+export function byWeight(curves: readonly Curve[]): Curve[] {
+  return [...curves].sort((a, b) => b.weight - a.weight)
+}
+
+/** Height at which a curve meets the right edge, or null. */
+function endAt({ pieces }: Curve, right: number): number | null {
+  const last = pieces.at(-1)
+  return last !== undefined && last[last.length - 2] >= right - 1 ? last[last.length - 1] : null
+}
+
+function leaving(curve: Curve, frame: Box, size: number): Ending {
+  const up = curve.pieces.length > 0 && (curve.pieces.at(-1)!.at(-1)! < (frame.top + frame.bottom) / 2)
+  const label = makeLabel({ ...curve, title: `${curve.title} ${up ? '↑' : '↓'}` }, size, WIDEST, LINES)
+  return { label, y: up ? frame.top : frame.bottom }
+}
+
+/** Labels inside the frame for the curves of most weight, at most `most`; the others come back in `left`. */
+export function compactLabels(
+  curves: readonly Curve[],
+  frame: Box,
+  occupancy: Occupancy,
+  { size, most }: { size: number; most: number },
+): { marks: Mark[]; left: Curve[] } {
+  const marks: Mark[] = []
+  const left: Curve[] = []
+  for (const curve of byWeight(curves)) {
+    const label: Label = makeLabel(curve, size, (frame.right - frame.left) * 0.5, 1)
+    const mark = marks.length < most ? placeInside(label, occupancy, frame.right - label.width / 2, size) : null
+    if (mark === null) left.push(curve)
+    else marks.push(mark)
+  }
+  return { marks, left }
+}

@@ -1,0 +1,82 @@
+import type { FigureInput } from './input.js'
+import type { Box, Ink, PathMark, Polyline } from './scene.js'
+import type { AxisScale } from './scales.js'
+import { curvePath } from './curve-path.js'
+import { dashOf, negativeDash } from './dashes.js'
+
+/** A curve as it is drawn and labelled. */
+export interface Curve {
+  readonly id: string
+  readonly title: string
+  readonly ink: Ink
+  readonly dash?: readonly number[]
+  /** Visible pieces in pixels; empty when the curve leaves the frame or is nowhere above zero. */
+  readonly pieces: readonly Polyline[]
+  /** Labels are placed in falling order of it: a line's largest share of the total power in the window. */
+  readonly weight: number
+  readonly psd: Float64Array
+}
+
+/** Where curves are drawn: abscissae of the evaluation's points, scales and frame. */
+export interface Window {
+  readonly x: Float64Array
+  readonly xScale: AxisScale
+  readonly yScale: AxisScale
+  readonly frame: Box
+}
+
+const TOTAL_WEIGHT = 1e6
+const STANDARD_WEIGHT = 1e5
+const LIMIT_WEIGHT = 1e-3
+
+/** Every curve of the input in the order of drawing: limits, lines (smallest share first), total. */
+export function drawCurves(input: FigureInput, window: Window): Curve[] {
+  const limits = input.limits.map(({ id, title, prominent, psd }) =>
+    draw({ id: `limit-${id}`, title, psd }, 1, false, limitStyle(prominent), window),
+  )
+  const lines = input.lines.flatMap(line => {
+    const weight = largestShare(line.psd, input.total, window)
+    const ink: Ink = { as: 'line', family: line.family, tone: line.tone }
+    const dash = dashOf(line.family, line.tone)
+    const curve = { id: `line-${line.id}`, title: line.title, psd: line.psd }
+    const positive = draw(curve, 1, line.signed, { ink, weight, ...(dash && { dash }) }, window)
+    if (!line.signed) return [positive]
+    const negative = { ...curve, id: `${curve.id}-negative`, title: `− ${line.title}` }
+    return [positive, draw(negative, -1, true, { ink, weight, dash: negativeDash() }, window)].filter(isSomewhere)
+  })
+  lines.sort((a, b) => a.weight - b.weight)
+  const total = { id: 'total', title: 'total', psd: input.total }
+  return [...limits, ...lines, draw(total, 1, false, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window)]
+}
+
+type Style = Pick<Curve, 'ink' | 'dash' | 'weight'>
+
+function limitStyle(prominent: boolean): Style {
+  return prominent
+    ? { ink: { as: 'limit' }, weight: STANDARD_WEIGHT }
+    : { ink: { as: 'bound' }, weight: LIMIT_WEIGHT, dash: [1.5, 3.5] }
+}
+
+function draw(curve: Pick<Curve, 'id' | 'title' | 'psd'>, sign: 1 | -1, signed: boolean, style: Style, window: Window): Curve {
+  const { x, xScale, yScale, frame } = window
+  return { ...curve, ...style, pieces: curvePath({ x, psd: curve.psd, sign, signed }, xScale, yScale, frame) }
+}
+
+/** A signed line that never has one of its signs has no curve and no label for it. */
+function isSomewhere(curve: Curve): boolean {
+  return curve.pieces.length > 0
+}
+
+function largestShare(psd: Float64Array, total: Float64Array, { x, xScale }: Window): number {
+  let most = 0
+  for (let k = 0; k < psd.length; k++) {
+    if (x[k] < xScale.low || x[k] > xScale.high || !(total[k] > 0)) continue
+    const share = Math.abs(psd[k]) / total[k]
+    if (share > most && Number.isFinite(share)) most = share
+  }
+  return most
+}
+
+export function curveMark({ id, ink, dash, pieces }: Curve): PathMark {
+  return { mark: 'path', ink, of: id, pieces, ...(dash && { dash }) }
+}

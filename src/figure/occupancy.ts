@@ -1,0 +1,75 @@
+import type { Box, Polyline } from './scene.js'
+
+/** Edge of a cell in pixels: labels need no finer knowledge of where ink is. */
+const CELL = 2
+
+/** Where ink is in a frame, so that the ink inside any box is counted in constant time (a summed-area table). */
+export class Occupancy {
+  private readonly columns: number
+  private readonly rows: number
+  private readonly cells: Uint8Array
+  private sums: Uint32Array | null = null
+
+  constructor(private readonly frame: Box) {
+    this.columns = Math.max(1, Math.ceil((frame.right - frame.left) / CELL))
+    this.rows = Math.max(1, Math.ceil((frame.bottom - frame.top) / CELL))
+    this.cells = new Uint8Array(this.columns * this.rows)
+  }
+
+  addLine(line: Polyline): void {
+    for (let k = 0; k + 3 < line.length; k += 2) {
+      const steps = Math.ceil(Math.hypot(line[k + 2] - line[k], line[k + 3] - line[k + 1]) / CELL) + 1
+      for (let s = 0; s <= steps; s++) {
+        const t = s / steps
+        this.mark(line[k] + t * (line[k + 2] - line[k]), line[k + 1] + t * (line[k + 3] - line[k + 1]))
+      }
+    }
+  }
+
+  addBox(box: Box): void {
+    for (let x = box.left; x <= box.right; x += CELL) for (let y = box.top; y <= box.bottom; y += CELL) this.mark(x, y)
+  }
+
+  /** True when the box lies inside the frame and no ink is in it. */
+  isFree(box: Box): boolean {
+    const { left, top, right, bottom } = this.frame
+    if (box.left < left || box.right > right || box.top < top || box.bottom > bottom) return false
+    return this.count(box) === 0
+  }
+
+  private count(box: Box): number {
+    const sums = (this.sums ??= this.integrate())
+    const width = this.columns + 1
+    const c0 = this.column(box.left)
+    const c1 = this.column(box.right) + 1
+    const r0 = this.row(box.top)
+    const r1 = this.row(box.bottom) + 1
+    return sums[r1 * width + c1] - sums[r0 * width + c1] - sums[r1 * width + c0] + sums[r0 * width + c0]
+  }
+
+  private integrate(): Uint32Array {
+    const width = this.columns + 1
+    const sums = new Uint32Array(width * (this.rows + 1))
+    for (let r = 0; r < this.rows; r++) {
+      let row = 0
+      for (let c = 0; c < this.columns; c++) {
+        row += this.cells[r * this.columns + c]
+        sums[(r + 1) * width + c + 1] = sums[r * width + c + 1] + row
+      }
+    }
+    return sums
+  }
+
+  private mark(x: number, y: number): void {
+    this.cells[this.row(y) * this.columns + this.column(x)] = 1
+    this.sums = null
+  }
+
+  private column(x: number): number {
+    return Math.min(this.columns - 1, Math.max(0, Math.floor((x - this.frame.left) / CELL)))
+  }
+
+  private row(y: number): number {
+    return Math.min(this.rows - 1, Math.max(0, Math.floor((y - this.frame.top) / CELL)))
+  }
+}
