@@ -120,11 +120,14 @@ function turned(quantity: Quantity, meaning: Meaning): Declared {
   if (!cyclic && !equal(quantity.cycles, zero)) throw wrongCycles(quantity, meaning)
   const turn = 2 * Math.PI
   const factor = meaning.counts === 'cycles' ? (cyclic ? 1 : 1 / turn) : cyclic ? turn : 1
-  return {
-    value: quantity.value * factor,
-    uncertainty: quantity.uncertainty * factor,
-    note: cyclic ? 'cyclic' : 'angular',
-  }
+  const value = quantity.value * factor
+  const uncertainty = quantity.uncertainty * factor
+  if (!Number.isFinite(value) || !Number.isFinite(uncertainty))
+    throw refuse(
+      quantity,
+      `\`${quantity.text}\` is beyond the numbers that are read; ${meaning.phrase} such as \`${meaning.example}\` is wanted`,
+    )
+  return { value, uncertainty, note: cyclic ? 'cyclic' : 'angular' }
 }
 
 /** A bare `90` as an angle would be 90 radians, and `90°` as a plain number 1.57: neither is likely meant. */

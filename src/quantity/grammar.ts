@@ -186,28 +186,28 @@ function peg$parse(input, options) {
   const peg$c9 = 'sqrt'
   const peg$c10 = '1'
   const peg$c11 = '\xB0'
-  const peg$c12 = '\xBD'
-  const peg$c13 = '^'
-  const peg$c14 = '**'
-  const peg$c15 = '\xB1'
-  const peg$c16 = '+/-'
-  const peg$c17 = '+-'
-  const peg$c18 = '+'
-  const peg$c19 = '\u207A'
-  const peg$c20 = '\u207B'
+  const peg$c12 = '%'
+  const peg$c13 = '\xBD'
+  const peg$c14 = '^'
+  const peg$c15 = '**'
+  const peg$c16 = '\xB1'
+  const peg$c17 = '+/-'
+  const peg$c18 = '+-'
+  const peg$c19 = '+'
+  const peg$c20 = '\u207A'
+  const peg$c21 = '\u207B'
 
   const peg$r0 = /^[0-9]/
   const peg$r1 = /^[eE]/
   const peg$r2 = /^[\xB7\u22C5\u2219\xD7]/
   const peg$r3 = /^[CF]/
-  const peg$r4 = /^[%\u2030]/
-  const peg$r5 = /^[\/\u141F\u2044]/
-  const peg$r6 = /^[\/\u2044]/
-  const peg$r7 = /^[\xD7\xB7\u22C5\u2219]/
-  const peg$r8 = /^[\-\u2212]/
-  const peg$r9 = /^[\u2070\xB9\xB2\xB3\u2074\u2075\u2076\u2077\u2078\u2079]/
-  const peg$r10 = /^[A-Za-z\xB5\u03BC\u03A9\u03A9\xC5\xC5]/
-  const peg$r11 = /^[ \xA0\u2000-\u200A\u202F]/
+  const peg$r4 = /^[\/\u141F\u2044]/
+  const peg$r5 = /^[\/\u2044]/
+  const peg$r6 = /^[\xD7\xB7\u22C5\u2219]/
+  const peg$r7 = /^[\-\u2212]/
+  const peg$r8 = /^[\u2070\xB9\xB2\xB3\u2074\u2075\u2076\u2077\u2078\u2079]/
+  const peg$r9 = /^[A-Za-z\xB5\u03BC\u03A9\u03A9\xC5\xC5]/
+  const peg$r10 = /^[ \xA0\u2000-\u200A\u202F]/
 
   const peg$e0 = peg$literalExpectation('\u03C0', false)
   const peg$e1 = peg$literalExpectation('pi', false)
@@ -225,7 +225,7 @@ function peg$parse(input, options) {
   const peg$e13 = peg$literalExpectation('1', false)
   const peg$e14 = peg$literalExpectation('\xB0', false)
   const peg$e15 = peg$classExpectation(['C', 'F'], false, false, false)
-  const peg$e16 = peg$classExpectation(['%', '\u2030'], false, false, false)
+  const peg$e16 = peg$literalExpectation('%', false)
   const peg$e17 = peg$literalExpectation('\xBD', false)
   const peg$e18 = peg$classExpectation(['/', '\u141F', '\u2044'], false, false, false)
   const peg$e19 = peg$literalExpectation('^', false)
@@ -1733,8 +1733,8 @@ function peg$parse(input, options) {
         s0 = s1
       }
       if (s0 === peg$FAILED) {
-        s0 = input.charAt(peg$currPos)
-        if (peg$r4.test(s0)) {
+        if (input.charCodeAt(peg$currPos) === 37) {
+          s0 = peg$c12
           peg$currPos++
         } else {
           s0 = peg$FAILED
@@ -1868,7 +1868,7 @@ function peg$parse(input, options) {
             s2 = null
           }
           if (input.charCodeAt(peg$currPos) === 189) {
-            s3 = peg$c12
+            s3 = peg$c13
             peg$currPos++
           } else {
             s3 = peg$FAILED
@@ -1897,7 +1897,7 @@ function peg$parse(input, options) {
           if (s2 !== peg$FAILED) {
             s3 = peg$currPos
             s4 = input.charAt(peg$currPos)
-            if (peg$r5.test(s4)) {
+            if (peg$r4.test(s4)) {
               peg$currPos++
             } else {
               s4 = peg$FAILED
@@ -2036,7 +2036,7 @@ function peg$parse(input, options) {
     let s0
 
     if (input.charCodeAt(peg$currPos) === 94) {
-      s0 = peg$c13
+      s0 = peg$c14
       peg$currPos++
     } else {
       s0 = peg$FAILED
@@ -2045,8 +2045,8 @@ function peg$parse(input, options) {
       }
     }
     if (s0 === peg$FAILED) {
-      if (input.substr(peg$currPos, 2) === peg$c14) {
-        s0 = peg$c14
+      if (input.substr(peg$currPos, 2) === peg$c15) {
+        s0 = peg$c15
         peg$currPos += 2
       } else {
         s0 = peg$FAILED
@@ -2063,7 +2063,7 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r6.test(s0)) {
+    if (peg$r5.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
@@ -2079,7 +2079,7 @@ function peg$parse(input, options) {
     let s0, s1, s2, s3
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r7.test(s0)) {
+    if (peg$r6.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
@@ -2137,7 +2137,7 @@ function peg$parse(input, options) {
     let s0
 
     if (input.charCodeAt(peg$currPos) === 177) {
-      s0 = peg$c15
+      s0 = peg$c16
       peg$currPos++
     } else {
       s0 = peg$FAILED
@@ -2146,8 +2146,8 @@ function peg$parse(input, options) {
       }
     }
     if (s0 === peg$FAILED) {
-      if (input.substr(peg$currPos, 3) === peg$c16) {
-        s0 = peg$c16
+      if (input.substr(peg$currPos, 3) === peg$c17) {
+        s0 = peg$c17
         peg$currPos += 3
       } else {
         s0 = peg$FAILED
@@ -2156,8 +2156,8 @@ function peg$parse(input, options) {
         }
       }
       if (s0 === peg$FAILED) {
-        if (input.substr(peg$currPos, 2) === peg$c17) {
-          s0 = peg$c17
+        if (input.substr(peg$currPos, 2) === peg$c18) {
+          s0 = peg$c18
           peg$currPos += 2
         } else {
           s0 = peg$FAILED
@@ -2176,7 +2176,7 @@ function peg$parse(input, options) {
 
     s0 = peg$currPos
     if (input.charCodeAt(peg$currPos) === 43) {
-      s1 = peg$c18
+      s1 = peg$c19
       peg$currPos++
     } else {
       s1 = peg$FAILED
@@ -2192,7 +2192,7 @@ function peg$parse(input, options) {
     if (s0 === peg$FAILED) {
       s0 = peg$currPos
       s1 = input.charAt(peg$currPos)
-      if (peg$r8.test(s1)) {
+      if (peg$r7.test(s1)) {
         peg$currPos++
       } else {
         s1 = peg$FAILED
@@ -2215,7 +2215,7 @@ function peg$parse(input, options) {
 
     s0 = peg$currPos
     if (input.charCodeAt(peg$currPos) === 8314) {
-      s1 = peg$c19
+      s1 = peg$c20
       peg$currPos++
     } else {
       s1 = peg$FAILED
@@ -2231,7 +2231,7 @@ function peg$parse(input, options) {
     if (s0 === peg$FAILED) {
       s0 = peg$currPos
       if (input.charCodeAt(peg$currPos) === 8315) {
-        s1 = peg$c20
+        s1 = peg$c21
         peg$currPos++
       } else {
         s1 = peg$FAILED
@@ -2256,7 +2256,7 @@ function peg$parse(input, options) {
     s1 = peg$currPos
     s2 = []
     s3 = input.charAt(peg$currPos)
-    if (peg$r9.test(s3)) {
+    if (peg$r8.test(s3)) {
       peg$currPos++
     } else {
       s3 = peg$FAILED
@@ -2268,7 +2268,7 @@ function peg$parse(input, options) {
       while (s3 !== peg$FAILED) {
         s2.push(s3)
         s3 = input.charAt(peg$currPos)
-        if (peg$r9.test(s3)) {
+        if (peg$r8.test(s3)) {
           peg$currPos++
         } else {
           s3 = peg$FAILED
@@ -2298,7 +2298,7 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r10.test(s0)) {
+    if (peg$r9.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
@@ -2314,7 +2314,7 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r11.test(s0)) {
+    if (peg$r10.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED

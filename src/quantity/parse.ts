@@ -1,10 +1,12 @@
 import { checkCharacters } from './characters.js'
-import { equalDimensions, isDimensionless, dimensionOf, type Dimension } from './dimension.js'
+import { scaled, smallestNormal } from './decimal.js'
+import { dimensionOf, type Dimension } from './dimension.js'
 import { QuantityError } from './error.js'
 import { GrammarError, parseQuantityTree, parseUnitTree } from './grammar.js'
-import { add, equal, negate, one, type Rational } from './rational.js'
+import { add, negate, one, type Rational } from './rational.js'
 import { checkSlips } from './slips.js'
-import type { NumberNode, QuantityNode, Span, UnitNode } from './tree.js'
+import { settleSpread } from './spread.js'
+import type { QuantityNode } from './tree.js'
 import { factorOf, meaningOfUnit, unity, type Unit } from './unit-meaning.js'
 
 /** A number with its unit as a person wrote it. */
@@ -90,14 +92,18 @@ function unreadable(text: string, offset: number): QuantityError {
 }
 
 function meaningOfQuantity(tree: QuantityNode, text: string): Quantity {
-  const spread = settleDeviation(tree, text)
+  const spread = settleSpread(tree, text)
   const unit = spread.unit === null ? unity : meaningOfUnit(spread.unit, text)
-  const scale = tree.pi === null ? 1 : Number(tree.pi.digits) * Math.PI * (tree.pi.negative ? -1 : 1)
   const shift = tree.ten?.power ?? 0
-  const value = tree.number === null ? scale * factorOf(unit) : scale * scaled(tree.number, unit, shift, text)
+  const number = tree.number === null ? factorOf(unit) : scaled(tree.number, unit, shift, text)
+  const scale = tree.pi === null ? 1 : Number(tree.pi.digits) * Math.PI * (tree.pi.negative ? -1 : 1)
+  // Adding zero turns −0 into 0.
+  const value = scale * number + 0
+  const uncertainty = Math.abs(scale) * spread.uncertainty(unit, number, shift)
+  checkRange(value, uncertainty, text)
   return {
-    value: value + 0,
-    uncertainty: Math.abs(scale) * spread.uncertainty(unit, value / scale, shift),
+    value,
+    uncertainty,
     dimension: unit.dimension,
     cycles: tree.pi === null ? unit.cycles : add(unit.cycles, negate(one)),
     text: text.trim(),
@@ -106,119 +112,10 @@ function meaningOfQuantity(tree: QuantityNode, text: string): Quantity {
   }
 }
 
-interface Spread {
-  readonly unit: UnitNode | null
-  /** In the coherent unit, from the unit, the value before a factor 2π, and a power of ten outside the brackets. */
-  readonly uncertainty: (unit: Unit, value: number, shift: number) => number
+function checkRange(value: number, uncertainty: number, text: string): void {
+  if (Number.isFinite(value) && Number.isFinite(uncertainty)) return
+  throw new QuantityError(`\`${text.trim()}\` is beyond the numbers that are read, 1.7e308 in SI units`, 0, text.length)
 }
-
-/** Decides which unit belongs to the number and what the uncertainty is. */
-function settleDeviation(tree: QuantityNode, text: string): Spread {
-  const { number, deviation } = tree
-  if (number === null || deviation === null) {
-    return { unit: tree.unit, uncertainty: unit => (number === null ? 0 : concise(number, unit, text)) }
-  }
-  for (const twice of [
-    number.bracket === null ? null : number,
-    deviation.number.bracket === null ? null : deviation.number,
-  ]) {
-    if (twice !== null) throw refuse(twice, text, 'states a second uncertainty; keep one of the two')
-  }
-  if (tree.bracketed || tree.unit === null) return sharedUnit(tree, text)
-  return unitsOfTheirOwn(tree, text)
-}
-
-/** `3.1 ± 0.2 ng` and `(3.1 ± 0.2) ng`. */
-function sharedUnit(tree: QuantityNode, text: string): Spread {
-  const [number, deviation] = [
-    tree.number as NumberNode,
-    tree.deviation as { number: NumberNode; unit: UnitNode | null },
-  ]
-  const unit = tree.bracketed ? tree.unit : deviation.unit
-  if (!tree.bracketed) {
-    const whole: Span = { start: number.start, end: unit?.end ?? deviation.number.end }
-    if (unit !== null && isRatio(unit, text))
-      throw refuse(whole, text, `may be read in two ways; ${ratioRemedy(number, deviation.number, text, unit)}`)
-    if (tree.pi !== null)
-      throw refuse(
-        whole,
-        text,
-        `wants brackets behind a factor π; write \`(${slice(number, text)} ± ${slice(deviation.number, text)})\``,
-      )
-    if (deviation.number.spelled === 'ten' && number.spelled !== 'ten') {
-      throw refuse(whole, text, 'wants brackets before its power of ten; write it like `(3.1 ± 0.2) × 10^-12 kg`')
-    }
-  }
-  return { unit, uncertainty: (meaning, _value, shift) => Math.abs(scaled(deviation.number, meaning, shift, text)) }
-}
-
-function ratioRemedy(number: NumberNode, deviation: NumberNode, text: string, unit: UnitNode): string {
-  const symbol = slice(unit, text)
-  const [a, b] = [slice(number, text), slice(deviation, text)]
-  return `write \`(${a} ± ${b}) ${symbol}\` for both in ${symbol}, or both as plain numbers`
-}
-
-/** `5.2 MHz ± 1 %` and `5.2 MHz ± 40 kHz`. */
-function unitsOfTheirOwn(tree: QuantityNode, text: string): Spread {
-  const deviation = tree.deviation as { number: NumberNode; unit: UnitNode | null }
-  const [unit, own] = [tree.unit as UnitNode, deviation.unit]
-  const whole: Span = { start: deviation.number.start, end: own?.end ?? deviation.number.end }
-  if (own === null)
-    throw refuse(
-      whole,
-      text,
-      `has no unit; write \`± ${slice(deviation.number, text)} ${slice(unit, text)}\` or a part in %`,
-    )
-  const [main, second] = [meaningOfUnit(unit, text), meaningOfUnit(own, text)]
-  if (isRatio(own, text)) {
-    if (isDimensionless(main.dimension)) {
-      throw refuse(
-        whole,
-        text,
-        `may be a part of the value or be added to it; ${ratioRemedy(tree.number as NumberNode, deviation.number, text, unit)}`,
-      )
-    }
-    return { unit, uncertainty: (_unit, value) => Math.abs(value * scaled(deviation.number, second, 0, text)) }
-  }
-  if (!equalDimensions(main.dimension, second.dimension) || !equal(main.cycles, second.cycles)) {
-    throw refuse(whole, text, `is of another kind than the value; write it in \`${slice(unit, text)}\` or in %`)
-  }
-  if (tree.pi !== null)
-    throw refuse(whole, text, 'may stand inside or outside the factor π; write it like `2π × (3.0 ± 0.1) MHz` or in %')
-  return { unit, uncertainty: () => Math.abs(scaled(deviation.number, second, 0, text)) }
-}
-
-function isRatio(unit: UnitNode, text: string): boolean {
-  return ['%', '‰', 'ppm', 'ppb'].includes(slice(unit, text))
-}
-
-/** Digits in brackets: in the last digits of the number, or with a point the uncertainty itself. */
-function concise(number: NumberNode, unit: Unit, text: string): number {
-  if (number.bracket === null) return 0
-  const decimals = number.bracket.includes('.') ? 0 : (number.digits.split('.')[1]?.length ?? 0)
-  return decimal(number.bracket, number.exponent - decimals, unit, number, text)
-}
-
-function scaled(number: NumberNode, unit: Unit, shift: number, text: string): number {
-  return decimal((number.negative ? '-' : '') + number.digits, number.exponent + shift, unit, number, text)
-}
-
-/** Digits · 10^exponent · unit, rounded once where the unit is a power of ten. */
-function decimal(digits: string, exponent: number, unit: Unit, span: Span, text: string): number {
-  const whole = unit.ten.denominator === 1
-  const tens = exponent + (whole ? unit.ten.numerator : 0)
-  const value = Number(`${digits}e${tens}`) * (whole ? unit.factor : factorOf(unit))
-  const plain = Number(`${digits}e${exponent}`)
-  const written = /[1-9]/.test(digits)
-  const tiny = written && [value, plain].some(each => Math.abs(each) < smallestNormal)
-  if (!Number.isFinite(value) || !Number.isFinite(plain))
-    throw refuse(span, text, `is too large a number; at most 1.7e308 in SI units is read`)
-  if (tiny) throw refuse(span, text, 'is too small a number; at least 2.3e-308 in SI units is read, or 0')
-  return value
-}
-
-/** Below it doubles lose digits, and 1e-400 is 0. */
-const smallestNormal = 2 ** -1022
 
 /** `-60 dBm` is a power: 1 mW · 10^(L/10). */
 function readPowerLevel(text: string): Quantity | null {
@@ -243,12 +140,4 @@ function readPowerLevel(text: string): Quantity | null {
     unitText: 'dBm',
     unitFactor: 1e-3,
   }
-}
-
-function slice(span: Span, text: string): string {
-  return text.slice(span.start, span.end)
-}
-
-function refuse(span: Span, text: string, remedy: string): QuantityError {
-  return new QuantityError(`\`${slice(span, text)}\` ${remedy}`, span.start, span.end - span.start)
 }

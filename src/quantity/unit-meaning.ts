@@ -1,8 +1,10 @@
 import { dimensionless, multiplyDimensions, raiseDimension, type Dimension } from './dimension.js'
-import { QuantityError } from './error.js'
+import { QuantityError, refusePiece } from './error.js'
+import { readExponent } from './exponent.js'
 import { add, multiply, negate, one, rational, toNumber, toText, zero, type Rational } from './rational.js'
 import type { PowerNode, Span, TermNode, UnitNode } from './tree.js'
-import { lookUpUnit, readExponent, suggestUnits } from './units.js'
+import { suggestUnits } from './suggest.js'
+import { lookUpUnit } from './units.js'
 
 /** A product of units: 1 of it is factor · 10^ten of the coherent SI unit. */
 export interface Unit {
@@ -20,10 +22,13 @@ const half = rational(1, 2)
 /** Gives a parsed unit its meaning; `text` is what the places in the tree refer to. */
 export function meaningOfUnit(node: UnitNode, text: string): Unit {
   try {
-    return product(node, text)
+    const unit = product(node, text)
+    const factor = factorOf(unit)
+    if (Number.isFinite(factor) && factor >= 2 ** -1022) return unit
+    throw refusePiece(node, text, 'is beyond the numbers that are read; write a smaller power or another prefix')
   } catch (error) {
     if (!(error instanceof RangeError)) throw error
-    throw refuse(node, text, 'has an exponent beyond exact reckoning; write a simpler unit')
+    throw refusePiece(node, text, 'has an exponent beyond exact reckoning; write a simpler unit')
   }
 }
 
@@ -82,13 +87,13 @@ function meaningOfSymbol(symbol: string, span: Span, text: string): Unit {
   if (unit !== null) return { ...unit, ten: rational(unit.ten) }
   const place: Span = { start: span.start, end: span.start + symbol.length }
   if (symbol === '°C' || symbol === '°F') {
-    throw refuse(place, text, 'has a zero point of its own; write the temperature in `K`')
+    throw refusePiece(place, text, 'has a zero point of its own; write the temperature in `K`')
   }
   if (symbol === 'dBm')
-    throw refuse(place, text, 'stands alone behind its number, such as `-60 dBm`; write other units in `W`')
-  if (symbol === 'sqrt') throw refuse(place, text, 'wants brackets; write `sqrt(Hz)` or `√Hz`')
+    throw refusePiece(place, text, 'stands alone behind its number, such as `-60 dBm`; write other units in `W`')
+  if (symbol === 'sqrt') throw refusePiece(place, text, 'wants brackets; write `sqrt(Hz)` or `√Hz`')
   const suggestion = suggestUnits(symbol)
-  throw refuse(
+  throw refusePiece(
     place,
     text,
     suggestion === null
@@ -100,7 +105,7 @@ function meaningOfSymbol(symbol: string, span: Span, text: string): Unit {
 function meaningOfPower(node: PowerNode, text: string): Rational {
   const exponent = readExponent(node.sign, node.over, node.under)
   if (exponent !== null) return exponent
-  throw refuse(
+  throw refusePiece(
     node,
     text,
     'is no exponent that is read; write a small whole number or a fraction, such as `^2` or `^(-1/2)`',
@@ -124,8 +129,4 @@ function raise(a: Unit, power: Rational): Unit {
     dimension: raiseDimension(a.dimension, power),
     cycles: multiply(a.cycles, power),
   }
-}
-
-function refuse(span: Span, text: string, remedy: string): QuantityError {
-  return new QuantityError(`\`${text.slice(span.start, span.end)}\` ${remedy}`, span.start, span.end - span.start)
 }

@@ -1,6 +1,5 @@
-import { distance } from 'fastest-levenshtein'
 import { dimensionless, dimensionOf, type Dimension } from './dimension.js'
-import { one, rational, zero, type Rational } from './rational.js'
+import { one, zero, type Rational } from './rational.js'
 
 /** One symbol, prefix included: 1 of it is factor · 10^ten of the coherent SI unit. */
 export interface UnitMeaning {
@@ -135,52 +134,12 @@ const entries: ReadonlyMap<string, Entry> = new Map<string, Entry>([
   ['arcmin', fixed(dimensionless, Math.PI / 180 / 60)],
   ['arcsec', fixed(dimensionless, Math.PI / 180 / 3600)],
   ['%', fixed(dimensionless, 1, -2)],
-  ['‰', fixed(dimensionless, 1, -3)],
   ['ppm', fixed(dimensionless, 1, -6)],
   ['ppb', fixed(dimensionless, 1, -9)],
   ['quanta', fixed(dimensionless)],
   ['photons', fixed(dimensionless)],
   ['phonons', fixed(dimensionless)],
   ['dB', fixed(dimensionOf({ level: 1 }))],
-])
-
-const spelledOut: ReadonlyMap<string, string> = new Map([
-  ['hertz', 'Hz'],
-  ['cps', 'Hz'],
-  ['newton', 'N'],
-  ['newtons', 'N'],
-  ['meter', 'm'],
-  ['meters', 'm'],
-  ['metre', 'm'],
-  ['metres', 'm'],
-  ['micron', 'µm'],
-  ['microns', 'µm'],
-  ['sec', 's'],
-  ['second', 's'],
-  ['seconds', 's'],
-  ['gram', 'g'],
-  ['grams', 'g'],
-  ['gr', 'g'],
-  ['kilogram', 'kg'],
-  ['kilograms', 'kg'],
-  ['kelvin', 'K'],
-  ['watt', 'W'],
-  ['watts', 'W'],
-  ['volt', 'V'],
-  ['volts', 'V'],
-  ['pascal', 'Pa'],
-  ['joule', 'J'],
-  ['ohms', 'Ω'],
-  ['degree', '°'],
-  ['degrees', '°'],
-  ['radian', 'rad'],
-  ['radians', 'rad'],
-  ['percent', '%'],
-  ['hour', 'h'],
-  ['hours', 'h'],
-  ['day', 'd'],
-  ['amu', 'u'],
-  ['cc', 'cm^3'],
 ])
 
 /** Makes one spelling of the twin code points: both micro signs, both ohms, both ångströms. */
@@ -201,55 +160,7 @@ export function lookUpUnit(written: string): UnitMeaning | null {
   return null
 }
 
-/** The symbol that somebody may have meant, ready to print: `` `kHz` ``, `` `mHz` or `MHz` ``; null where none is near. */
-export function suggestUnits(written: string): string | null {
-  const symbol = canonicalSymbol(written)
-  const word = spelledOut.get(symbol.toLowerCase())
-  if (word !== undefined) return `\`${word}\``
-  const micro = symbol.startsWith('u') ? `µ${symbol.slice(1)}` : ''
-  if (lookUpUnit(micro) !== null) return `\`${micro}\``
-  const known = knownSymbols()
-  const sameLetters = known.filter(candidate => candidate.toLowerCase() === symbol.toLowerCase())
-  if (sameLetters.length > 0) return joinWords(sameLetters.slice(0, 3))
-  return nearest(symbol, known)
-}
-
-function nearest(symbol: string, known: readonly string[]): string | null {
-  const reach = symbol.length <= 3 ? 1 : 2
-  let best: string | null = null
-  let least = reach + 1
-  for (const candidate of known) {
-    const steps = distance(symbol, candidate)
-    if (steps < least && steps < candidate.length) [best, least] = [candidate, steps]
-  }
-  return best === null ? null : `\`${best}\``
-}
-
-/** Bare symbols first, then everyday prefixes, so that the plainest of equally near words is named. */
-function knownSymbols(): string[] {
-  const everyday = ['k', 'M', 'G', 'm', 'µ', 'n', 'p', 'f', 'a', 'z', 'T', 'P', 'c']
-  const prefixable = [...entries].filter(([, entry]) => entry.prefixable).map(([symbol]) => symbol)
-  const prefixed = everyday.flatMap(prefix => prefixable.map(symbol => prefix + symbol))
-  return [...entries.keys(), ...prefixed]
-}
-
-function joinWords(words: readonly string[]): string {
-  return words.map(word => `\`${word}\``).join(' or ')
-}
-
-/** Exponents that a person may write: bounded, so that products of many stay exact. */
-export const largestExponent = { numerator: 99, denominator: 12 } as const
-
-/** Exact value of a written exponent (`0.5`, `1` over `2`); null where it is out of bounds. */
-export function readExponent(sign: string, over: string, under: string): Rational | null {
-  const [whole, decimals = ''] = over.split('.')
-  const [underWhole, underDecimals = ''] = under.split('.')
-  if (over.length > 8 || under.length > 8) return null
-  const numerator = Number(whole + decimals) * 10 ** underDecimals.length
-  const denominator = Number(underWhole + underDecimals) * 10 ** decimals.length
-  if (denominator === 0) return null
-  const exponent = rational(sign === '-' ? -numerator : numerator, denominator)
-  const inside =
-    Math.abs(exponent.numerator) <= largestExponent.numerator && exponent.denominator <= largestExponent.denominator
-  return inside ? exponent : null
+/** All symbols without prefix, and whether one may stand before them. */
+export function unitSymbols(): { readonly symbol: string; readonly prefixable: boolean }[] {
+  return [...entries].map(([symbol, { prefixable }]) => ({ symbol, prefixable }))
 }

@@ -1,0 +1,41 @@
+import { parseUnitTree } from './grammar.js'
+import { canonicalSymbol } from './units.js'
+import type { PowerNode, TermNode, UnitNode } from './tree.js'
+
+/** A unit in TeX for KaTeX: `aN/√Hz` becomes `\mathrm{aN}/\sqrt{\mathrm{Hz}}`; empty for a plain number. */
+export function unitTex(unit: string): string {
+  const trimmed = unit.trim()
+  return trimmed === '' || trimmed === '1' ? '' : product(parseUnitTree(trimmed))
+}
+
+function product(node: UnitNode): string {
+  const tail = node.tail.map(({ operator, term: factor }) => (operator === '/' ? '/' : '\\,') + term(factor))
+  return (node.slash ? '1/' : '') + term(node.head) + tail.join('')
+}
+
+function term(node: TermNode): string {
+  switch (node.type) {
+    case 'one':
+      return '1'
+    case 'root':
+      return `\\sqrt{${node.of.type === 'group' ? product(node.of.unit) : term(node.of)}}`
+    case 'group':
+      return (node.root ? `\\sqrt{${product(node.unit)}}` : `(${product(node.unit)})`) + power(node.power)
+    case 'symbol':
+      return symbolTex(canonicalSymbol(node.symbol)) + power(node.power)
+  }
+}
+
+function power(node: PowerNode | null): string {
+  if (node === null) return ''
+  return `^{${node.sign}${node.over}${node.under === '1' ? '' : `/${node.under}`}}`
+}
+
+/** KaTeX has no upright micro sign: `\mu` is the nearest. The degree sign is a raised ring. */
+function symbolTex(symbol: string): string {
+  if (symbol === '%') return '\\%'
+  if (symbol === 'Å') return '\\text{Å}'
+  if (symbol === '°') return '{}^{\\circ}'
+  const [, micro, letters, ohm] = /^(µ?)(.*?)(Ω?)$/u.exec(symbol) ?? ['', '', symbol, '']
+  return (micro && '\\mu ') + (letters && `\\mathrm{${letters}}`) + (ohm && '\\Omega')
+}
