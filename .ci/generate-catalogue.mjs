@@ -7,11 +7,15 @@ const catalogue = new URL('../src/catalogue/', import.meta.url)
 
 const head = '// Generated from the folder beside it by .ci/generate-catalogue.mjs; do not edit.\n'
 
-/** `free-mass` → `freeMass`, `loss` → `loss`. */
+/**
+ * `free-mass` → `freeMass`, `loss` → `loss`.
+ * @param {string} kind
+ */
 function identifier(kind) {
-  return kind.replace(/-([a-z0-9])/g, (_, letter) => letter.toUpperCase())
+  return kind.replace(/-([a-z0-9])/g, (/** @type {string} */ _, /** @type {string} */ letter) => letter.toUpperCase())
 }
 
+/** @param {string} folder */
 function kindsIn(folder) {
   const files = readdirSync(new URL(`${folder}/`, catalogue))
   return files
@@ -20,10 +24,12 @@ function kindsIn(folder) {
     .sort()
 }
 
+/** @param {string} folder @param {string} name @param {readonly string[]} kinds */
 function imports(folder, name, kinds) {
   return kinds.map(kind => `import { ${name} as ${identifier(kind)} } from './${folder}/${kind}.js'\n`).join('')
 }
 
+/** @param {readonly string[]} kinds */
 function entries(kinds) {
   return kinds.map(kind => `  ${/-/.test(kind) ? `'${kind}': ${identifier(kind)}` : identifier(kind)},\n`).join('')
 }
@@ -71,6 +77,7 @@ export function generate() {
   ])
 }
 
+/** @param {string} file */
 function current(file) {
   try {
     return readFileSync(new URL(file, catalogue), 'utf8')
