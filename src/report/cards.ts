@@ -1,0 +1,146 @@
+import type { Declaration } from '../catalogue/declaration.js'
+import type { Assessment } from '../model/assessment.js'
+import type { Parameters } from '../model/budget.js'
+import type { Family, LineCurve, SourceCurve } from '../model/evaluation.js'
+import { declarationOf } from './catalogue.js'
+import { claimedSources, signedDensity } from './contributions.js'
+import { densityText, percentText, texOf } from './numbers.js'
+import { wordAt } from './slots.js'
+import { substitute } from './substitution.js'
+import { symbolRows, type SymbolRow } from './symbols.js'
+import { termRow, type TermRow } from './terms.js'
+
+/** An equation of the catalogue, and the same with this budget's numbers where it has a closed form. */
+export interface CardEquation {
+  readonly name: string
+  readonly tex: string
+  readonly numbers: string | null
+}
+
+/** Everything a report says about one line of the budget. */
+export interface EquationCard {
+  readonly id: string
+  readonly title: string
+  readonly family: Family
+  readonly signed: boolean
+  readonly value: string
+  readonly share: string
+  readonly about: string
+  readonly evidence: string
+  readonly equations: readonly CardEquation[]
+  readonly terms: readonly TermRow[]
+  readonly symbols: readonly SymbolRow[]
+  /** Titles and words of the kinds behind it. */
+  readonly kinds: readonly { readonly kind: string; readonly title: string; readonly validity: string }[]
+  /** Keys of the catalogue's references. */
+  readonly references: readonly string[]
+}
+
+/** One card a line, in the order of the file; values at the reference frequency. */
+export function equationCards(assessment: Assessment): readonly EquationCard[] {
+  return assessment.atReference.lines.map(line => equationCard(line, assessment))
+}
+
+interface Owner {
+  readonly id: string
+  readonly declaration: Declaration
+  readonly parameters: Parameters
+}
+
+function equationCard(line: LineCurve, assessment: Assessment): EquationCard {
+  const { budget, atReference, unit } = assessment
+  const spec = budget.lines.find(each => each.id === line.id)
+  const owners = ownersOf(line, assessment)
+  const declarations = [...new Set(owners.map(owner => owner.declaration))]
+  return {
+    id: line.id,
+    title: line.title,
+    family: line.family,
+    signed: line.signed,
+    value: signedDensity(line.psd[0], unit),
+    share: percentText(line.psd[0] / atReference.total[0]),
+    about: spec?.about ?? '',
+    evidence: spec?.evidence ?? '',
+    equations: line.signed ? [correlation] : cardEquations(line, owners, assessment),
+    terms: line.signed ? [] : line.of.flatMap(claim => termRow(claim, assessment) ?? []),
+    symbols: owners.flatMap(owner => symbolRows(owner, budget)),
+    kinds: declarations.map(({ kind, title, validity }) => ({ kind, title, validity })),
+    references: [...new Set(declarations.flatMap(declaration => declaration.references))],
+  }
+}
+
+const correlation: CardEquation = {
+  name: 'correlation',
+  tex: 'S^{\\mathrm{cor}} = \\frac{4}{|R|^2}\\,\\mathrm{Re}\\left(t_{\\mathrm{imp}}V_j f^\\dagger R^*\\right)',
+  numbers: null,
+}
+
+function ownersOf(line: LineCurve, { budget, atReference }: Assessment): readonly Owner[] {
+  const ids = [...new Set(claimedSources(line, atReference).map(source => source.owner))]
+  return ids.flatMap(id => {
+    const component = budget.components.find(each => each.id === id)
+    const claims = budget.lines.find(each => each.id === id)?.claims
+    const owner = component ?? (claims !== undefined && 'kind' in claims ? claims : null)
+    const declaration = owner === null ? null : declarationOf(owner.kind)
+    return owner === null || declaration === null ? [] : [{ id, declaration, parameters: owner.parameters }]
+  })
+}
+
+function cardEquations(line: LineCurve, owners: readonly Owner[], assessment: Assessment): readonly CardEquation[] {
+  const found = line.of.flatMap(claim => {
+    const [id, part] = claim.split(' ')
+    const source = assessment.atReference.sources.find(each => each.id === id)
+    const owner = owners.find(each => each.id === source?.owner)
+    return source === undefined || owner === undefined ? [] : sourceEquations(source, owner, part ?? null, assessment)
+  })
+  return found.filter(
+    (each, i) => found.findIndex(other => other.tex === each.tex && other.numbers === each.numbers) === i,
+  )
+}
+
+/** The kind's equations for this part or channel; all of them where none is named after it. */
+function sourceEquations(
+  source: SourceCurve,
+  owner: Owner,
+  part: string | null,
+  assessment: Assessment,
+): readonly CardEquation[] {
+  const { equations } = owner.declaration
+  const names = wantedNames(source, owner, part)
+  const wanted = equations.filter(equation => names.includes(equation.name))
+  return (wanted.length > 0 ? wanted : equations).map(({ name, tex }) => ({
+    name,
+    tex,
+    numbers: numbersIn(name, tex, source, owner, assessment),
+  }))
+}
+
+function wantedNames(source: SourceCurve, owner: Owner, part: string | null): readonly string[] {
+  if (part === 'heating') return ['imprecision', 'back-action']
+  if (part !== null) return [part]
+  const channel = source.channel ?? ''
+  const law = wordAt(owner.parameters, 'losses', channel, 'law') ?? wordAt(owner.parameters, 'law') ?? 'viscous'
+  return [`${law} bath`, `${channel} noise`, channel]
+}
+
+function numbersIn(
+  name: string,
+  tex: string,
+  source: SourceCurve,
+  owner: Owner,
+  { budget, atReference }: Assessment,
+): string | null {
+  if (source.ownUnit === 'quanta') return null
+  const unit = source.ownUnit === 'N²/Hz' ? 'N/√Hz' : 'm/√Hz'
+  const ground = {
+    budget,
+    unit,
+    parameters: owner.parameters,
+    channel: source.channel,
+    frequency: atReference.points.frequency[0],
+  }
+  const put = substitute(name, ground, source.own[0])
+  if (put === null) return null
+  const left = tex.split('=')[0].replace('(f)', '')
+  return `${left} = ${put.tex} = \\left(${texOf(densityText(Math.sqrt(put.value), unit))}\\right)^2`
+}

@@ -1,0 +1,117 @@
+import type { Assessment, At } from '../model/assessment.js'
+import { decibelText, densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
+import { inSentence, lineTitle, listText } from './titles.js'
+
+/** A number that a report opens with. */
+export interface Headline {
+  readonly id: string
+  readonly label: string
+  readonly value: string
+  readonly note: string
+}
+
+/** The first sentence: its number apart, because it is set larger. */
+export interface Opening {
+  readonly value: string
+  readonly rest: string
+  /** The whole sentence, for the front page and for machines. */
+  readonly sentence: string
+}
+
+/** How good the sensor is, where, how far from the quantum limit, and what sets it. */
+export function opening(assessment: Assessment): Opening {
+  const { best } = assessment.headlines
+  const value = densityText(best.asd, assessment.unit)
+  const margin = best.totalMargin === null ? '' : `, ${limitText(best.totalMargin)}`
+  const rest = `at ${frequencyText(best.frequency)}${margin}, set by ${setBy(assessment, best)}.`
+  return { value, rest, sentence: `Best ${value} ${rest}` }
+}
+
+function limitText(margin: number): string {
+  const text = marginText(margin)
+  return text === 'at' ? 'at the standard quantum limit' : `${text} the standard quantum limit`
+}
+
+/** The lines that make up three quarters of the total between them, three at most. */
+function setBy(assessment: Assessment, at: At): string {
+  const named: string[] = []
+  let sum = 0
+  for (const { line, share } of at.shares) {
+    if (named.length === 3 || sum >= 0.75 || share <= 0) break
+    named.push(`${inSentence(lineTitle(assessment, line))} (${percentText(share)})`)
+    sum += share
+  }
+  return listText(named)
+}
+
+/** Every headline number, in the order of a reader's questions. */
+export function headlineNumbers(assessment: Assessment): readonly Headline[] {
+  const { headlines } = assessment
+  return [
+    bestHeadline(assessment),
+    ...(headlines.reference === null ? [] : [referenceHeadline(assessment, headlines.reference)]),
+    ...marginHeadlines(headlines.reference ?? headlines.best),
+    largestHeadline(assessment, headlines.reference ?? headlines.best),
+    {
+      id: 'band',
+      label: 'Half-power band',
+      value: frequencyText(headlines.halfPowerBand.to - headlines.halfPowerBand.from, 3),
+      note: `total power at most twice the best, ${rangeText(headlines.halfPowerBand.from, headlines.halfPowerBand.to)}`,
+    },
+    ...occupancyHeadlines(assessment),
+  ]
+}
+
+function bestHeadline({ headlines: { best }, unit }: Assessment): Headline {
+  const value = densityText(best.asd, unit)
+  return { id: 'best', label: 'Best sensitivity', value, note: `at ${frequencyText(best.frequency)}` }
+}
+
+function referenceHeadline(assessment: Assessment, reference: At): Headline {
+  return {
+    id: 'reference',
+    label: 'At the reference frequency',
+    value: densityText(reference.asd, assessment.unit),
+    note: `at ${frequencyText(reference.frequency)}`,
+  }
+}
+
+function marginHeadlines(at: At): readonly Headline[] {
+  const where = `10 log₁₀ of the power ratio to the standard quantum limit at ${frequencyText(at.frequency)}`
+  const margin = (id: string, label: string, value: number | null): readonly Headline[] =>
+    value === null ? [] : [{ id, label, value: decibelText(value), note: where }]
+  return [
+    ...margin('total-margin', 'Margin of the total', at.totalMargin),
+    ...margin('added-margin', 'Margin of the added noise', at.addedMargin),
+  ]
+}
+
+function largestHeadline(assessment: Assessment, at: At): Headline {
+  const [largest] = at.shares
+  return {
+    id: 'largest',
+    label: 'Largest contribution',
+    value: lineTitle(assessment, largest.line),
+    note: `${percentText(largest.share)} of the total power at ${frequencyText(at.frequency)}`,
+  }
+}
+
+function occupancyHeadlines({ modes }: Assessment): readonly Headline[] {
+  return modes.flatMap(mode =>
+    mode.finalOccupancy === null
+      ? []
+      : [
+          {
+            id: `occupancy-${mode.id}`,
+            label: `Final occupancy of ${mode.id}`,
+            value: occupancyText(mode.finalOccupancy),
+            note: `quanta with the light on; the bath alone has ${occupancyText(mode.thermalOccupancy)}`,
+          },
+        ],
+  )
+}
+
+/** `26.4`, `0.31`, `6.87 × 10⁴`. */
+export function occupancyText(quanta: number): string {
+  return densityText(quanta, '').trim()
+}

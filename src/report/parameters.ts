@@ -1,0 +1,37 @@
+import type { Assessment } from '../model/assessment.js'
+import type { Root } from '../model/budget.js'
+import { siText, siUncertaintyText } from './si-values.js'
+
+/** One value of the file and what it rests on. */
+export interface ParameterRow {
+  readonly id: string
+  readonly written: string
+  readonly si: string
+  readonly uncertainty: string
+  readonly evidence: string
+  readonly assumed: boolean
+  readonly about: string
+  readonly measured: string
+  readonly place: string
+}
+
+/** Every value that the budget's file states, in its order there. */
+export function parameterRows({ budget }: Assessment): readonly ParameterRow[] {
+  return budget.roots
+    .toSorted((a, b) => a.place.line - b.place.line || a.place.column - b.place.column)
+    .map(parameterRow)
+}
+
+function parameterRow(root: Root): ParameterRow {
+  return {
+    id: root.id,
+    written: root.text,
+    si: siText(root.value, root.dimension),
+    uncertainty: root.uncertainty > 0 ? siUncertaintyText(root) : '',
+    evidence: root.evidence ?? '',
+    assumed: root.evidence === 'assumed',
+    about: root.about ?? '',
+    measured: root.measured ?? '',
+    place: `${root.place.file}:${root.place.line}`,
+  }
+}

@@ -1,0 +1,79 @@
+import type { Assessment } from '../model/assessment.js'
+import { bandRows, type BandRow } from './bands.js'
+import { equationCards, type EquationCard } from './cards.js'
+import { referenceText } from './catalogue.js'
+import { cautions, type Caution } from './cautions.js'
+import { contributionRows, limitRows, type ContributionRow, type LimitRow } from './contributions.js'
+import { evidenceOf, type Evidence } from './evidence.js'
+import { headlineNumbers, opening, type Headline, type Opening } from './headlines.js'
+import { frequencyText, rangeText } from './numbers.js'
+import { parameterRows, type ParameterRow } from './parameters.js'
+import { cavityBlocks, modeBlocks, type StateBlock } from './state.js'
+
+/** Everything that a report prints, as plain data with finished texts; TeX stays TeX until the template typesets it. */
+export interface ReportView {
+  readonly sensor: string
+  readonly title: string
+  /** Markdown, or empty. */
+  readonly summary: string
+  readonly revision: string
+  readonly file: string
+  readonly quantity: string
+  readonly unit: string
+  readonly readout: string
+  readonly band: string
+  /** Where the tables' values are taken. */
+  readonly referenceFrequency: string
+  /** Whether the file states that frequency; otherwise it is the best one. */
+  readonly referenceStated: boolean
+  readonly opening: Opening
+  readonly headlines: readonly Headline[]
+  readonly bands: readonly BandRow[]
+  readonly contributions: readonly ContributionRow[]
+  readonly limits: readonly LimitRow[]
+  readonly cards: readonly EquationCard[]
+  readonly parameters: readonly ParameterRow[]
+  readonly modes: readonly StateBlock[]
+  readonly cavities: readonly StateBlock[]
+  readonly evidence: Evidence
+  readonly warnings: readonly string[]
+  readonly cautions: readonly Caution[]
+  /** In the order of first mention; a card's number is the index + 1. */
+  readonly bibliography: readonly { readonly key: string; readonly text: string }[]
+}
+
+/** The whole report of one budget. */
+export function reportView(assessment: Assessment): ReportView {
+  const { budget } = assessment
+  const cards = equationCards(assessment)
+  return {
+    sensor: budget.sensor,
+    title: budget.title,
+    summary: budget.summary ?? '',
+    revision: budget.revision,
+    file: budget.file,
+    quantity: budget.measurand.quantity,
+    unit: assessment.unit,
+    readout: budget.readout,
+    band: rangeText(budget.band.low, budget.band.high),
+    referenceFrequency: frequencyText(assessment.atReference.points.frequency[0]),
+    referenceStated: budget.reference !== null,
+    opening: opening(assessment),
+    headlines: headlineNumbers(assessment),
+    bands: bandRows(assessment),
+    contributions: contributionRows(assessment),
+    limits: limitRows(assessment),
+    cards,
+    parameters: parameterRows(assessment),
+    modes: modeBlocks(assessment),
+    cavities: cavityBlocks(assessment),
+    evidence: evidenceOf(assessment),
+    warnings: [...new Set([...budget.warnings, ...assessment.warnings].map(warningText))],
+    cautions: cautions(assessment),
+    bibliography: [...new Set(cards.flatMap(card => card.references))].map(key => ({ key, text: referenceText(key) })),
+  }
+}
+
+function warningText({ place, message }: Assessment['warnings'][number]): string {
+  return `${place.file}:${place.line}:${place.column}: ${message}`
+}

@@ -1,0 +1,39 @@
+import type { Assessment } from '../model/assessment.js'
+import type { Problem } from '../model/problem.js'
+import { renderSite } from './render.js'
+import { publish } from './publish.js'
+
+/** What the site says about itself; everything else comes from the budgets. */
+export interface SiteProject {
+  /** Folder that the budgets' paths are relative to. */
+  readonly root: string
+  readonly title: string
+  /** ISO date (`2026-03-14`) of the commit that is built, or null outside git. */
+  readonly date: string | null
+}
+
+/** One sensor's draft: an assessment, or the problems that stopped it. */
+export interface SensorResult {
+  readonly sensor: string
+  readonly assessment: Assessment | null
+  readonly problems: readonly Problem[]
+}
+
+export interface SiteInput {
+  readonly project: SiteProject
+  readonly results: readonly SensorResult[]
+}
+
+/**
+ * Renders the whole site and publishes it to `outputDir`, whole or not at all.
+ *
+ * Rejects with a `Refusal` where the target holds files that were not made here, and leaves the old site untouched on
+ * every other error.
+ */
+export async function buildSite(
+  input: SiteInput & { readonly outputDir: string },
+): Promise<{ readonly pages: number; readonly outputDir: string }> {
+  const { files, pages } = await renderSite(input)
+  await publish(files, input.outputDir)
+  return { pages, outputDir: input.outputDir }
+}

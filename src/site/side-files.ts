@@ -1,0 +1,20 @@
+import { curvesCsv } from '../report/curves-csv.js'
+import { curvesJson } from '../report/curves-json.js'
+import type { SiteInput } from './build.js'
+import { standaloneFigure } from './pictures.js'
+
+/** The files beside the pages: curves and figure of every report, at both of its addresses. */
+export function sideFiles({ results }: SiteInput): ReadonlyMap<string, string> {
+  const files = new Map<string, string>()
+  for (const { sensor, assessment } of results) {
+    if (assessment === null) continue
+    const own = new Map([
+      ['curves.csv', curvesCsv(assessment)],
+      ['curves.json', curvesJson(assessment)],
+      ['figure.svg', standaloneFigure(assessment)],
+    ])
+    for (const folder of ['draft', assessment.budget.revision])
+      for (const [name, content] of own) files.set(`${sensor}/${folder}/${name}`, content)
+  }
+  return files
+}

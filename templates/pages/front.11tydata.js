@@ -1,0 +1,1 @@
+export default { permalink: '/index.html', up: '' }
