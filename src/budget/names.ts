@@ -1,0 +1,61 @@
+/** What a parameter, component, contribution or port may be called. */
+export const idPattern = '^[a-z][a-z0-9_]{0,59}$'
+const id = new RegExp(idPattern)
+
+/** Names of constants and functions of the expression language, and words that columns and headlines use. */
+const reserved: ReadonlySet<string> = new Set([
+  ...[
+    'pi',
+    'e',
+    'c',
+    'h',
+    'hbar',
+    'i',
+    'inf',
+    'nan',
+    'f',
+    'omega',
+    'k_b',
+    'g_n',
+    'm_u',
+    'm_e',
+    'e_charge',
+    'epsilon_0',
+  ],
+  ...['sqrt', 'exp', 'log', 'ln', 'log10', 'sin', 'cos', 'tan', 'asin', 'acos', 'atan', 'sinh', 'cosh', 'tanh', 'abs'],
+  ...['min', 'max', 'coth', 'pow', 'sinc', 'bessel', 'if', 'to', 'kind', 'of', 'value'],
+  ...['total', 'frequency', 'anchor', 'offset', 'margin', 'occupancy'],
+  // Words that every JavaScript object answers to.
+  ...['constructor', 'prototype'],
+])
+
+/** Why a word cannot be an id: a clause that fits behind the word; null for a good one. */
+export function idFault(word: string): string | null {
+  if (reserved.has(word)) return 'is the name of a constant, a function or a column; choose another'
+  if (id.test(word)) return null
+  const foreign = [...word].find(character => (character.codePointAt(0) ?? 0) > 0x7f)
+  if (foreign !== undefined) {
+    const code = (foreign.codePointAt(0) ?? 0).toString(16).toUpperCase().padStart(4, '0')
+    return `holds the letter U+${code}, which is not one of a to z; a name is made of a–z, 0–9 and _`
+  }
+  if (word.length > 60) return 'is longer than 60 letters'
+  return 'is no name: a name begins with a to z and goes on with a–z, 0–9 and _'
+}
+
+/** Folder names that pages of the site need for themselves. */
+const taken: ReadonlySet<string> = new Set([
+  ...['catalogue', 'conventions', 'changes', 'compare', 'schema', 'assets', 'draft'],
+  ...['con', 'prn', 'aux', 'nul', 'index', 'records', 'data', 'constructor'],
+])
+
+/** Why a folder's name cannot be a sensor; null for a good one. */
+export function sensorFault(name: string): string | null {
+  const folded = name.toLowerCase()
+  if (taken.has(folded)) return `is a name that the site needs for itself; call the sensor something else`
+  if (!/^[A-Za-z0-9][A-Za-z0-9._-]{0,59}$/.test(name) || name.includes('..') || /[.-]$/.test(name))
+    return 'is no name of a sensor: use letters, digits, `.`, `-` and `_`, and begin and end with a letter or digit'
+  return null
+}
+
+/** Dotted numbers: `2.1`, `10`, `1.0.3`. */
+export const revisionPattern = '^[0-9]{1,6}(?:\\.[0-9]{1,6}){0,3}$'

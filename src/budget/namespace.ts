@@ -1,0 +1,41 @@
+import type { Place } from '../model/problem.js'
+import { idFault } from './names.js'
+import type { Issues } from './issues.js'
+import { child, type Tree } from './tree.js'
+
+/** Parameters, components and contributions share one namespace, so that an id means one thing on every page. */
+export function checkNames(root: Tree, issues: Issues): void {
+  const taken = new Map<string, { readonly section: string; readonly place: Place }>()
+  for (const section of ['parameters', 'components', 'contributions']) {
+    const tree = child(root, section)
+    if (tree?.type !== 'map') continue
+    for (const { key, keyPlace } of tree.entries.values()) {
+      checkId(key, keyPlace, issues)
+      const other = taken.get(key)
+      if (other !== undefined)
+        issues.error(
+          'name-taken',
+          keyPlace,
+          `\`${key}\` is already the name of one of the ${other.section} (line ${other.place.line}); choose another`,
+        )
+      taken.set(key, { section, place: keyPlace })
+    }
+  }
+}
+
+/** Ports and loss channels have names too. */
+export function checkPortNames(components: Tree | undefined, issues: Issues): void {
+  if (components?.type !== 'map') return
+  for (const { value } of components.entries.values()) {
+    for (const field of ['ports', 'losses']) {
+      const tree = child(value, field)
+      if (tree?.type !== 'map') continue
+      for (const { key, keyPlace } of tree.entries.values()) checkId(key, keyPlace, issues)
+    }
+  }
+}
+
+function checkId(key: string, place: Place, issues: Issues): void {
+  const fault = idFault(key)
+  if (fault !== null) issues.error('name', place, `\`${key.slice(0, 60)}\` ${fault}`)
+}

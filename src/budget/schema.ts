@@ -1,0 +1,230 @@
+import type { Declaration, DensityField, Exclusive, Field, Fields } from '../catalogue/declaration.js'
+import { declarations } from '../catalogue/declarations.js'
+import { idPattern, revisionPattern } from './names.js'
+
+/** A JSON Schema of the draft-07 subset that editors read best. */
+export interface Schema {
+  readonly [keyword: string]: unknown
+}
+
+export const formatVersion = 1
+
+const name = { type: 'string', pattern: idPattern }
+const text = { type: ['string', 'number'], minLength: 1, maxLength: 2000 }
+const longText = { type: ['string', 'number'], minLength: 1, maxLength: 20_000 }
+const short = { type: ['string', 'number'], minLength: 1, maxLength: 200 }
+const reference = (definition: string): Schema => ({ $ref: `#/definitions/${definition}` })
+
+/** What may stand around a quantity wherever one is allowed. */
+const around = {
+  value: { ...short, description: 'the quantity itself: 3.1(2) ng' },
+  about: { ...text, description: 'what it is' },
+  evidence: { ...text, description: 'what it rests on: a reference, a note, or `assumed`' },
+  measured: {
+    type: 'string',
+    pattern: '^[0-9]{4}-[0-9]{2}-[0-9]{2}$',
+    description: 'date of the measurement: 2026-11-30',
+  },
+}
+
+const quantity: Schema = {
+  type: ['string', 'number', 'object'],
+  minLength: 1,
+  maxLength: 200,
+  properties: around,
+  required: ['value'],
+  additionalProperties: false,
+}
+
+const table: Schema = {
+  type: 'object',
+  description: 'a density from a CSV file of two columns, frequency and density',
+  properties: {
+    file: { ...short, type: 'string', description: 'path from the budget’s folder: data/floor.csv' },
+    skip: { type: 'integer', minimum: 0, maximum: 1000, description: 'lines in front of the first row' },
+    units: { type: 'array', items: { ...short }, minItems: 2, maxItems: 2, description: 'of the columns: [Hz, m/√Hz]' },
+  },
+  required: ['file', 'units'],
+  additionalProperties: false,
+}
+
+const densityKeys = {
+  density: { ...reference('quantity'), description: 'level; its unit tells amplitude (N/√Hz) from power (N²/Hz)' },
+  exponent: { ...reference('quantity'), description: 'exponent of the power density in frequency' },
+  reference: { ...reference('quantity'), description: 'frequency at which the level holds' },
+  table: reference('table'),
+}
+
+/** What every line of the budget may say about itself. */
+const lineKeys = {
+  title: { ...text, description: 'its name on pages' },
+  about: { ...longText, description: 'what it is' },
+  evidence: { ...text, description: 'what it rests on' },
+}
+
+/** The schema of a budget file, from the catalogue's declarations alone. */
+export function budgetSchema(): Schema {
+  return {
+    $schema: 'http://json-schema.org/draft-07/schema#',
+    $id: `budget-${formatVersion}.json`,
+    title: 'Noise budget of a mechanical sensor',
+    type: 'object',
+    properties: rootProperties(),
+    required: ['format', 'title', 'revision', 'measurand', 'readout', 'band', 'components'],
+    additionalProperties: false,
+    definitions: definitions(),
+  }
+}
+
+function rootProperties(): Schema {
+  return {
+    format: { const: formatVersion, description: 'version of the file format' },
+    title: text,
+    summary: { ...longText, description: 'one paragraph for the head of the report' },
+    about: { ...longText, description: 'notes on the sensor' },
+    revision: { type: ['string', 'number'], pattern: revisionPattern, description: 'dotted numbers: 2.1' },
+    measurand: reference('measurand'),
+    readout: { ...name, description: 'the detector whose record is read' },
+    band: { ...short, type: 'string', description: 'where the budget is computed: 1.20 MHz to 1.30 MHz' },
+    reference: { ...reference('quantity'), description: 'frequency at which headlines are given' },
+    parameters: { ...userMap(reference('quantity')), description: 'named values that fields can use' },
+    components: { ...userMap(reference('component')), minProperties: 1, description: 'parts of the signal path' },
+    contributions: { ...userMap(reference('contribution')), description: 'the lines of the budget' },
+    requirements: { ...userMap(reference('requirement')), description: 'bounds that the budget must meet' },
+  }
+}
+
+function definitions(): Schema {
+  const kinds = [...declarations.values()]
+  const result: Record<string, Schema> = { quantity, table, measurand, requirement, claim }
+  result['component'] = byKind(kinds.filter(kind => kind.role === 'component'))
+  result['contribution'] = {
+    if: { type: 'object', required: ['kind'] },
+    then: byKind(kinds.filter(kind => kind.role === 'contribution')),
+    else: reference('claim'),
+  }
+  for (const kind of kinds) result[kind.kind] = kindSchema(kind)
+  return result
+}
+
+const measurand: Schema = {
+  type: 'object',
+  description: 'what the total is referred to',
+  properties: {
+    quantity: { enum: ['force', 'acceleration', 'displacement'] },
+    mode: { ...name, description: 'the one mode that is pushed' },
+    at: { ...name, description: 'pushes as this component senses' },
+    weights: userMap(short),
+  },
+  required: ['quantity'],
+  additionalProperties: false,
+}
+
+const requirement: Schema = {
+  type: 'object',
+  properties: {
+    of: { ...short, description: '`total`, a line, `margin.<limit>` or `occupancy.<mode>`' },
+    at: { ...short, description: 'a frequency' },
+    over: { ...short, description: 'a stretch of the band: 1.2 MHz to 1.3 MHz' },
+    below: short,
+    above: short,
+  },
+  required: ['of'],
+  additionalProperties: false,
+}
+
+const claimed = { type: 'string', pattern: '^[a-z][a-z0-9_]{0,59}(?:\\.[a-z][a-z0-9_]{0,59})?$' }
+
+const claim: Schema = {
+  type: 'object',
+  description: 'a line that gathers noises which the components bring',
+  properties: {
+    of: { type: ['string', 'array'], items: claimed, pattern: claimed.pattern, minItems: 1, maxItems: 100 },
+    part: { enum: ['imprecision', 'back-action', 'heating'] },
+    ...lineKeys,
+  },
+  required: ['of'],
+  additionalProperties: false,
+}
+
+/** `discriminator` makes a validator judge an entry by its own kind only; editors follow the constants. */
+function byKind(kinds: readonly Declaration[]): Schema {
+  return {
+    type: 'object',
+    discriminator: { propertyName: 'kind' },
+    required: ['kind'],
+    oneOf: kinds.map(kind => reference(kind.kind)),
+  }
+}
+
+function kindSchema(kind: Declaration): Schema {
+  const own = groupSchema(kind.fields, kind.exclusive)
+  const common = kind.role === 'contribution' ? lineKeys : {}
+  return {
+    ...own,
+    title: kind.title,
+    description: kind.summary,
+    properties: { kind: { const: kind.kind }, ...(own['properties'] as Schema), ...common },
+    required: ['kind', ...(own['required'] as string[])],
+  }
+}
+
+function groupSchema(fields: Fields, exclusive: readonly Exclusive[] = []): Schema {
+  const properties: Record<string, unknown> = {}
+  const required: string[] = []
+  for (const [key, field] of Object.entries(fields)) {
+    if (isSpread(key, field)) Object.assign(properties, densityKeys)
+    else properties[key] = { ...fieldSchema(field), description: field.meaning }
+    if (field.required === true && !isSpread(key, field)) required.push(key)
+  }
+  const alternatives = exclusive.map(exclusiveSchema)
+  const schema = { type: 'object', properties, required, additionalProperties: false }
+  return alternatives.length === 0 ? schema : { ...schema, allOf: alternatives }
+}
+
+/** A density field that is itself named `density` spreads its keys over the kind. */
+export function isSpread(key: string, field: Field): field is DensityField {
+  return key === 'density' && field.type === 'density'
+}
+
+function exclusiveSchema(exclusive: Exclusive): Schema {
+  const each = exclusive.keys.map(key => ({ type: 'object', required: [key] }))
+  if (exclusive.need === 'exactly one') return { oneOf: each }
+  return { not: { type: 'object', required: exclusive.keys } }
+}
+
+function fieldSchema(field: Field): Schema {
+  switch (field.type) {
+    case 'quantity':
+      return reference('quantity')
+    case 'choice':
+      return { enum: field.options }
+    case 'name':
+      return { type: 'string', pattern: claimed.pattern }
+    case 'key':
+      return name
+    case 'weights':
+      return { ...userMap(reference('quantity')), minProperties: 1 }
+    case 'map':
+      return { ...userMap(groupSchema(field.fields, field.exclusive)), minProperties: 1 }
+    case 'group':
+      return field.shorthand === undefined
+        ? groupSchema(field.fields, field.exclusive)
+        : orQuantity(groupSchema(field.fields, field.exclusive))
+    case 'density':
+      return orQuantity({ type: 'object', properties: densityKeys, required: [], additionalProperties: false })
+  }
+}
+
+/** A group for which a quantity may stand, bare or as `{ value, about, evidence, measured }`. */
+function orQuantity(group: Schema): Schema {
+  return {
+    if: { type: 'object', not: { type: 'object', required: ['value'] } },
+    then: group,
+    else: quantity,
+  }
+}
+
+function userMap(entry: Schema): Schema {
+  return { type: 'object', propertyNames: { pattern: idPattern }, maxProperties: 200, additionalProperties: entry }
+}
