@@ -1,4 +1,6 @@
+import { bisectCenter, quantileSorted } from 'd3-array'
 import type { FigureInput } from './input.js'
+import { indicesBetween } from './indices-between.js'
 
 /** The total's least value over this is the lowest amplitude shown, however small the contributions are. */
 const BELOW_TOTAL = 60
@@ -8,22 +10,35 @@ const PAD_FACTOR = 1.35
 /** No axis is shorter than this factor, nor longer than that one (a zero of the response sends the total to infinity). */
 const SHORTEST = 30
 const LONGEST = 1e14
+/** Curves are judged at so many even steps along the axis, because points crowd at resonances. */
+const COLUMNS = 200
+/** Of these columns a limit may leave the frame through the bottom in this part, a contribution in half. */
+const LIMIT_PART = 0.02
+const LINE_PART = 0.5
+
+/** What a figure shows along its horizontal axis. */
+export interface Shown {
+  readonly x: Float64Array
+  readonly kind: 'linear' | 'log'
+  readonly domain: readonly [number, number]
+}
 
 /**
- * Amplitudes from the lowest to the highest that a figure of the window shows: all of the total, and of the standard
- * quantum limit and the contributions what lies within a factor 60 below the total's least value.
- *
- * @param inWindow tells which points of the evaluation are shown
+ * Amplitudes from the lowest to the highest that a figure shows: all of the total, and of the standard quantum limit and
+ * the contributions what a reader would miss, down to a factor 60 below the total's least value.
  */
-export function amplitudeDomain(input: FigureInput, inWindow: (k: number) => boolean): [number, number] {
-  const total = extent(input.total, inWindow)
+export function amplitudeDomain(input: FigureInput, shown: Shown): [number, number] {
+  const total = extent(input.total, shown)
   if (total === null) return [0.1, 10]
-  const others = [...input.limits.filter(limit => limit.prominent), ...input.lines]
-  const lows = others.map(curve => middle(curve.psd, inWindow)).filter(v => v !== null)
-  const low = Math.max(Math.min(total[0], ...lows), total[0] / BELOW_TOTAL)
-  const high = Math.min(total[1], low * LONGEST)
-  const pad = Math.max(PAD_FACTOR, (high / low) ** PAD_DECADES)
-  return widened(low / pad, high * pad)
+  const columns = columnIndices(shown)
+  const lows = [
+    ...input.limits.filter(limit => limit.prominent).map(limit => low(limit.psd, columns, LIMIT_PART)),
+    ...input.lines.map(line => low(line.psd, columns, LINE_PART)),
+  ]
+  const least = Math.max(Math.min(total[0], ...lows), total[0] / BELOW_TOTAL)
+  const most = Math.min(total[1], least * LONGEST)
+  const pad = Math.max(PAD_FACTOR, (most / least) ** PAD_DECADES)
+  return widened(least / pad, most * pad)
 }
 
 function widened(low: number, high: number): [number, number] {
@@ -31,20 +46,33 @@ function widened(low: number, high: number): [number, number] {
   return [low / missing, high * missing]
 }
 
-/** Least and greatest amplitude. */
-function extent(psd: Float64Array, inWindow: (k: number) => boolean): [number, number] | null {
-  let low = Infinity
-  let high = 0
-  for (let k = 0; k < psd.length; k++) {
-    if (!inWindow(k) || !(psd[k] > 0) || !Number.isFinite(psd[k])) continue
-    low = Math.min(low, psd[k])
-    high = Math.max(high, psd[k])
+/** Least and greatest amplitude inside the window; null where it is nowhere above zero. */
+function extent(psd: Float64Array, { x, domain }: Shown): [number, number] | null {
+  let least = Infinity
+  let most = 0
+  for (const k of indicesBetween(x, domain[0], domain[1])) {
+    if (!(psd[k] > 0) || !Number.isFinite(psd[k])) continue
+    least = Math.min(least, psd[k])
+    most = Math.max(most, psd[k])
   }
-  return high > 0 ? [Math.sqrt(low), Math.sqrt(high)] : null
+  return most > 0 ? [Math.sqrt(least), Math.sqrt(most)] : null
 }
 
-/** Geometric middle of a curve's extent. */
-function middle(psd: Float64Array, inWindow: (k: number) => boolean): number | null {
-  const ends = extent(psd, inWindow)
-  return ends === null ? null : Math.sqrt(ends[0] * ends[1])
+/** Points nearest to even steps of the axis. */
+function columnIndices({ x, kind, domain: [low, high] }: Shown): number[] {
+  return Array.from({ length: COLUMNS }, (_, n) => {
+    const t = (n + 0.5) / COLUMNS
+    return bisectCenter(x, kind === 'log' ? low * (high / low) ** t : low + t * (high - low))
+  })
+}
+
+/** Amplitude below which a curve is in a part of the columns; infinite for a curve that is nowhere drawn. */
+function low(psd: Float64Array, columns: readonly number[], part: number): number {
+  const drawn = columns.map(k => Math.sqrt(Math.abs(psd[k]))).filter(v => v > 0 && Number.isFinite(v))
+  return (
+    quantileSorted(
+      drawn.sort((a, b) => a - b),
+      part,
+    ) ?? Infinity
+  )
 }

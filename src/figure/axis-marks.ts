@@ -5,7 +5,8 @@ import { overlaps, textMark } from './text-box.js'
 import type { Tick } from './ticks.js'
 import type { TypeSizes } from './type-sizes.js'
 
-const MAJOR = 6
+/** Lengths of ticks. */
+export const MAJOR = 6
 const MINOR = 3.5
 
 /** One axis with its scale. */
@@ -20,10 +21,11 @@ export function axisMarks(frame: Box, x: Axis, y: Axis, type: TypeSizes): Mark[]
   const ys = y.plan.ticks.map(tick => ({ tick, at: y.scale.at(tick.value) }))
   const texts = [...apart(xs.map(t => xText(t, frame, type))), ...apart(ys.map(t => yText(t, frame, type)))]
   return [
-    grid(frame, ys.filter(t => t.tick.text !== null).map(t => t.at)),
-    stroke('axis', [
-      [frame.left, frame.top, frame.left, frame.bottom, frame.right, frame.bottom],
-    ]),
+    grid(
+      frame,
+      ys.filter(t => t.tick.text !== null).map(t => t.at),
+    ),
+    stroke('axis', [[frame.left, frame.top, frame.left, frame.bottom, frame.right, frame.bottom]]),
     stroke('tick', [
       ...xs.map(({ tick, at }) => [at, frame.bottom, at, frame.bottom + reach(tick)]),
       ...ys.map(({ tick, at }) => [frame.left - reach(tick), at, frame.left, at]),
@@ -88,7 +90,15 @@ function titles(frame: Box, x: string, y: string, type: TypeSizes): TextMark[] {
   return [
     textMark({ ink, role: 'axis', x: middle, y: below, anchor: 'middle', lines: [x] }, type.axis),
     textMark(
-      { ink, role: 'axis', x: type.axis * 1.05, y: (frame.top + frame.bottom) / 2, anchor: 'middle', lines: [y], turned: true },
+      {
+        ink,
+        role: 'axis',
+        x: type.axis * 1.05,
+        y: (frame.top + frame.bottom) / 2,
+        anchor: 'middle',
+        lines: [y],
+        turned: true,
+      },
       type.axis,
     ),
   ]

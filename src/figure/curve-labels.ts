@@ -1,18 +1,22 @@
 import type { Curve } from './curves.js'
 import { placeInside } from './inside-labels.js'
-import { makeLabel, type Label } from './label.js'
+import { makeLabel } from './label.js'
 import { MARGIN_AFTER, MARGIN_BEFORE, marginLabels, type Ending } from './margin-labels.js'
 import type { Occupancy } from './occupancy.js'
 import type { Box, Mark } from './scene.js'
+import { textSize } from './text-box.js'
+import { wrapText } from './text-width.js'
 
 /** The widest text of a label in pixels. */
 const WIDEST = 168
 const LINES = 2
+/** Room for "total". */
+const NARROWEST = 44
 
 /** The width of the margin that labels need at the right of a frame. */
-export function labelMargin(curves: readonly { readonly title: string; readonly ink: Curve['ink'] }[], size: number): number {
-  const labels = curves.map(curve => makeLabel(curve as Curve, size, WIDEST, LINES))
-  return MARGIN_BEFORE + MARGIN_AFTER + Math.max(40, ...labels.map(label => label.width))
+export function labelMargin(titles: readonly string[], size: number): number {
+  const widths = titles.map(title => textSize(wrapText(title, size, WIDEST, LINES), size).width)
+  return MARGIN_BEFORE + MARGIN_AFTER + Math.max(NARROWEST, ...widths)
 }
 
 /**
@@ -29,7 +33,7 @@ export function wideLabels(curves: readonly Curve[], frame: Box, occupancy: Occu
       endings.push({ label, y })
       continue
     }
-    const inside = placeInside(label, occupancy, frame.right, size)
+    const inside = placeInside(label, occupancy, middleOf(curve), size)
     if (inside !== null) marks.push(inside)
     else endings.push(leaving(curve, frame, size))
   }
@@ -46,10 +50,22 @@ function endAt({ pieces }: Curve, right: number): number | null {
   return last !== undefined && last[last.length - 2] >= right - 1 ? last[last.length - 1] : null
 }
 
+/** Horizontal middle of the widest visible piece. */
+function middleOf({ pieces }: Curve): number {
+  const widths = pieces.map(piece => piece[piece.length - 2] - piece[0])
+  const widest = pieces[widths.indexOf(Math.max(...widths))]
+  return widest === undefined ? 0 : (widest[0] + widest[widest.length - 2]) / 2
+}
+
 function leaving(curve: Curve, frame: Box, size: number): Ending {
-  const up = curve.pieces.length > 0 && (curve.pieces.at(-1)!.at(-1)! < (frame.top + frame.bottom) / 2)
+  const up = curve.pieces.length > 0 && curve.pieces.at(-1)!.at(-1)! < (frame.top + frame.bottom) / 2
   const label = makeLabel({ ...curve, title: `${curve.title} ${up ? '↑' : '↓'}` }, size, WIDEST, LINES)
-  return { label, y: up ? frame.top : frame.bottom }
+  return { label, y: up ? frame.top : frame.bottom, loose: true }
+}
+
+/** In a narrow frame the standard quantum limit goes by its initials, as it does in speech. */
+function shortened(curve: Curve): Curve {
+  return curve.ink.as === 'limit' ? { ...curve, title: 'SQL' } : curve
 }
 
 /** Labels inside the frame for the curves of most weight, at most `most`; the others come back in `left`. */
@@ -62,7 +78,7 @@ export function compactLabels(
   const marks: Mark[] = []
   const left: Curve[] = []
   for (const curve of byWeight(curves)) {
-    const label: Label = makeLabel(curve, size, (frame.right - frame.left) * 0.5, 1)
+    const label = makeLabel(shortened(curve), size, (frame.right - frame.left) * 0.5, 1)
     const mark = marks.length < most ? placeInside(label, occupancy, frame.right - label.width / 2, size) : null
     if (mark === null) left.push(curve)
     else marks.push(mark)

@@ -57,7 +57,13 @@ function limitStyle(prominent: boolean): Style {
     : { ink: { as: 'bound' }, weight: LIMIT_WEIGHT, dash: [1.5, 3.5] }
 }
 
-function draw(curve: Pick<Curve, 'id' | 'title' | 'psd'>, sign: 1 | -1, signed: boolean, style: Style, window: Window): Curve {
+function draw(
+  curve: Pick<Curve, 'id' | 'title' | 'psd'>,
+  sign: 1 | -1,
+  signed: boolean,
+  style: Style,
+  window: Window,
+): Curve {
   const { x, xScale, yScale, frame } = window
   return { ...curve, ...style, pieces: curvePath({ x, psd: curve.psd, sign, signed }, xScale, yScale, frame) }
 }

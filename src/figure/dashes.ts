@@ -8,11 +8,21 @@ const SEQUENCES: { readonly [F in Family]: readonly Dash[] } = {
   thermal: [SOLID, [9, 3], [3, 3], [9, 3, 2, 3]],
   imprecision: [SOLID, [7, 2], [2, 2], [7, 2, 2, 2]],
   'back-action': [SOLID, [11, 3], [4, 3], [11, 3, 3, 3]],
-  correlation: [[4, 3], [4, 3, 1.5, 3], [8, 4], [2, 4]],
+  correlation: [
+    [4, 3],
+    [4, 3, 1.5, 3],
+    [8, 4],
+    [2, 4],
+  ],
   heating: [[10, 3], SOLID, [5, 3], [10, 3, 2, 3]],
   amplifier: [[10, 3, 2, 3], [6, 2, 2, 2], SOLID, [3, 2]],
   detection: [[2, 2.5], [8, 3], [8, 3, 2, 3], SOLID],
-  environment: [[6, 2.5], [2, 3], [12, 3], [6, 2, 1.5, 2]],
+  environment: [
+    [6, 2.5],
+    [2, 3],
+    [12, 3],
+    [6, 2, 1.5, 2],
+  ],
   stray: [[12, 3, 2, 3, 2, 3], [2, 3.5], [6, 3], SOLID],
 }
 /** Where a signed density is negative. */

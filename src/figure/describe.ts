@@ -1,49 +1,57 @@
 import type { FigureInput } from './input.js'
+import { indicesBetween } from './indices-between.js'
 import { plainNumber, withUnit } from './prefix.js'
 
-/** Sentences on what the curves do between two frequencies, for those who do not see the figure. */
-export function describe(input: FigureInput, low: number, high: number): string {
-  const shown = indicesBetween(input.points.frequency, low, high)
+/** What a description speaks of: points of the evaluation and how a place on the axis is said. */
+export interface Span {
+  readonly shown: readonly number[]
+  /** `from 1.2 MHz to 1.3 MHz`, behind "against frequency". */
+  readonly range: string
+  at(k: number): string
+}
+
+/** The whole band, in as many digits as tell its parts from each other. */
+export function bandSpan({ band, points }: FigureInput): Span {
+  const { low, high } = band
+  const digits = Math.min(12, Math.max(3, 3 + Math.ceil(Math.log10(high / (high - low)))))
+  const say = (frequency: number) => withUnit(frequency, 'Hz', digits)
+  return {
+    shown: indicesBetween(points.frequency, low, high),
+    range: `against frequency from ${say(low)} to ${say(high)}`,
+    at: k => say(points.frequency[k]),
+  }
+}
+
+/** Sentences on what the curves do, for those who do not see the figure. */
+export function describe(input: FigureInput, span: Span): string {
   const sentences = [
-    `Amplitude density of ${input.quantity} against frequency from ${hertz(low)} to ${hertz(high)}.`,
-    totalSentence(input, shown),
-    ...largestSentences(input, shown),
-    limitSentence(input, shown),
+    `Amplitude density of ${input.quantity} ${span.range}.`,
+    totalSentence(input, span),
+    ...largestSentences(input, span),
+    limitSentence(input, span),
     `Curves: total; ${[...input.lines, ...input.limits].map(curve => curve.title).join('; ')}.`,
   ]
   return sentences.filter(s => s !== '').join(' ')
 }
 
-export function indicesBetween(frequency: Float64Array, low: number, high: number): number[] {
-  const found: number[] = []
-  for (let k = 0; k < frequency.length; k++) if (frequency[k] >= low && frequency[k] <= high) found.push(k)
-  return found
-}
-
-function hertz(frequency: number): string {
-  return withUnit(frequency, 'Hz', 4)
-}
-
-function totalSentence({ total, points, unit }: FigureInput, shown: readonly number[]): string {
+function totalSentence({ total, unit }: FigureInput, { shown, at }: Span): string {
   const valid = shown.filter(k => total[k] > 0 && Number.isFinite(total[k]))
   if (valid.length === 0) return 'The total is nowhere above zero.'
   const least = valid.reduce((a, b) => (total[b] < total[a] ? b : a))
   const most = valid.reduce((a, b) => (total[b] > total[a] ? b : a))
-  const at = (k: number) => `${withUnit(Math.sqrt(total[k]), unit)} at ${hertz(points.frequency[k])}`
-  return `The total is least, ${at(least)}, and greatest, ${at(most)}.`
+  const say = (k: number) => `${withUnit(Math.sqrt(total[k]), unit)} at ${at(k)}`
+  return `The total is least, ${say(least)}, and greatest, ${say(most)}.`
 }
 
 /** Stretches narrower than this part of the points are not worth a sentence; nor are more than so many of them. */
 const LEAST_PART = 0.02
 const MOST_STRETCHES = 6
 
-function largestSentences(input: FigureInput, shown: readonly number[]): string[] {
-  const { lines, points } = input
+function largestSentences(input: FigureInput, { shown, at }: Span): string[] {
+  const { lines } = input
   const stretches = largestStretches(input, shown).filter(s => s.count >= LEAST_PART * shown.length)
   if (stretches.length === 0) return []
-  const parts = stretches
-    .slice(0, MOST_STRETCHES)
-    .map(s => `${lines[s.line].title} from ${hertz(points.frequency[s.from])} to ${hertz(points.frequency[s.to])}`)
+  const parts = stretches.slice(0, MOST_STRETCHES).map(s => `${lines[s.line].title} from ${at(s.from)} to ${at(s.to)}`)
   return [`The largest contribution is ${parts.join(', then ')}.`]
 }
 
@@ -69,7 +77,7 @@ function largestStretches({ lines }: FigureInput, shown: readonly number[]): Str
   return stretches
 }
 
-function limitSentence({ limits, total, points }: FigureInput, shown: readonly number[]): string {
+function limitSentence({ limits, total }: FigureInput, { shown, at }: Span): string {
   const limit = limits.find(l => l.prominent)
   if (limit === undefined) return ''
   const valid = shown.filter(k => total[k] > 0 && limit.psd[k] > 0 && Number.isFinite(total[k] / limit.psd[k]))
@@ -79,5 +87,5 @@ function limitSentence({ limits, total, points }: FigureInput, shown: readonly n
   const decibels = 10 * Math.log10(ratio(nearest))
   const side = decibels >= 0 ? 'above' : 'below'
   const distance = `${plainNumber(Math.abs(decibels), Math.abs(decibels) < 10 ? 2 : 3)} dB`
-  return `With respect to the ${limit.title} the total is lowest at ${hertz(points.frequency[nearest])}, ${distance} ${side} it.`
+  return `With respect to the ${limit.title} the total is lowest at ${at(nearest)}, ${distance} ${side} it.`
 }

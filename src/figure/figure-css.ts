@@ -38,9 +38,8 @@ const RULES = `.figure {
 .figure-stroke { fill: none; stroke: var(--figure-own, currentColor); stroke-linejoin: round; }
 .figure-fill { fill: var(--figure-own, currentColor); stroke: none; }
 .figure-text { fill: var(--figure-own, currentColor); stroke: none; }
-.figure-label { paint-order: stroke; stroke: var(--figure-paper); stroke-width: 4px; stroke-linejoin: round; }
 .figure-total { --figure-own: var(--figure-ink); stroke-width: 2.6px; }
-.figure-limit { --figure-own: var(--figure-limit); stroke-width: 1.6px; }
+.figure-limit { --figure-own: var(--figure-limit); stroke-width: 2px; }
 .figure-bound { --figure-own: var(--figure-limit); stroke-width: 1px; }
 .figure-line { stroke-width: 1.5px; }
 .figure-axis, .figure-tick { --figure-own: var(--figure-axis); stroke-width: 0.8px; }
@@ -48,7 +47,8 @@ const RULES = `.figure {
 .figure-leader { stroke-width: 0.7px; --figure-own: var(--figure-axis); }
 .figure-reference { --figure-own: var(--figure-axis); stroke-width: 0.8px; }
 .figure-best { --figure-own: var(--figure-ink); stroke-width: 1.4px; }
-.figure-beyond { --figure-own: var(--figure-faint); }
+.figure-share { opacity: 0.55; }
+.figure-beyond { --figure-own: var(--figure-beyond); }
 .figure-text.figure-axis, .figure-text.figure-tick, .figure-text.figure-total, .figure-text.figure-best { --figure-own: var(--figure-ink); }
 .figure-label.figure-total { font-weight: 700; }
-.figure-label.figure-text { stroke-width: 4px; stroke: var(--figure-paper); }`
+.figure-label.figure-text { paint-order: stroke; stroke: var(--figure-paper); stroke-width: 3px; stroke-linejoin: round; }`

@@ -5,6 +5,8 @@ import { ASCENT } from './type-sizes.js'
 
 const TICK = 4
 const TEXT = 22
+/** Height of the point that a hairline meets, below a label's top, over the size of the text. */
+const AIM = ASCENT - 0.3
 /** Space between two labels. */
 const GAP = 3
 
@@ -16,6 +18,8 @@ export const MARGIN_AFTER = 6
 export interface Ending {
   readonly label: Label
   readonly y: number
+  /** No hairline: the curve does not meet the edge. */
+  readonly loose?: true
 }
 
 /**
@@ -25,7 +29,7 @@ export interface Ending {
 export function marginLabels(endings: readonly Ending[], frame: Box, size: number): { marks: Mark[]; left: Label[] } {
   const { kept, left } = fitting(endings, frame.bottom - frame.top)
   const centres = spread(
-    kept.map(e => e.y),
+    kept.map(({ label, y }) => y + label.height / 2 - size * AIM),
     kept.map(e => e.label.height + GAP),
     frame.top,
     frame.bottom,
@@ -48,14 +52,18 @@ function fitting(endings: readonly Ending[], room: number): { kept: Ending[]; le
   return { kept, left }
 }
 
-function labelMarks({ label, y }: Ending, centre: number, frame: Box, size: number): Mark[] {
+function labelMarks({ label, y, loose }: Ending, centre: number, frame: Box, size: number): Mark[] {
   const { curve, lines, width, height } = label
   const top = centre - height / 2
   const x = frame.right + TEXT
-  // The hairline meets the first line of the text, where reading starts.
-  const aim = top + size * (ASCENT - 0.3)
+  const aim = top + size * AIM
+  const hairline: Mark = {
+    mark: 'path',
+    ink: { as: 'leader' },
+    pieces: [[frame.right + 2, y, frame.right + TICK, y, x - TICK, aim, x - 2, aim]],
+  }
   return [
-    { mark: 'path', ink: { as: 'leader' }, pieces: [[frame.right + 2, y, frame.right + TICK, y, x - TICK, aim, x - 2, aim]] },
+    ...(loose ? [] : [hairline]),
     {
       mark: 'text',
       ink: curve.ink,

@@ -3,20 +3,33 @@ import type { Box, Polyline } from './scene.js'
 /** Edge of a cell in pixels: labels need no finer knowledge of where ink is. */
 const CELL = 2
 
-/** Where ink is in a frame, so that the ink inside any box is counted in constant time (a summed-area table). */
+/**
+ * Where ink is in a frame, so that the ink inside any box is counted in constant time (a summed-area table). A cell counts
+ * the curves that pass through it: taking one curve's own count from that of all leaves the others'.
+ */
 export class Occupancy {
   private readonly columns: number
   private readonly rows: number
   private readonly cells: Uint8Array
+  /** The curve that marked a cell last, so that a curve counts once in it. */
+  private readonly marker: Int32Array
+  private curve = 0
   private sums: Uint32Array | null = null
 
-  constructor(private readonly frame: Box) {
+  constructor(readonly frame: Box) {
     this.columns = Math.max(1, Math.ceil((frame.right - frame.left) / CELL))
     this.rows = Math.max(1, Math.ceil((frame.bottom - frame.top) / CELL))
     this.cells = new Uint8Array(this.columns * this.rows)
+    this.marker = new Int32Array(this.columns * this.rows)
   }
 
-  addLine(line: Polyline): void {
+  /** All pieces of one curve. */
+  addCurve(pieces: readonly Polyline[]): void {
+    this.curve++
+    for (const piece of pieces) this.addLine(piece)
+  }
+
+  private addLine(line: Polyline): void {
     for (let k = 0; k + 3 < line.length; k += 2) {
       const steps = Math.ceil(Math.hypot(line[k + 2] - line[k], line[k + 3] - line[k + 1]) / CELL) + 1
       for (let s = 0; s <= steps; s++) {
@@ -27,6 +40,7 @@ export class Occupancy {
   }
 
   addBox(box: Box): void {
+    this.curve++
     for (let x = box.left; x <= box.right; x += CELL) for (let y = box.top; y <= box.bottom; y += CELL) this.mark(x, y)
   }
 
@@ -37,7 +51,8 @@ export class Occupancy {
     return this.count(box) === 0
   }
 
-  private count(box: Box): number {
+  /** Cells with ink inside the box, each as often as curves pass through it. */
+  count(box: Box): number {
     const sums = (this.sums ??= this.integrate())
     const width = this.columns + 1
     const c0 = this.column(box.left)
@@ -61,7 +76,10 @@ export class Occupancy {
   }
 
   private mark(x: number, y: number): void {
-    this.cells[this.row(y) * this.columns + this.column(x)] = 1
+    const cell = this.row(y) * this.columns + this.column(x)
+    if (this.marker[cell] === this.curve) return
+    this.marker[cell] = this.curve
+    this.cells[cell]++
     this.sums = null
   }
 

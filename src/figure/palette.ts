@@ -11,13 +11,15 @@ export interface Ground {
   readonly limit: string
   /** Axes and ticks. */
   readonly axis: string
-  /** Lines behind everything, and the region beyond the standard quantum limit. */
+  /** Lines behind everything. */
   readonly faint: string
+  /** The region beyond the standard quantum limit. */
+  readonly beyond: string
 }
 
 export const GROUND: { readonly [S in Scheme]: Ground } = {
-  light: { paper: '#ffffff', ink: '#171b20', limit: '#5f6871', axis: '#5f6871', faint: '#eceef0' },
-  dark: { paper: '#15181c', ink: '#f2f1ec', limit: '#a3a9b0', axis: '#8d949b', faint: '#262b31' },
+  light: { paper: '#ffffff', ink: '#171b20', limit: '#565f68', axis: '#5f6871', faint: '#e4e7ea', beyond: '#f3f4f6' },
+  dark: { paper: '#15181c', ink: '#f2f1ec', limit: '#a3a9b0', axis: '#8d949b', faint: '#2b3138', beyond: '#1d2126' },
 }
 
 /**
@@ -26,15 +28,15 @@ export const GROUND: { readonly [S in Scheme]: Ground } = {
  * more than 3 : 1. The test of this file measures what the search reached.
  */
 export const FAMILY_COLOURS: { readonly [F in Family]: { readonly [S in Scheme]: string } } = {
-  thermal: { light: '#d66e17', dark: '#ae8900' },
-  imprecision: { light: '#089dad', dark: '#15877c' },
-  'back-action': { light: '#a32953', dark: '#e74d85' },
-  correlation: { light: '#7453a8', dark: '#c998ff' },
-  heating: { light: '#9e775b', dark: '#ffb4b2' },
-  amplifier: { light: '#7c76f4', dark: '#bbd7f8' },
-  detection: { light: '#14452f', dark: '#cbec76' },
-  environment: { light: '#725a0d', dark: '#aba772' },
-  stray: { light: '#692366', dark: '#b061bb' },
+  thermal: { light: '#d66e17', dark: '#f8bd98' },
+  imprecision: { light: '#089dad', dark: '#a7e0f2' },
+  'back-action': { light: '#a32953', dark: '#f5677b' },
+  correlation: { light: '#7453a8', dark: '#9aabf9' },
+  heating: { light: '#9e775b', dark: '#af6612' },
+  amplifier: { light: '#7c76f4', dark: '#0b89cc' },
+  detection: { light: '#14452f', dark: '#648857' },
+  environment: { light: '#725a0d', dark: '#b6a92f' },
+  stray: { light: '#692366', dark: '#927092' },
 }
 
 export const FAMILIES = Object.keys(FAMILY_COLOURS) as Family[]

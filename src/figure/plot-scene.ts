@@ -1,27 +1,18 @@
 import { amplitudeDomain } from './amplitude-domain.js'
 import { axisMarks } from './axis-marks.js'
 import { linearAxis, logAxis } from './axis-plan.js'
+import type { Abscissa } from './band-abscissa.js'
 import { beyondMark } from './beyond.js'
 import { compactLabels, labelMargin, wideLabels } from './curve-labels.js'
 import { type Curve, curveMark, drawCurves, type Window } from './curves.js'
 import type { FigureInput } from './input.js'
 import { keyRows } from './key-rows.js'
+import { makeFrame } from './make-frame.js'
 import { Occupancy } from './occupancy.js'
 import { bestMarks, referenceMarks } from './point-marks.js'
 import { axisScale } from './scales.js'
 import type { Box, Mark, Scene, Size } from './scene.js'
 import { isCompact, typeSizes, type TypeSizes } from './type-sizes.js'
-
-/** What a plot of amplitude densities shows along its horizontal axis. */
-export interface Abscissa {
-  readonly kind: 'linear' | 'log'
-  /** Of the evaluation's points, in Hz from `origin`. */
-  readonly x: Float64Array
-  readonly domain: readonly [number, number]
-  /** Frequency at which the axis reads zero. */
-  readonly origin: number
-  readonly name: string
-}
 
 export interface Plot {
   readonly title: string
@@ -29,8 +20,12 @@ export interface Plot {
   readonly abscissa: Abscissa
   /** The most curves that are named inside a compact figure. */
   readonly named?: number
+  /** False: curves that are nowhere in the frame are not named beside it. */
+  readonly nameHidden?: boolean
 }
 
+/** The most labels of the amplitude axis. */
+const MOST_LABELS_UP = 8
 /** Curves of which a compact figure names so many in the frame. */
 const NAMED = 6
 /** Lines that never reach this share of the power in the window are not drawn in a compact figure. */
@@ -42,9 +37,12 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
   const compact = isCompact(size.width)
   const { window, curves, axes } = layOut(view, size, plot)
   const { frame } = window
-  const shown = compact ? curves.filter(curve => isWorthSpace(curve)) : curves
+  const shown = compact
+    ? curves.filter(isWorthSpace)
+    : curves.filter(curve => curve.pieces.length > 0 || (plot.nameHidden ?? true))
   const occupancy = occupied(frame, shown)
-  const points = pointMarks(view, window, plot.abscissa, occupancy)
+  addReference(view, window, plot.abscissa, occupancy)
+  const points = pointMarks(view, window, plot.abscissa, { occupancy, type })
   const names = compact
     ? compactNames(shown, window, occupancy, { type, named: plot.named ?? NAMED, size })
     : { marks: wideLabels(shown, frame, occupancy, type.label), height: 0 }
@@ -55,31 +53,38 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
     height: Math.ceil(size.height + names.height),
     title: plot.title,
     description: plot.description,
-    marks: [...(beyond === null ? [] : [beyond]), ...axes, ...points.behind, ...shown.map(curveMark), ...names.marks, ...points.front],
+    marks: [
+      ...(beyond === null ? [] : [beyond]),
+      ...axes,
+      ...points.behind,
+      ...shown.map(curveMark),
+      ...names.marks,
+      ...points.front,
+    ],
   }
 }
 
 function layOut(view: FigureInput, size: Size, { abscissa }: Plot) {
   const type = typeSizes(size.width)
   const compact = isCompact(size.width)
-  const titles = [...view.lines, ...view.limits].map(({ title }) => ({ title, ink: { as: 'line', family: 'stray', tone: 0 } as const }))
-  const frame: Box = {
-    left: type.axis * (compact ? 4 : 5),
-    top: type.note * 2.4,
-    right: size.width - (compact ? 12 : labelMargin(titles, type.label)),
-    bottom: size.height - type.tick - type.axis - (compact ? 26 : 32),
-  }
-  const [low, high] = abscissa.domain
-  const amplitudes = amplitudeDomain(view, k => abscissa.x[k] >= low && abscissa.x[k] <= high)
-  const xScale = axisScale(abscissa.kind, abscissa.domain, [frame.left, frame.right])
-  const yScale = axisScale('log', amplitudes, [frame.bottom, frame.top])
-  const window: Window = { x: abscissa.x, xScale, yScale, frame }
-  const xMost = compact ? 5 : 9
-  const plan = abscissa.kind === 'log' ? logAxis : linearAxis
-  const x = { plan: plan(abscissa.name, 'Hz', abscissa.domain, xMost), scale: xScale }
+  const { kind, domain, x } = abscissa
+  const amplitudes = amplitudeDomain(view, { x, kind, domain })
   const name = view.quantity.charAt(0).toUpperCase() + view.quantity.slice(1)
-  const y = { plan: logAxis(name, view.unit, amplitudes, 8), scale: yScale }
-  return { window, curves: drawCurves(view, window), axes: axisMarks(frame, x, y, type) }
+  const yPlan = logAxis(name, view.unit, amplitudes, MOST_LABELS_UP)
+  const xPlan = (kind === 'log' ? logAxis : linearAxis)(abscissa.name, 'Hz', domain, compact ? 5 : 9)
+  const frame = makeFrame(size, { x: xPlan, y: yPlan }, type.note * 2.4, labelMargin(longNames(view), type.label))
+  const xScale = axisScale(kind, domain, [frame.left, frame.right])
+  const yScale = axisScale('log', amplitudes, [frame.bottom, frame.top])
+  const window: Window = { x, xScale, yScale, frame }
+  const axes = axisMarks(frame, { plan: xPlan, scale: xScale }, { plan: yPlan, scale: yScale }, type)
+  return { window, curves: drawCurves(view, window), axes }
+}
+
+/** Every name in every form: with a sign, and with the arrow of a curve that has left the frame. */
+function longNames({ lines, limits }: FigureInput): string[] {
+  const titles = [...lines, ...limits].map(curve => curve.title)
+  const signed = lines.filter(line => line.signed).map(line => `− ${line.title}`)
+  return [...titles, ...signed].flatMap(title => [title, `${title} ↓`])
 }
 
 function isWorthSpace(curve: Curve): boolean {
@@ -88,17 +93,31 @@ function isWorthSpace(curve: Curve): boolean {
 
 function occupied(frame: Box, curves: readonly Curve[]): Occupancy {
   const occupancy = new Occupancy(frame)
-  for (const curve of curves) for (const piece of curve.pieces) occupancy.addLine(piece)
+  for (const curve of curves) occupancy.addCurve(curve.pieces)
   return occupancy
 }
 
-function pointMarks(view: FigureInput, window: Window, abscissa: Abscissa, occupancy: Occupancy): { behind: Mark[]; front: Mark[] } {
-  const { xScale, yScale, frame } = window
-  const type = typeSizes(frame.right)
-  const { best, reference, unit } = view
-  const behind = reference === null ? [] : referenceMarks(reference, abscissa.origin, xScale, { frame, type })
+/** Names keep off the hairline of the reference frequency. */
+function addReference(
+  { reference }: FigureInput,
+  { xScale, frame }: Window,
+  { origin }: Abscissa,
+  occupancy: Occupancy,
+): void {
+  if (reference === null) return
+  const x = xScale.at(reference - origin)
+  if (x >= frame.left && x <= frame.right) occupancy.addCurve([[x, frame.top, x, frame.bottom]])
+}
+
+function pointMarks(
+  { best, reference, unit }: FigureInput,
+  { xScale, yScale, frame }: Window,
+  { origin }: Abscissa,
+  { occupancy, type }: { occupancy: Occupancy; type: TypeSizes },
+): { behind: Mark[]; front: Mark[] } {
+  const behind = reference === null ? [] : referenceMarks(reference, origin, xScale, { frame, type })
   if (best === null) return { behind, front: [] }
-  const x = xScale.at(best.frequency - abscissa.origin)
+  const x = xScale.at(best.frequency - origin)
   const y = yScale.at(best.asd)
   const inside = x >= frame.left && x <= frame.right && y >= frame.top && y <= frame.bottom
   return { behind, front: bestMarks(best, inside ? { x, y } : null, occupancy, { unit, type }) }
@@ -110,7 +129,12 @@ interface CompactLook {
   readonly size: Size
 }
 
-function compactNames(curves: readonly Curve[], { frame }: Window, occupancy: Occupancy, look: CompactLook): { marks: Mark[]; height: number } {
+function compactNames(
+  curves: readonly Curve[],
+  { frame }: Window,
+  occupancy: Occupancy,
+  look: CompactLook,
+): { marks: Mark[]; height: number } {
   const { marks, left } = compactLabels(curves, frame, occupancy, { size: look.type.label, most: look.named })
   const rows = keyRows(left, { left: 14, right: frame.right, top: look.size.height + 4 }, look.type.label)
   return { marks: [...marks, ...rows.marks], height: rows.height === 0 ? 0 : rows.height + 8 }

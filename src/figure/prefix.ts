@@ -1,5 +1,27 @@
 /** SI prefixes from quecto to quetta (SI brochure, 9th edition, as amended 2022). */
-const PREFIXES = ['q', 'r', 'y', 'z', 'a', 'f', 'p', 'n', 'µ', 'm', '', 'k', 'M', 'G', 'T', 'P', 'E', 'Z', 'Y', 'R', 'Q']
+const PREFIXES = [
+  'q',
+  'r',
+  'y',
+  'z',
+  'a',
+  'f',
+  'p',
+  'n',
+  'µ',
+  'm',
+  '',
+  'k',
+  'M',
+  'G',
+  'T',
+  'P',
+  'E',
+  'Z',
+  'Y',
+  'R',
+  'Q',
+]
 const NONE = PREFIXES.indexOf('')
 
 /** A unit with a prefix and the number of unprefixed units in it: `aN/√Hz`, 1e-18. */
@@ -48,4 +70,10 @@ export function withUnit(value: number, unit: string, significant = 3): string {
 /** `⁻¹⁸`. */
 export function superscript(power: number): string {
   return [...String(power)].map(c => (c === '-' ? '⁻' : '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(c)])).join('')
+}
+
+/** A frequency as it is spoken of: no more digits than it needs, at most ten. */
+export function frequencyName(frequency: number): string {
+  const { unit, factor } = fitPrefix(frequency, 'Hz')
+  return `${String(Number((frequency / factor).toPrecision(10))).replace('-', '−')} ${unit}`
 }

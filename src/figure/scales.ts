@@ -10,7 +10,11 @@ export interface AxisScale {
 }
 
 /** An axis from `low` to `high` on the pixels `from` to `to`; a log axis needs 0 < low < high. */
-export function axisScale(kind: 'linear' | 'log', domain: readonly [number, number], range: readonly [number, number]): AxisScale {
+export function axisScale(
+  kind: 'linear' | 'log',
+  domain: readonly [number, number],
+  range: readonly [number, number],
+): AxisScale {
   const scale = kind === 'log' ? scaleLog(domain, range) : scaleLinear(domain, range)
   return { kind, low: domain[0], high: domain[1], at: value => scale(value) }
 }

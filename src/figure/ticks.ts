@@ -10,7 +10,7 @@ export interface Tick {
 
 /**
  * Ticks of a log axis. A label stands at every decade, at every second (third …) one when more than `most` would stand,
- * at 1, 2 and 5 under two decades, and at even steps where fewer than three of those fall into the axis.
+ * at 1, 2 and 5 where fewer than three decades fall into the axis, and at even steps where fewer than three of those do.
  *
  * @param factor unprefixed units in one labelled unit; 0 labels by powers of ten
  */
@@ -26,15 +26,15 @@ export function logTicks(low: number, high: number, most: number, factor: number
 
 /** The values that are labelled on a log axis, ascending. */
 export function labelledValues(low: number, high: number, most: number): number[] {
-  const decades = Math.log10(high / low)
-  if (decades >= 2) return everyDecade(low, high, Math.ceil((Math.floor(decades + 1e-9) + 1) / most))
+  const decades = multiples(low, high, [1])
+  if (decades.length >= 3) return everyNth(decades, Math.ceil(decades.length / most))
   const few = multiples(low, high, [1, 2, 5])
   if (few.length >= 3 && few.length <= most) return few
-  return few.length > most ? multiples(low, high, [1]) : ticks(low, high, Math.min(5, most)).filter(v => v > 0)
+  return few.length > most ? decades : ticks(low, high, Math.min(5, most)).filter(v => v > 0)
 }
 
-function everyDecade(low: number, high: number, stride: number): number[] {
-  return multiples(low, high, [1]).filter(value => Math.round(Math.log10(value)) % stride === 0)
+function everyNth(decades: readonly number[], stride: number): number[] {
+  return decades.filter(value => Math.round(Math.log10(value)) % stride === 0)
 }
 
 function minorValues(low: number, high: number, most: number): number[] {
@@ -53,15 +53,24 @@ function multiples(low: number, high: number, mantissas: readonly number[]): num
   return values
 }
 
-/** Number of unprefixed units in the labelled one: the first prefix that keeps all labels within 0.01 and 10 000; 0 if none. */
+/** Decimal logarithm of the label that is best to read in the middle of an axis. */
+const PREFERRED_MIDDLE = 0.7
+
+/**
+ * Number of unprefixed units in the labelled one: of the prefixes that keep all labels within 0.01 and 10 000 the one that
+ * puts their geometric middle nearest to about 5; 0 if there is none.
+ */
 export function labelFactor(values: readonly number[], takesPrefix: boolean): number {
   const least = Math.floor(Math.log10(values[0]) + 1e-9)
   const greatest = Math.floor(Math.log10(values[values.length - 1]) + 1e-9)
   const first = Math.floor(least / 3) * 3
-  for (const power of takesPrefix ? [first, first + 3] : [0]) {
-    if (least - power >= -2 && greatest - power <= 3 && Math.abs(power) <= 30) return Number(`1e${power}`)
-  }
-  return 0
+  const fitting = (takesPrefix ? [first + 3, first] : [0]).filter(
+    power => least - power >= -2 && greatest - power <= 3 && Math.abs(power) <= 30,
+  )
+  const middle = Math.log10(values[0] * values[values.length - 1]) / 2
+  const distance = (power: number) => Math.abs(middle - power - PREFERRED_MIDDLE)
+  const nearest = fitting.reduce<number | null>((a, b) => (a === null || distance(b) < distance(a) ? b : a), null)
+  return nearest === null ? 0 : Number(`1e${nearest}`)
 }
 
 function scaledText(value: number, factor: number): string {

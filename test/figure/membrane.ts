@@ -31,7 +31,10 @@ export function membranePoints({ frequency, quality, low, high }: Membrane, coun
   const halfWidth = frequency / (2 * quality)
   const anchor: Anchor = { id: 'membrane', nature: 'mode', frequency, halfWidth }
   const side = (reach: number, sign: number) =>
-    Array.from({ length: count }, (_, k) => sign * halfWidth * Math.sinh((Math.asinh(reach / halfWidth) * (k + 1)) / count))
+    Array.from(
+      { length: count },
+      (_, k) => sign * halfWidth * Math.sinh((Math.asinh(reach / halfWidth) * (k + 1)) / count),
+    )
   const offsets = [...side(frequency - low, -1).reverse(), 0, ...side(high - frequency, 1)]
   return {
     anchors: [anchor],
@@ -48,7 +51,11 @@ export function membraneEvaluation(membrane: Membrane = MEMBRANE): Evaluation {
   const omega0 = 2 * Math.PI * frequency
   const chi = (k: number) => {
     const real = mass * (2 * Math.PI) ** 2 * -points.offset[k] * (2 * frequency + points.offset[k])
-    return { real, imaginary: (mass * omega0 * omega0) / quality, square: real * real + ((mass * omega0 * omega0) / quality) ** 2 }
+    return {
+      real,
+      imaginary: (mass * omega0 * omega0) / quality,
+      square: real * real + ((mass * omega0 * omega0) / quality) ** 2,
+    }
   }
   const thermal = (4 * BOLTZMANN * temperature * mass * omega0) / quality
   const imprecision = 2.4e-33
@@ -63,14 +70,55 @@ export function membraneEvaluation(membrane: Membrane = MEMBRANE): Evaluation {
     of: [id],
   })
   const lines = [
-    line('thermal', 'thermal', 'thermal', curve(() => thermal)),
-    line('shot', 'shot noise', 'imprecision', curve(k => imprecision * chi(k).square)),
-    line('back_action', 'back-action', 'back-action', curve(() => backAction)),
-    line('correlation', 'correlation', 'correlation', curve(k => 0.5 * HBAR * chi(k).real), true),
-    line('amplifier', 'amplifier', 'amplifier', curve(k => 0.45 * imprecision * chi(k).square)),
-    line('heating', 'cavity heating', 'heating', curve(() => 0.3 * backAction)),
-    line('detector', 'detector loss', 'detection', curve(k => 0.13 * imprecision * chi(k).square)),
-    line('stray', 'stray forces', 'stray', curve(() => stray * stray)),
+    line(
+      'thermal',
+      'thermal',
+      'thermal',
+      curve(() => thermal),
+    ),
+    line(
+      'shot',
+      'shot noise',
+      'imprecision',
+      curve(k => imprecision * chi(k).square),
+    ),
+    line(
+      'back_action',
+      'back-action',
+      'back-action',
+      curve(() => backAction),
+    ),
+    line(
+      'correlation',
+      'correlation',
+      'correlation',
+      curve(k => 0.5 * HBAR * chi(k).real),
+      true,
+    ),
+    line(
+      'amplifier',
+      'amplifier',
+      'amplifier',
+      curve(k => 0.45 * imprecision * chi(k).square),
+    ),
+    line(
+      'heating',
+      'cavity heating',
+      'heating',
+      curve(() => 0.3 * backAction),
+    ),
+    line(
+      'detector',
+      'detector loss',
+      'detection',
+      curve(k => 0.13 * imprecision * chi(k).square),
+    ),
+    line(
+      'stray',
+      'stray forces',
+      'stray',
+      curve(() => stray * stray),
+    ),
   ]
   const total = curve(k => lines.reduce((sum, l) => sum + l.psd[k], 0))
   const limit = (id: string, title: string, f: (k: number) => number) => ({
