@@ -18,9 +18,16 @@ export function toSignificant(value: number, count: number): Digits {
 /** The value rounded at the digit of 10^place; a value below half of it is zero, written to that place. */
 export function toPlace(value: number, place: number): Digits {
   const lead = value === 0 ? place - 1 : toSignificant(value, 17).exponent
-  if (lead >= place) return toSignificant(value, Math.min(lead - place + 1, 100))
+  if (lead >= place) return toPlaceOf(value, lead, place)
   const up = lead === place - 1 && Math.abs(value) >= 5 * 10 ** lead
   return { negative: value < 0 && up, digits: up ? '1' : '0', exponent: place }
+}
+
+function toPlaceOf(value: number, lead: number, place: number): Digits {
+  const rounded = toSignificant(value, Math.min(lead - place + 1, 100))
+  // 9.99 rounds up to 10.0: the first digit moves up, and a digit is missing at the place.
+  const missing = '0'.repeat(rounded.exponent - lead)
+  return { ...rounded, digits: rounded.digits + missing }
 }
 
 /** One digit of an uncertainty, two when it leads with 1, as it is honest to print. */

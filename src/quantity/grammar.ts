@@ -206,7 +206,7 @@ function peg$parse(input, options) {
   const peg$r6 = /^[\xD7\xB7\u22C5\u2219]/
   const peg$r7 = /^[\-\u2212]/
   const peg$r8 = /^[\u2070\xB9\xB2\xB3\u2074\u2075\u2076\u2077\u2078\u2079]/
-  const peg$r9 = /^[A-Za-z\xB5\u03BC\u03A9\u03A9\xC5\xC5]/
+  const peg$r9 = /^[A-Za-z\xB5\u03BC\u03A9\u2126\xC5\u212B]/
   const peg$r10 = /^[ \xA0\u2000-\u200A\u202F]/
 
   const peg$e0 = peg$literalExpectation('\u03C0', false)
@@ -246,7 +246,7 @@ function peg$parse(input, options) {
     false,
   )
   const peg$e31 = peg$classExpectation(
-    [['A', 'Z'], ['a', 'z'], '\xB5', '\u03BC', '\u03A9', '\u03A9', '\xC5', '\xC5'],
+    [['A', 'Z'], ['a', 'z'], '\xB5', '\u03BC', '\u03A9', '\u2126', '\xC5', '\u212B'],
     false,
     false,
     false,

@@ -74,7 +74,7 @@ function unreadable(text: string, offset: number): QuantityError {
   const rest = text.slice(offset)
   const piece = /^\s*\S+/.exec(rest)?.[0] ?? ''
   const before = text.slice(0, offset)
-  const symbol = /[A-Za-zµμΩÅ°]+$/.exec(before)?.[0]
+  const symbol = /[A-Za-zµμΩ\u2126Å°]+$/.exec(before)?.[0]
   const exponent = /^[-−]?\d+/.exec(rest)?.[0]
   if (symbol !== undefined && exponent !== undefined) {
     const message = `\`${symbol}${exponent}\`: an exponent needs its sign of power; write \`${symbol}^${exponent.replace('−', '-')}\``

@@ -43,7 +43,7 @@ function sharedUnit(tree: QuantityNode, text: string): Spread {
       throw refusePiece(
         whole,
         text,
-        `wants brackets behind a factor π; write \`(${sliceOf(number, text)} ± ${sliceOf(deviation.number, text)})\``,
+        `wants brackets behind a factor π; write \`(${sliceOf(number, text)} ± ${sliceOf(deviation.number, text)})${unit === null ? '' : ` ${sliceOf(unit, text)}`}\``,
       )
     if (deviation.number.spelled === 'ten' && number.spelled !== 'ten') {
       throw refusePiece(whole, text, 'wants brackets before its power of ten; write it like `(3.1 ± 0.2) × 10^-12 kg`')

@@ -54,13 +54,14 @@ export function suggestUnits(written: string): string | null {
   return nearest(symbol, known)
 }
 
+/** Of equally near words the first of the same length: a wrong letter is a likelier slip than a missing one. */
 function nearest(symbol: string, known: readonly string[]): string | null {
   const reach = symbol.length <= 3 ? 1 : 2
   let best: string | null = null
   let least = reach + 1
   for (const candidate of known) {
-    const steps = distance(symbol, candidate)
-    if (steps < least && steps < candidate.length) [best, least] = [candidate, steps]
+    const effort = distance(symbol, candidate) + (candidate.length === symbol.length ? 0 : 0.5)
+    if (effort < least && Math.floor(effort) < candidate.length) [best, least] = [candidate, effort]
   }
   return best === null ? null : `\`${best}\``
 }
