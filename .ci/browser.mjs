@@ -42,24 +42,32 @@ export function findBrowser(env = process.env) {
   return [...onPath, ...places].find(runnable) ?? null
 }
 
+/**
+ * The commands that install Debian's Chromium; none where the machine is a person's own, or where a browser was named.
+ * @param {{ platform: string, root: boolean, env: NodeJS.ProcessEnv }} machine
+ */
+export function stepsToInstall({ platform, root, env }) {
+  const own = !root && !env.CI
+  if (platform !== 'linux' || own || env.CHROME_PATH) return []
+  const steps = [
+    ['apt-get', 'update'],
+    ['apt-get', 'install', '-y', 'chromium'],
+  ]
+  return root ? steps : steps.map(step => ['sudo', '-n', ...step])
+}
+
 /** @param {readonly string[]} words */
-function run(words) {
-  const root = process.getuid?.() === 0
-  const [program, ...rest] = root ? words : ['sudo', '-n', ...words]
-  return spawnSync(program, rest, {
-    stdio: ['ignore', 2, 2],
-    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
-  }).status
+function succeeds([program, ...rest]) {
+  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' }
+  return spawnSync(program, rest, { stdio: ['ignore', 2, 2], env }).status === 0
 }
 
 /** Installs a browser where none is found and the machine may be changed; says how to where it may not. */
 export function ensureBrowser() {
   if (findBrowser() !== null) return
-  const mayInstall = process.platform === 'linux' && (process.getuid?.() === 0 || Boolean(process.env.CI))
-  if (mayInstall && !process.env.CHROME_PATH) {
-    console.error('Installing Chromium for the browser tests …')
-    if (run(['apt-get', 'update']) === 0) run(['apt-get', 'install', '-y', '--no-install-recommends', 'chromium'])
-  }
+  const steps = stepsToInstall({ platform: process.platform, root: process.getuid?.() === 0, env: process.env })
+  if (steps.length > 0) console.error('Installing Chromium for the browser tests …')
+  steps.every(succeeds)
   if (findBrowser() === null) console.error(howToInstall)
 }
 

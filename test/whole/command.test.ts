@@ -26,14 +26,14 @@ describe('check', () => {
     ['a misspelt key', misspelt, 'qualtiy', ['qualtiy', 'quality']],
     ['a wrong unit', wrongUnit, '90 kW', ['90 kW', 'Hz']],
     ['an unstable working point', unstable, 'pump:', ['unstable']],
-    ['YAML that is none', good.replace('readout: detector', 'readout: ['), '', []],
+    ['YAML that is none', good.replace('readout: detector', 'readout: ['), 'band:', []],
   ])('names file, line, column, value and remedy of %s', (_name, text, at, words) => {
     const folder = project({ tern: text })
     const before = snapshot(folder)
     const { code, out, err } = floorbook(folder, 'check')
     expect({ code, out }).toEqual({ code: 2, out: '' })
     for (const line of err.trimEnd().split('\n')) expect(line).toMatch(lineForm)
-    if (at !== '') expect(err).toContain(`budgets/tern/budget.yaml:${placeOf(text, at).split(':')[0]}:`)
+    expect(err).toContain(`budgets/tern/budget.yaml:${placeOf(text, at).split(':')[0]}:`)
     for (const word of words) expect(err).toContain(word)
     expect(snapshot(folder)).toEqual(before)
   })

@@ -1,0 +1,57 @@
+import { formatProblem } from '../budget/format-problem.js'
+import type { Assessment } from '../model/assessment.js'
+import { Refusal, type Problem } from '../model/problem.js'
+import { failureOf, type Failure } from './failure.js'
+import { exitCodes, worst, type ExitCode, type Io } from './io.js'
+import type { Target } from './targets.js'
+
+/** What became of one budget; one that is refused stops no other. */
+export interface Outcome {
+  readonly target: Target
+  readonly assessment: Assessment | null
+  readonly failure: Failure | null
+  /** Errors and warnings, of the file and of the engine, each once. */
+  readonly problems: readonly Problem[]
+}
+
+/** Reads and computes one budget. The engine is loaded here, once the call is known to be right. */
+export async function assessTarget(target: Target): Promise<Outcome> {
+  const { assess } = await import('../engine/assess.js')
+  let read: readonly Problem[] = []
+  try {
+    const { budget, problems } = target.read()
+    if (budget === null) throw new Refusal(problems)
+    read = problems
+    const assessment = assess(budget)
+    return { target, assessment, failure: null, problems: each([...problems, ...assessment.warnings]) }
+  } catch (error) {
+    const failure = failureOf(error)
+    return { target, assessment: null, failure, problems: each([...read, ...failure.problems]) }
+  }
+}
+
+export async function assessAll(targets: readonly Target[]): Promise<readonly Outcome[]> {
+  const outcomes: Outcome[] = []
+  for (const target of targets) outcomes.push(await assessTarget(target))
+  return outcomes
+}
+
+/** Without repetitions: the engine may hand on what the reader has said. */
+function each(problems: readonly Problem[]): readonly Problem[] {
+  return [...new Map(problems.map(problem => [formatProblem(problem), problem])).values()]
+}
+
+/** Errors and warnings of every budget, one line each; the exit code of all. */
+export function reportOutcomes(outcomes: readonly Outcome[], io: Io): ExitCode {
+  for (const { problems, failure } of outcomes) {
+    reportProblems(problems, io)
+    // A fault of the engine has no place in the file.
+    if (failure !== null && failure.problems.length === 0) for (const line of failure.lines) io.err(`${line}\n`)
+  }
+  return worst(outcomes.map(outcome => outcome.failure?.code ?? exitCodes.fine))
+}
+
+export function reportProblems(problems: readonly Problem[], io: Io): ExitCode {
+  for (const problem of problems) io.err(`${formatProblem(problem)}\n`)
+  return problems.some(problem => problem.severity === 'error') ? exitCodes.wrong : exitCodes.fine
+}
