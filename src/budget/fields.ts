@@ -28,6 +28,8 @@ export interface FieldsRead {
   readonly parameters: Parameters
   /** By path below the owner, for everything that the file states. */
   readonly places: ReadonlyMap<string, Place>
+  /** False where something in it is wrong or missing: what is then computed from it means nothing. */
+  readonly sound: boolean
 }
 
 export interface Owner {
@@ -47,8 +49,10 @@ export class FieldReader {
 
   read(owner: Owner, fields: Fields, exclusive: readonly Exclusive[] = []): FieldsRead {
     const walk = new Walk(this, owner)
+    const before = this.issues.errors
     const parameters = walk.group(owner.tree, { path: '', place: owner.place, fields, exclusive })
-    return { parameters, places: walk.places }
+    const complete = Object.entries(fields).every(([key, field]) => field.required !== true || key in parameters)
+    return { parameters, places: walk.places, sound: complete && this.issues.errors === before }
   }
 }
 

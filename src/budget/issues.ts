@@ -32,6 +32,10 @@ export class Issues {
     for (const problem of this.#found) if (problem.severity === 'error') this.#settled.add(key(problem.place))
   }
 
+  get errors(): number {
+    return this.#found.filter(problem => problem.severity === 'error').length
+  }
+
   get failed(): boolean {
     return this.#found.some(problem => problem.severity === 'error')
   }

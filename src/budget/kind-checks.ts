@@ -12,15 +12,17 @@ export interface Checked {
   readonly lines: readonly LineSpec[]
   readonly chain: Chain
   readonly values: Values
+  /** Ids of components in which something is wrong already; their kinds are not asked. */
+  readonly unsound: ReadonlySet<string>
 }
 
 /** Lets every kind refuse what its physics forbids. */
-export function checkKinds({ components, lines, chain, values }: Checked, issues: Issues): void {
+export function checkKinds({ components, lines, chain, values, unsound }: Checked, issues: Issues): void {
   const given = new Map<string, Given>(components.map(component => [component.id, givenOf(component, values)]))
   for (const component of components) {
     const own = given.get(component.id)
     const check = checks.get(component.kind)
-    if (own === undefined || check === undefined) continue
+    if (own === undefined || check === undefined || unsound.has(component.id)) continue
     const around: Surroundings = {
       component: id => given.get(id),
       behind: behind(component.id, chain).flatMap(id => given.get(id) ?? []),

@@ -30,7 +30,8 @@ function ownNoise({ key, keyPlace, value }: TreeEntry, reader: FieldReader): Lin
   const declaration = declarations.get(textOf(child(value, 'kind')) ?? '')
   if (declaration?.role !== 'contribution') return null
   const owner = { id: key, tree: value, place: keyPlace }
-  return { kind: declaration.kind, ...reader.read(owner, declaration.fields, declaration.exclusive) }
+  const { parameters, places } = reader.read(owner, declaration.fields, declaration.exclusive)
+  return { kind: declaration.kind, parameters, places }
 }
 
 interface Claimed {

@@ -36,12 +36,12 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
   const band = readBand(child(root, 'band'), issues)
   const directory = new Directory(child(root, 'components'))
   const reader = readerFor(root, { origin, band, directory }, issues)
-  const components = readComponents(directory, reader)
+  const { components, unsound } = readComponents(directory, reader)
   const measurand = readMeasurand(entry(root, 'measurand'), directory, issues)
   const lines = readLines(child(root, 'contributions'), impliedNoises(components), reader)
   const readout = readReadout(root, directory, issues)
   const reference = readReference(child(root, 'reference'), band, reader)
-  const network = { components, lines, readout: readout?.id ?? null }
+  const network = { components, lines, unsound, readout: readout?.id ?? null }
   checkNetwork(network, reader)
   if (measurand !== null) checkMovedMass(measurand, components, issues)
   const revision = readRevision(child(root, 'revision'), issues)
@@ -85,13 +85,21 @@ function entry(root: TreeMap, key: string): { tree: Tree | undefined; place: Pla
   return { tree: found?.value, place: found?.keyPlace ?? root.place }
 }
 
-function readComponents(directory: Directory, reader: FieldReader): ComponentSpec[] {
-  return [...directory.components.values()].flatMap(listed => {
+interface Components {
+  readonly components: readonly ComponentSpec[]
+  readonly unsound: ReadonlySet<string>
+}
+
+function readComponents(directory: Directory, reader: FieldReader): Components {
+  const unsound = new Set<string>()
+  const components = [...directory.components.values()].flatMap(listed => {
     const { declaration, id, place } = listed
     if (declaration === null) return []
-    const read = reader.read(listed, declaration.fields, declaration.exclusive)
-    return [{ id, kind: declaration.kind, place, ...read }]
+    const { parameters, places, sound } = reader.read(listed, declaration.fields, declaration.exclusive)
+    if (!sound) unsound.add(id)
+    return [{ id, kind: declaration.kind, place, parameters, places }]
   })
+  return { components, unsound }
 }
 
 function readReadout(root: TreeMap, directory: Directory, issues: Issues): { id: string; place: Place } | null {
@@ -115,13 +123,14 @@ function readReference(tree: Tree | undefined, band: BandRead | null, reader: Fi
   return reference
 }
 
-function checkNetwork(
-  network: { components: readonly ComponentSpec[]; lines: readonly LineSpec[]; readout: string | null },
-  { values, issues }: FieldReader,
-): void {
-  const { components, lines, readout } = network
-  const chain = readout === null ? { path: [] } : followChain(components, readout, issues)
-  checkKinds({ components, lines, chain, values }, issues)
+interface Network extends Components {
+  readonly lines: readonly LineSpec[]
+  readonly readout: string | null
+}
+
+function checkNetwork({ readout, ...network }: Network, { values, issues }: FieldReader): void {
+  const chain = readout === null ? { path: [] } : followChain(network.components, readout, issues)
+  checkKinds({ ...network, chain, values }, issues)
 }
 
 function readRevision(tree: Tree | undefined, issues: Issues): string | null {
