@@ -4,7 +4,8 @@ import type { Parameters } from '../model/budget.js'
 import type { Family, LineCurve, SourceCurve } from '../model/evaluation.js'
 import { declarationOf } from './catalogue.js'
 import { claimedSources, signedDensity } from './contributions.js'
-import { densityText, percentText, texOf } from './numbers.js'
+import { formatTex } from '../quantity/format.js'
+import { percentText } from './numbers.js'
 import { wordAt } from './slots.js'
 import { substitute } from './substitution.js'
 import { symbolRows, type SymbolRow } from './symbols.js'
@@ -142,5 +143,5 @@ function numbersIn(
   const put = substitute(name, ground, source.own[0])
   if (put === null) return null
   const left = tex.split('=')[0].replace('(f)', '')
-  return `${left} = ${put.tex} = \\left(${texOf(densityText(Math.sqrt(put.value), unit))}\\right)^2`
+  return `${left} = ${put.tex} = \\left(${formatTex(Math.sqrt(put.value), unit)}\\right)^2`
 }

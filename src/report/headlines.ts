@@ -77,7 +77,7 @@ function referenceHeadline(assessment: Assessment, reference: At): Headline {
 }
 
 function marginHeadlines(at: At): readonly Headline[] {
-  const where = `10 log₁₀ of the power ratio to the standard quantum limit at ${frequencyText(at.frequency)}`
+  const where = `to the standard quantum limit, as a ratio of powers, at ${frequencyText(at.frequency)}`
   const margin = (id: string, label: string, value: number | null): readonly Headline[] =>
     value === null ? [] : [{ id, label, value: decibelText(value), note: where }]
   return [
@@ -113,5 +113,5 @@ function occupancyHeadlines({ modes }: Assessment): readonly Headline[] {
 
 /** `26.4`, `0.31`, `6.87 × 10⁴`. */
 export function occupancyText(quanta: number): string {
-  return densityText(quanta, '').trim()
+  return densityText(quanta, '')
 }

@@ -26,13 +26,29 @@ export interface KindView {
   readonly validity: string
 }
 
-const natures: readonly Declaration['nature'][] = ['mechanical', 'field', 'chain', 'detector', 'noise']
+const natures: readonly { readonly nature: Declaration['nature']; readonly title: string }[] = [
+  { nature: 'mechanical', title: 'What moves' },
+  { nature: 'field', title: 'Fields that sense the motion' },
+  { nature: 'chain', title: 'On the way to the detector' },
+  { nature: 'detector', title: 'Detectors and readouts' },
+  { nature: 'noise', title: 'Contributions of their own' },
+]
 
-/** Every kind, along the signal's way, then by its word. */
-export function kindViews(): readonly KindView[] {
-  return [...declarations.values()]
-    .toSorted((a, b) => natures.indexOf(a.nature) - natures.indexOf(b.nature) || (a.kind < b.kind ? -1 : 1))
-    .map(kindView)
+/** Kinds of one nature. */
+export interface KindGroup {
+  readonly id: string
+  readonly title: string
+  readonly kinds: readonly KindView[]
+}
+
+/** Every kind, grouped along the signal's way and sorted by its word within a group. */
+export function kindGroups(): readonly KindGroup[] {
+  const sorted = [...declarations.values()].toSorted((a, b) => (a.kind < b.kind ? -1 : 1))
+  return natures.map(({ nature, title }) => ({
+    id: nature,
+    title,
+    kinds: sorted.filter(declaration => declaration.nature === nature).map(kindView),
+  }))
 }
 
 function kindView(declaration: Declaration): KindView {

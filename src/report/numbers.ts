@@ -1,15 +1,33 @@
-import { withUnit } from '../figure/prefix.js'
+import { formatQuantity, formatTex } from '../quantity/format.js'
+
+const space = '\u00a0'
 
 /** Three significant digits with the prefix that fits: `8.31 aN/√Hz`. */
 export function densityText(asd: number, unit: string): string {
-  return withUnit(asd, unit, 3)
+  return formatQuantity(asd, unit)
 }
 
-/** `1.2435 MHz`: up to seven significant digits, without trailing zeros. */
-export function frequencyText(hertz: number, significant = 6): string {
-  return withUnit(hertz, 'Hz', significant)
-    .replace(/(\.\d*?)0+ /, '$1 ')
-    .replace('. ', ' ')
+/** `1.2435 MHz`: at most so many significant digits, without trailing zeros. */
+export function frequencyText(hertz: number, digits = 6): string {
+  return trimZeros(formatQuantity(hertz, 'Hz', { digits }))
+}
+
+export function frequencyTex(hertz: number, digits = 6): string {
+  return trimZeros(formatTex(hertz, 'Hz', { digits }))
+}
+
+/** A plain number; powers of ten where it is very small or large: `6.87 × 10⁴`. */
+export function numberText(value: number, digits = 4): string {
+  return trimZeros(formatQuantity(value, '', { digits }))
+}
+
+export function numberTex(value: number, digits = 4): string {
+  return trimZeros(formatTex(value, '', { digits }))
+}
+
+/** Zeros at the end of the first decimal fraction say nothing about a number that carries no uncertainty. */
+function trimZeros(text: string): string {
+  return text.replace(/\.(\d*?)0+(?=\D|$)/, (_, kept: string) => (kept === '' ? '' : `.${kept}`))
 }
 
 /** `4.1 dB`, with a true minus sign. */
@@ -17,69 +35,37 @@ export function decibelText(value: number): string {
   return `${value
     .toFixed(1)
     .replace(/^-0\.0$/, '0.0')
-    .replace('-', '−')} dB`
+    .replace('-', '−')}${space}dB`
 }
 
 /** `4.1 dB above`, `0.3 dB below`, `at`: where something stands relative to a limit. */
 export function marginText(value: number): string {
   const rounded = Math.round(value * 10) / 10
   if (rounded === 0) return 'at'
-  return `${Math.abs(rounded).toFixed(1)} dB ${rounded > 0 ? 'above' : 'below'}`
+  return `${Math.abs(rounded).toFixed(1)}${space}dB ${rounded > 0 ? 'above' : 'below'}`
 }
 
 /** `62 %`, `0.4 %`, `< 0.01 %`; a negative share keeps its sign. */
 export function percentText(share: number): string {
   const percent = Math.abs(share) * 100
-  if (percent === 0) return '0 %'
-  if (percent < 0.01) return share < 0 ? '> −0.01 %' : '< 0.01 %'
+  if (percent === 0) return `0${space}%`
+  if (percent < 0.01) return `${share < 0 ? '> −' : '< '}0.01${space}%`
   const text = percent >= 99.95 ? percent.toFixed(0) : percent >= 10 ? percent.toFixed(1) : percent.toPrecision(2)
-  return `${share < 0 ? '−' : ''}${text} %`
+  return `${share < 0 ? '−' : ''}${text}${space}%`
 }
 
-/** A plain number of at most four significant digits; powers of ten outside 10⁻³ … 10⁵. */
-export function numberText(value: number, significant = 4): string {
-  return withUnit(value, '', significant)
-    .trim()
-    .replace(/(\.\d*?)0+($| )/, '$1$2')
-    .replace(/\.($| )/, '$1')
-}
-
-/** `1.20 MHz to 1.30 MHz`, in one unit where both ends share it. */
+/** `1.20 – 1.30 MHz`, in one unit where both ends share it. */
 export function rangeText(from: number, to: number): string {
-  const [low, high] = [frequencyText(from, 5), frequencyText(to, 5)]
-  const [lowNumber, lowUnit] = low.split(' ')
-  return lowUnit === high.split(' ')[1] ? `${lowNumber} – ${high}` : `${low} – ${high}`
+  const [low, high] = distinct(from, to)
+  const [number, unit] = low.split(space)
+  return unit === high.split(space)[1] ? `${number} – ${high}` : `${low} – ${high}`
 }
 
-/** A quantity's printed form as TeX: `3.1\,\mathrm{ng}`, `2\,\mathrm{aN}/\sqrt{\mathrm{Hz}}`, `1.2\times10^{5}`. */
-export function texOf(text: string): string {
-  const [number, ...unit] = text.split(' × ').length > 1 ? splitPower(text) : text.split(' ')
-  return `${texNumber(number)}${unit.length > 0 ? `\\,${texUnit(unit.join(' '))}` : ''}`
-}
-
-function splitPower(text: string): string[] {
-  const [, number, unit] = /^(\S+ × 10\S+)(?: (.*))?$/.exec(text) ?? [text, text]
-  return unit === undefined ? [number] : [number, unit]
-}
-
-function texNumber(number: string): string {
-  const [mantissa, power] = number.replace('−', '-').split(' × 10')
-  return power === undefined ? mantissa : `${mantissa}\\times10^{${plainDigits(power)}}`
-}
-
-function plainDigits(superscript: string): string {
-  return [...superscript].map(c => (c === '⁻' ? '-' : String('⁰¹²³⁴⁵⁶⁷⁸⁹'.indexOf(c)))).join('')
-}
-
-/** Products, quotients, powers and roots of unit symbols. */
-export function texUnit(unit: string): string {
-  return unit
-    .replace(/√([A-Za-z]+)/g, (_, symbol: string) => `\\sqrt{\\mathrm{${symbol}}}`)
-    .replace(/(?<![\\A-Za-z{])([µΩ°%]?[A-Za-zΩ]+|[°%])(?![A-Za-z]*[{}])/g, '\\mathrm{$1}')
-    .replace(/[⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+/g, power => `^{${plainDigits(power)}}`)
-    .replace(/µ/g, '\\mu ')
-    .replace(/·/g, '\\cdot ')
-    .replace(/Ω/g, '\\Omega ')
-    .replace(/°/g, '^\\circ ')
-    .replace(/%/g, '\\%')
+/** Two frequencies with as many digits as it takes to tell them apart, five at least. */
+function distinct(from: number, to: number): readonly [string, string] {
+  for (let digits = 5; digits < 15; digits++) {
+    const texts = [frequencyText(from, digits), frequencyText(to, digits)] as const
+    if (texts[0] !== texts[1] || from === to) return texts
+  }
+  return [frequencyText(from, 15), frequencyText(to, 15)]
 }

@@ -26,8 +26,8 @@ function parameterRow(root: Root): ParameterRow {
   return {
     id: root.id,
     written: root.text,
-    si: siText(root.value, root.dimension),
-    uncertainty: root.uncertainty > 0 ? siUncertaintyText(root) : '',
+    si: siText(root),
+    uncertainty: siUncertaintyText(root),
     evidence: root.evidence ?? '',
     assumed: root.evidence === 'assumed',
     about: root.about ?? '',

@@ -1,7 +1,7 @@
 import type { Assessment, CavityState, ModeState } from '../model/assessment.js'
 import { occupancyText } from './headlines.js'
 import { frequencyText, numberText } from './numbers.js'
-import { withUnit } from '../figure/prefix.js'
+import { formatQuantity } from '../quantity/format.js'
 
 /** One fact about a mode or a cavity at the working point. */
 export interface Fact {
@@ -30,7 +30,7 @@ function modeFacts(mode: ModeState): readonly Fact[] {
     fact('Linewidth, light on', frequencyText(mode.effectiveLinewidth, 3)),
     fact('Quanta of its bath', occupancyText(mode.thermalOccupancy)),
     ...optional('Final occupancy', mode.finalOccupancy, occupancyText),
-    ...optional('Zero-point motion', mode.zeroPoint, value => withUnit(value, 'm', 3)),
+    ...optional('Zero-point motion', mode.zeroPoint, value => formatQuantity(value, 'm')),
     ...optional('Cooperativity 4g²/κΓ', mode.cooperativity, value => numberText(value, 3)),
   ]
 }
@@ -43,7 +43,7 @@ function cavityFacts(cavity: CavityState): readonly Fact[] {
   return [
     fact('Linewidth κ/2π', frequencyText(cavity.linewidth, 4)),
     fact('Quanta of the pump', numberText(cavity.quanta, 3)),
-    fact('Power at the port', withUnit(cavity.pumpPower, 'W', 3)),
+    fact('Power at the port', formatQuantity(cavity.pumpPower, 'W')),
     fact('Detuning Δ/2π', frequencyText(cavity.detuning, 4)),
     ...cavity.ports.map(port =>
       fact(

@@ -1,6 +1,7 @@
 import type { Budget, Parameters } from '../model/budget.js'
-import { densityText, frequencyText, numberText, texOf } from './numbers.js'
-import { isDensity, slotAt, slotRoot, slotValue } from './slots.js'
+import { formatTex } from '../quantity/format.js'
+import { frequencyTex, numberTex } from './numbers.js'
+import { isDensity, slotAt, slotValue } from './slots.js'
 import { boltzmannConstant, reducedPlanckConstant } from '../physics/constants.js'
 
 /** What a closed equation is evaluated with. */
@@ -45,15 +46,14 @@ function bath(ground: Ground, law: 'viscous' | 'structural'): Substitution | nul
   const quality = channelQuality(ground)
   if (mass === null || bare === null || temperature === null || quality === null) return null
   const omega = 2 * Math.PI * ground.frequency
-  const bareOmega = 2 * Math.PI * bare.value
-  const quanta = occupancy(omega, temperature.value)
+  const bareOmega = 2 * Math.PI * bare
+  const quanta = occupancy(omega, temperature)
   const scale = law === 'viscous' ? omega * bareOmega : bareOmega * bareOmega
-  const bareTex = `2\\pi\\cdot ${texOf(frequencyText(bare.value))}`
-  const rates =
-    law === 'viscous' ? `(2\\pi\\cdot ${texOf(frequencyText(ground.frequency))})(${bareTex})` : `(${bareTex})^2`
+  const bareTex = `2\\pi\\cdot ${frequencyTex(bare)}`
+  const rates = law === 'viscous' ? `(2\\pi\\cdot ${frequencyTex(ground.frequency)})(${bareTex})` : `(${bareTex})^2`
   return {
-    tex: `4\\hbar\\left(${texOf(numberText(quanta))}+\\tfrac12\\right)${rates}\\,\\frac{${texOf(mass.text)}}{${texOf(numberText(quality))}}`,
-    value: (4 * reducedPlanckConstant * scale * (quanta + 0.5) * mass.value) / quality,
+    tex: `4\\hbar\\left(${numberTex(quanta)}+\\tfrac12\\right)${rates}\\,\\frac{${formatTex(mass, 'kg')}}{${numberTex(quality)}}`,
+    value: (4 * reducedPlanckConstant * scale * (quanta + 0.5) * mass) / quality,
   }
 }
 
@@ -68,29 +68,22 @@ function level(ground: Ground): Substitution | null {
   const stated = slotValue(ground.budget, spec.level)
   const psd = spec.power ? stated : stated * stated
   const exponent = slotValue(ground.budget, spec.exponent)
-  const start = `\\left(${texOf(densityText(Math.sqrt(psd), ground.unit))}\\right)^2`
+  const start = `\\left(${formatTex(Math.sqrt(psd), ground.unit)}\\right)^2`
   if (exponent === 0 || spec.reference === null) return { tex: start, value: psd }
   const reference = slotValue(ground.budget, spec.reference)
   return {
-    tex: `${start}\\left(\\frac{${texOf(frequencyText(ground.frequency))}}{${texOf(frequencyText(reference))}}\\right)^{${texOf(numberText(exponent))}}`,
+    tex: `${start}\\left(\\frac{${frequencyTex(ground.frequency)}}{${frequencyTex(reference)}}\\right)^{${numberTex(exponent)}}`,
     value: psd * (ground.frequency / reference) ** exponent,
   }
 }
 
-interface Given {
-  readonly value: number
-  readonly text: string
-}
-
-function given({ budget, parameters }: Ground, ...path: readonly string[]): Given | null {
+function given({ budget, parameters }: Ground, ...path: readonly string[]): number | null {
   const slot = slotAt(parameters, ...path)
-  if (slot === null) return null
-  const value = slotValue(budget, slot)
-  return { value, text: slotRoot(budget, slot)?.text ?? numberText(value) }
+  return slot === null ? null : slotValue(budget, slot)
 }
 
 /** A channel's own value, else the mode's. */
-function channelOr(ground: Ground, field: string): Given | null {
+function channelOr(ground: Ground, field: string): number | null {
   const own = ground.channel === null ? null : given(ground, 'losses', ground.channel, field)
   return own ?? given(ground, field)
 }
@@ -99,8 +92,8 @@ function channelOr(ground: Ground, field: string): Given | null {
 function channelQuality(ground: Ground): number | null {
   const channel = ground.channel ?? ''
   const own = given(ground, 'losses', channel, 'quality')
-  if (own !== null) return own.value
+  if (own !== null) return own
   const total = given(ground, 'quality')
   if (total === null) return null
-  return total.value / (given(ground, 'losses', channel, 'share')?.value ?? 1)
+  return total / (given(ground, 'losses', channel, 'share') ?? 1)
 }

@@ -1,4 +1,5 @@
 import type { Assessment } from '../model/assessment.js'
+import { EngineFault } from '../model/problem.js'
 import type { Family } from '../model/evaluation.js'
 
 /** How a family is called in tables. */
@@ -17,6 +18,13 @@ export const familyTitles: { readonly [family in Family]: string } = {
 /** Title of a line by its id. */
 export function lineTitle(assessment: Assessment, id: string): string {
   return assessment.evaluation.lines.find(line => line.id === id)?.title ?? id
+}
+
+/** Family of a line by its id. */
+export function lineFamily(assessment: Assessment, id: string): Family {
+  const line = assessment.evaluation.lines.find(each => each.id === id)
+  if (line === undefined) throw new EngineFault(`${id} dominates a part of the band but is no line of the budget`)
+  return line.family
 }
 
 /** A title within a sentence: `Thermal` becomes `thermal`, `RF pickup` stays. */

@@ -6,9 +6,14 @@ import { cautions, type Caution } from './cautions.js'
 import { contributionRows, limitRows, type ContributionRow, type LimitRow } from './contributions.js'
 import { evidenceOf, type Evidence } from './evidence.js'
 import { headlineNumbers, opening, type Headline, type Opening } from './headlines.js'
-import { frequencyText, rangeText } from './numbers.js'
+import { densityText, frequencyText, rangeText } from './numbers.js'
 import { parameterRows, type ParameterRow } from './parameters.js'
 import { cavityBlocks, modeBlocks, type StateBlock } from './state.js'
+
+/** A card whose references have got their numbers in the report's list. */
+export interface CitedCard extends EquationCard {
+  readonly citations: readonly number[]
+}
 
 /** Everything that a report prints, as plain data with finished texts; TeX stays TeX until the template typesets it. */
 export interface ReportView {
@@ -30,8 +35,10 @@ export interface ReportView {
   readonly headlines: readonly Headline[]
   readonly bands: readonly BandRow[]
   readonly contributions: readonly ContributionRow[]
+  /** At the reference frequency. */
+  readonly total: { readonly value: string }
   readonly limits: readonly LimitRow[]
-  readonly cards: readonly EquationCard[]
+  readonly cards: readonly CitedCard[]
   readonly parameters: readonly ParameterRow[]
   readonly modes: readonly StateBlock[]
   readonly cavities: readonly StateBlock[]
@@ -46,6 +53,7 @@ export interface ReportView {
 export function reportView(assessment: Assessment): ReportView {
   const { budget } = assessment
   const cards = equationCards(assessment)
+  const cited = [...new Set(cards.flatMap(card => card.references))]
   return {
     sensor: budget.sensor,
     title: budget.title,
@@ -62,15 +70,16 @@ export function reportView(assessment: Assessment): ReportView {
     headlines: headlineNumbers(assessment),
     bands: bandRows(assessment),
     contributions: contributionRows(assessment),
+    total: { value: densityText(Math.sqrt(assessment.atReference.total[0]), assessment.unit) },
     limits: limitRows(assessment),
-    cards,
+    cards: cards.map(card => ({ ...card, citations: card.references.map(key => cited.indexOf(key) + 1) })),
     parameters: parameterRows(assessment),
     modes: modeBlocks(assessment),
     cavities: cavityBlocks(assessment),
     evidence: evidenceOf(assessment),
     warnings: [...new Set([...budget.warnings, ...assessment.warnings].map(warningText))],
     cautions: cautions(assessment),
-    bibliography: [...new Set(cards.flatMap(card => card.references))].map(key => ({ key, text: referenceText(key) })),
+    bibliography: cited.map(key => ({ key, text: referenceText(key) })),
   }
 }
 

@@ -1,6 +1,7 @@
 import { readdir, readFile } from 'node:fs/promises'
 import { createRequire } from 'node:module'
 import { dirname, join } from 'node:path'
+import { figureCss } from '../figure/figure-css.js'
 import { packageFolder } from './package-folder.js'
 
 const require = createRequire(import.meta.url)
@@ -21,6 +22,7 @@ export async function assetFiles(typesetStyles: string): Promise<ReadonlyMap<str
   const files = new Map<string, string | Uint8Array>()
   const folder = join(packageFolder, 'templates', 'assets')
   for (const name of (await readdir(folder)).toSorted()) files.set(`assets/${name}`, await readFile(join(folder, name)))
+  files.set('assets/figure.css', figureCss())
   for (const [name, file] of fontFiles)
     files.set(`assets/fonts/${file}`, await readFile(join(packageOf(name), 'files', file)))
   for (const [path, content] of await katexFiles(typesetStyles)) files.set(path, content)

@@ -1,7 +1,7 @@
 import type { Assessment } from '../model/assessment.js'
 import { formatProblem } from '../budget/format-problem.js'
 import { conventions, type Convention } from '../report/conventions.js'
-import { kindViews, type KindView } from '../report/kind-view.js'
+import { kindGroups, type KindGroup, type KindView } from '../report/kind-view.js'
 import { reportView, type ReportView } from '../report/view.js'
 import type { SensorResult, SiteInput } from './build.js'
 import { reportPictures, type ReportPictures } from './pictures.js'
@@ -44,6 +44,7 @@ export interface SitePages {
   readonly sensors: readonly SensorEntry[]
   readonly reports: readonly ReportPage[]
   readonly broken: readonly BrokenPage[]
+  readonly kindGroups: readonly KindGroup[]
   readonly kinds: readonly (PagePlace & { readonly view: KindView })[]
   readonly conventions: readonly Convention[]
 }
@@ -51,12 +52,14 @@ export interface SitePages {
 /** Everything that the templates print, in an order that depends on names alone. */
 export function sitePages({ project, results }: SiteInput): SitePages {
   const sensors = results.toSorted((a, b) => (a.sensor < b.sensor ? -1 : 1)).map(sensorEntry)
+  const groups = kindGroups()
   return {
     site: { title: project.title, date: project.date ?? '' },
     sensors,
     reports: sensors.flatMap(({ sensor, report }) => (report === null ? [] : reportPages(sensor, report))),
     broken: sensors.filter(({ report }) => report === null).map(brokenPage),
-    kinds: kindViews().map(view => ({ ...placeOf(`catalogue/${view.kind}/index.html`), view })),
+    kindGroups: groups,
+    kinds: groups.flatMap(group => group.kinds).map(view => ({ ...placeOf(`catalogue/${view.kind}/index.html`), view })),
     conventions,
   }
 }

@@ -20,7 +20,7 @@ const rootTable: readonly (readonly [string, number, number, string, string, str
   ['cavity.ports.back.rate', 2 * Math.PI * 90e3, 0, 'rate', '90 kHz', null, null],
   ['cavity.pump.power', 3e-6, 0, 'power', '3 µW', '<b>power</b> & more at the window', 'assumed'],
   ['detector.efficiency', 0.72, 0.03, 'power-ratio', '0.72(3)', null, null],
-  ['stray.density', 2e-18, 0, 'force-density', '2 aN/√Hz', null, 'assumed'],
+  ['stray.density', 2e-18, 0, 'force-amplitude-density', '2 aN/√Hz', null, 'assumed'],
 ]
 
 export const roots: readonly Root[] = rootTable.map(

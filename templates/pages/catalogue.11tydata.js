@@ -1,0 +1,1 @@
+export default { permalink: '/catalogue/index.html', up: '../' }

@@ -1,0 +1,1 @@
+export default { permalink: '/conventions/index.html', up: '../' }
