@@ -2,9 +2,8 @@ import fc from 'fast-check'
 import katex from 'katex'
 import { describe, expect, test } from 'vitest'
 import { formatPlain, formatQuantity, formatTex, type FormatOptions } from '../../src/quantity/format.js'
-import { parseQuantity } from '../../src/quantity/parse.js'
+import { parseQuantity, parseUnit } from '../../src/quantity/parse.js'
 import { factorOf } from '../../src/quantity/unit-meaning.js'
-import { parseUnit } from '../../src/quantity/parse.js'
 
 /** Value, unit, options, what is printed (with plain spaces), and its TeX. */
 const printed: readonly (readonly [number, string, FormatOptions, string, string])[] = [
@@ -40,7 +39,8 @@ const printed: readonly (readonly [number, string, FormatOptions, string, string
 ]
 
 describe('printed quantities', () => {
-  test.each(printed)('%d %s', (value, unit, options, text, tex) => {
+  test.each(printed)('%d %s', (...row) => {
+    const [value, unit, options, text, tex] = row
     expect(formatQuantity(value, unit, options)).toBe(text.replaceAll(' ', '\u00a0').replace('s\u00a0m', 's m'))
     expect(formatPlain(value, unit, options)).toBe(text.replace('−', '-'))
     expect(formatTex(value, unit, options)).toBe(tex)

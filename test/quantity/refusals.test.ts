@@ -129,32 +129,24 @@ describe('refusals name the piece, its place and the remedy', () => {
     expect(text.slice(error.offset, error.offset + error.length)).toBe(piece)
   })
 
-  test('the remedies that a message writes out are themselves read', () => {
-    for (const [, , message] of refusals) {
-      const remedy = message.slice(message.lastIndexOf('; write'))
-      for (const [, written] of remedy.matchAll(/`([^`]*\d[^`]*)`/g)) {
-        if (/^[\d(]/.test(written)) expect(() => parseQuantity(written)).not.toThrow()
-      }
-    }
+  test('the quantities that a remedy writes out are themselves read', () => {
+    const remedies = refusals.map(([, , message]) => message.slice(message.lastIndexOf('; write')))
+    const written = remedies.flatMap(remedy => [...remedy.matchAll(/`([-(]?\d[^`]*)`/g)].map(([, quantity]) => quantity))
+    expect(written.length).toBeGreaterThan(20)
+    for (const quantity of written) expect(() => parseQuantity(quantity)).not.toThrow()
   })
 
-  test('no text makes it slow', () => {
+  test.each([
+    '('.repeat(200),
+    `3 ${'('.repeat(198)}`,
+    `3 ${'√'.repeat(198)}`,
+    `3 ${'foo '.repeat(49)}`,
+    `3${' '.repeat(198)}x`,
+    '9'.repeat(201),
+    '1 000'.repeat(40),
+  ])('%s is refused at once', text => {
     const start = performance.now()
-    for (const text of [
-      '('.repeat(200),
-      `3 ${'('.repeat(198)}`,
-      `3 ${'√'.repeat(198)}`,
-      `3 ${'m '.repeat(99)}`,
-      `3${' '.repeat(198)}x`,
-      '9'.repeat(200),
-      '1 000'.repeat(40),
-    ]) {
-      try {
-        parseQuantity(text)
-      } catch (error) {
-        expect(error).toBeInstanceOf(QuantityError)
-      }
-    }
-    expect(performance.now() - start).toBeLessThan(1000)
+    expect(() => parseQuantity(text)).toThrow(QuantityError)
+    expect(performance.now() - start).toBeLessThan(100)
   })
 })
