@@ -1,8 +1,15 @@
 import { describeDimension } from './describe.js'
-import { dimensionOf, equalDimensions, exponentOf, isDimensionless, type Dimension } from './dimension.js'
+import {
+  baseQuantities,
+  dimensionOf,
+  equalDimensions,
+  exponentOf,
+  isDimensionless,
+  type Dimension,
+} from './dimension.js'
 import { QuantityError } from './error.js'
 import type { Quantity } from './parse.js'
-import { equal, one, rational, zero } from './rational.js'
+import { equal, one, rational, zero, type Rational } from './rational.js'
 
 /** The dimensions that a catalogue entry may declare for a field. */
 export type DeclaredName =
@@ -188,9 +195,10 @@ export function toDensity(quantity: Quantity, of: DensityOf): Density {
   return { value, uncertainty, power: isPower }
 }
 
-const timeIndex = 2
+const timeIndex = baseQuantities.indexOf('time')
 
-function shifted(numerator: number): ReturnType<typeof rational> {
+/** The exponent of time of an amplitude density: √Hz in the denominator adds one half. */
+function shifted(numerator: number): Rational {
   return rational(2 * numerator + 1, 2)
 }
 
