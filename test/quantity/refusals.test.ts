@@ -131,7 +131,9 @@ describe('refusals name the piece, its place and the remedy', () => {
 
   test('the quantities that a remedy writes out are themselves read', () => {
     const remedies = refusals.map(([, , message]) => message.slice(message.lastIndexOf('; write')))
-    const written = remedies.flatMap(remedy => [...remedy.matchAll(/`([-(]?\d[^`]*)`/g)].map(([, quantity]) => quantity))
+    const written = remedies.flatMap(remedy =>
+      [...remedy.matchAll(/`([-(]?\d[^`]*)`/g)].map(([, quantity]) => quantity),
+    )
     expect(written.length).toBeGreaterThan(20)
     for (const quantity of written) expect(() => parseQuantity(quantity)).not.toThrow()
   })
