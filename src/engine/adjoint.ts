@@ -1,5 +1,7 @@
 import type { Entry, Injection, Network } from '../model/network.js'
-import { addForms, constantForm, isZeroForm, negateForm, scaleForm, zeroForm, type Form, type Tape } from './tape.js'
+import { addForms, constantForm, isZeroForm, negateForm, scaleForm, zeroForm, type Form } from './form.js'
+import { oscillator } from './oscillator.js'
+import type { Tape } from './tape.js'
 
 /** Factors of the transposed field block, kept as forms on the tape: Dᵀ = L·U without row exchanges. */
 interface FieldFactors {
@@ -23,7 +25,7 @@ export interface Adjoint {
 
 function entryForm(tape: Tape, entry: Entry): Form {
   if (entry.form === 'constant') return constantForm(entry.value)
-  if (entry.form === 'oscillator') return tape.oscillator(entry)
+  if (entry.form === 'oscillator') return oscillator(tape, entry)
   return tape.reciprocal(tape.decayReciprocal(entry))
 }
 

@@ -1,5 +1,7 @@
 import type { Complex, Covariance } from '../model/network.js'
-import { realZero, scaleReal, type Form, type Real, type Tape } from './tape.js'
+import type { Form } from './form.js'
+import { realZero, scaleReal, type Real } from './real.js'
+import type { Tape } from './tape.js'
 
 const isZero = (c: Complex): boolean => c.re === 0 && c.im === 0
 

@@ -1,13 +1,16 @@
 import type { Budget } from '../model/budget.js'
-import type { Evaluation, LimitCurve, LineCurve, Parts, SourceCurve } from '../model/evaluation.js'
-import type { Covariance, Network, Source } from '../model/network.js'
+import type { Evaluation, Parts } from '../model/evaluation.js'
+import type { Network, Source } from '../model/network.js'
 import type { Points } from '../model/points.js'
-import { adjoint, transfer, type Adjoint } from './adjoint.js'
-import { bilinear, quadratic } from './densities.js'
+import { adjoint, transfer } from './adjoint.js'
+import { Arena } from './arena.js'
 import { gridArrays } from './grid-arrays.js'
-import { planLimits } from './limits.js'
-import { planLines, type LinePlan, type Piece } from './lines.js'
-import { realZero, scaleReal, Tape, type Form, type Real } from './tape.js'
+import { planLimits, type LimitPlan } from './limits.js'
+import { planLines, type LinePlan } from './lines.js'
+import { memory } from './loops.js'
+import type { Real } from './real.js'
+import { SourceDensities, type RealParts } from './source-densities.js'
+import { Tape } from './tape.js'
 
 /** What to compute besides the total and the lines. */
 export interface Wanted {
@@ -15,142 +18,120 @@ export interface Wanted {
   readonly limits: boolean
 }
 
-/** Power densities of one source at the measurand, as reals on the tape; computed when asked for. */
-class SourceDensities {
-  readonly #full: readonly Form[]
-  readonly #clamped: readonly Form[]
-  readonly #moved: readonly Form[]
-  readonly #inverseResponse: Real
-  readonly #shape: Real
+/** Makes one curve after a run: addresses of registers are turned into arrays in the order in which they were planned. */
+class Harvest {
+  readonly addresses: number[] = []
+  #next = 0
+  #arrays: Float64Array[] = []
 
-  constructor(
-    readonly tape: Tape,
-    readonly source: Source,
-    rows: Adjoint,
-    inverseResponse: Real,
-  ) {
-    this.#full = source.nodes.map(node => transfer(rows.full, node, true))
-    this.#clamped = source.nodes.map(node => transfer(rows.clamped, node, true))
-    this.#moved = source.nodes.map(node => transfer(rows.moved, node, false))
-    this.#inverseResponse = inverseResponse
-    this.#shape = tape.shape(source.shape)
+  constructor(readonly tape: Tape) {}
+
+  plan(...terms: Real[]): void {
+    this.addresses.push(this.tape.written(terms))
   }
 
-  #times(density: Real): Real {
-    return this.tape.product(this.tape.product(density, this.#inverseResponse), this.#shape)
+  planParts({ imprecision, backAction, correlation }: RealParts): void {
+    for (const part of [imprecision, backAction, correlation]) this.plan(part)
   }
 
-  all(): Real[] {
-    const { vacuum, heating } = this.source
-    return [this.#times(quadratic(this.tape, this.#full, heating === null ? vacuum : sum(vacuum, heating)))]
+  run(points: Points, arena: Arena): void {
+    const grid = gridArrays(points)
+    this.#arrays = this.addresses.map(() => arena.take(grid.length))
+    this.#next = 0
+    this.tape.run(grid, ({ start, n }) => {
+      for (const [i, array] of this.#arrays.entries()) {
+        const from = this.addresses[i] / 8
+        array.set(memory.subarray(from, from + n), start)
+      }
+    })
   }
 
-  parts(block: Covariance): { imprecision: Real; backAction: Real; correlation: Real } {
-    return {
-      imprecision: this.#times(quadratic(this.tape, this.#clamped, block)),
-      backAction: this.#times(quadratic(this.tape, this.#moved, block)),
-      correlation: this.#times(scaleReal(bilinear(this.tape, this.#clamped, block, this.#moved), 2)),
-    }
+  take(): Float64Array {
+    return this.#arrays[this.#next++]
   }
 
-  piece(piece: Piece | 'all'): Real[] {
-    const { vacuum, heating } = this.source
-    if (piece === 'all') return this.all()
-    if (piece === 'heating') return heating === null ? [] : [this.#times(quadratic(this.tape, this.#full, heating))]
-    const parts = this.parts(vacuum)
-    if (piece === 'imprecision') return [parts.imprecision]
-    return [piece === 'back-action' ? parts.backAction : parts.correlation]
-  }
-}
-
-const sum = (a: Covariance, b: Covariance): Covariance =>
-  a.map((row, i) => row.map((value, j) => ({ re: value.re + b[i][j].re, im: value.im + b[i][j].im })))
-
-/** Arrays that a run of the tape fills. */
-class Outputs {
-  constructor(
-    readonly tape: Tape,
-    readonly length: number,
-  ) {}
-
-  array(terms: readonly Real[]): Float64Array {
-    const array = new Float64Array(this.length)
-    this.tape.output(array, terms)
-    return array
-  }
-
-  parts({ imprecision, backAction, correlation }: { imprecision: Real; backAction: Real; correlation: Real }): Parts {
-    return {
-      imprecision: this.array([imprecision]),
-      backAction: this.array([backAction]),
-      correlation: this.array([correlation]),
-    }
-  }
-}
-
-function sourceCurve(out: Outputs, densities: SourceDensities): SourceCurve {
-  const { id, title, family, readout, owner, channel, ownUnit, ownFactor, vacuum, heating, shape, parted } =
-    densities.source
-  return {
-    id,
-    title,
-    family,
-    readout,
-    owner,
-    channel,
-    ownUnit,
-    psd: out.array(densities.all()),
-    own: out.array([scaleReal(out.tape.shape(shape), ownFactor)]),
-    ...(parted && { vacuum: out.parts(densities.parts(vacuum)) }),
-    ...(heating !== null && { heating: out.parts(densities.parts(heating)) }),
-  }
-}
-
-function lineCurve(out: Outputs, line: LinePlan, of: (source: Source) => SourceDensities): LineCurve {
-  return {
-    id: line.id,
-    title: line.title,
-    family: line.family,
-    signed: line.signed,
-    of: line.pieces.map(({ source, piece }) => (piece === 'all' ? source.id : `${source.id} ${piece}`)),
-    psd: out.array(line.pieces.flatMap(({ source, piece }) => of(source).piece(piece))),
+  takeParts(): Parts {
+    return { imprecision: this.take(), backAction: this.take(), correlation: this.take() }
   }
 }
 
 /**
- * The primitive of the engine: all curves of a network on the given points. Power densities, one-sided, at the measurand
- * (unit²/Hz). Every source's density is t S t†/|R|² with t and R from one adjoint solution at each point.
+ * The engine's primitive, prepared for one network: `at(points)` gives all curves there. Power densities, one-sided, at the
+ * measurand (unit²/Hz): every source's density is t S t†/|R|², with t and R from one adjoint solution at each point.
  */
+export class Evaluator {
+  readonly #harvest: Harvest
+  readonly #sources: readonly Source[]
+  readonly #lines: readonly LinePlan[]
+  readonly #limits: readonly LimitPlan[]
+
+  constructor(budget: Pick<Budget, 'lines'>, network: Network, wanted: Wanted) {
+    const tape = new Tape()
+    const rows = adjoint(tape, network)
+    const response = transfer(rows.full, network.measurand, true)
+    const inverseResponse = tape.inverseAbs2(response)
+    const all = new Map(network.sources.map(s => [s, new SourceDensities(tape, s, rows, inverseResponse)]))
+    this.#harvest = new Harvest(tape)
+    this.#sources = wanted.sources ? network.sources : []
+    this.#lines = planLines(budget, network)
+    this.#limits = wanted.limits ? planLimits(tape, network, rows, inverseResponse) : []
+    this.#harvest.plan(...[...all.values()].map(d => d.all()))
+    this.#harvest.plan(...[...all.values()].filter(d => d.source.readout).map(d => d.all()))
+    for (const { pieces } of this.#lines) {
+      this.#harvest.plan(...pieces.flatMap(({ source, piece }) => all.get(source)!.piece(piece)))
+    }
+    for (const source of this.#sources) this.#planSource(all.get(source)!)
+    for (const limit of this.#limits) this.#harvest.plan(limit.psd)
+    this.#harvest.plan(tape.abs2(response))
+  }
+
+  #planSource(densities: SourceDensities): void {
+    const { parted, vacuum, heating } = densities.source
+    this.#harvest.plan(densities.all())
+    this.#harvest.plan(densities.own())
+    if (parted) this.#harvest.planParts(densities.parts(vacuum))
+    if (heating !== null) this.#harvest.planParts(densities.parts(heating))
+  }
+
+  /** With an arena, the curves of the evaluation before are overwritten. */
+  at(points: Points, arena = new Arena()): Evaluation {
+    const h = this.#harvest
+    arena.reset()
+    h.run(points, arena)
+    return {
+      points,
+      total: h.take(),
+      added: h.take(),
+      lines: this.#lines.map(({ pieces, ...line }) => ({
+        ...line,
+        of: pieces.map(({ source, piece }) => (piece === 'all' ? source.id : `${source.id} ${piece}`)),
+        psd: h.take(),
+      })),
+      sources: this.#sources.map(({ id, title, family, readout, owner, channel, ownUnit, parted, heating }) => ({
+        id,
+        title,
+        family,
+        readout,
+        owner,
+        channel,
+        ownUnit,
+        psd: h.take(),
+        own: h.take(),
+        ...(parted && { vacuum: h.takeParts() }),
+        ...(heating !== null && { heating: h.takeParts() }),
+      })),
+      limits: this.#limits.map(({ psd: _, ...limit }) => ({ ...limit, psd: h.take() })),
+      response: h.take(),
+    }
+  }
+}
+
+/** All curves of a network on the given points, once. */
 export function evaluateAt(
   budget: Pick<Budget, 'lines'>,
   network: Network,
   points: Points,
   wanted: Wanted,
 ): Evaluation {
-  const tape = new Tape()
-  const rows = adjoint(tape, network)
-  const response = transfer(rows.full, network.measurand, true)
-  const inverseResponse = tape.inverseAbs2(response)
-  const all = new Map(network.sources.map(source => [source, new SourceDensities(tape, source, rows, inverseResponse)]))
-  const of = (source: Source): SourceDensities => all.get(source)!
-  const densities = [...all.values()]
-  const limits = wanted.limits ? planLimits(tape, network, rows, inverseResponse) : []
-  const out = new Outputs(tape, points.frequency.length)
-  const evaluation: Evaluation = {
-    points,
-    total: out.array(densities.flatMap(d => d.all())),
-    added: out.array(densities.filter(d => d.source.readout).flatMap(d => d.all())),
-    lines: planLines(budget, network).map(line => lineCurve(out, line, of)),
-    sources: wanted.sources ? densities.map(d => sourceCurve(out, d)) : [],
-    limits: limits.map(({ id, title, bounds, about, psd }): LimitCurve => ({
-      id,
-      title,
-      bounds,
-      about,
-      psd: out.array([psd]),
-    })),
-    response: wanted.limits ? out.array([tape.abs2(response)]) : out.array([realZero]),
-  }
-  tape.run(gridArrays(points))
-  return evaluation
+  return new Evaluator(budget, network, wanted).at(points)
 }

@@ -4,8 +4,6 @@ import type { Points } from '../model/points.js'
 /** What depends on the points alone, computed once for each set of points. */
 export class GridArrays {
   readonly length: number
-  /** Angular frequency in rad/s. */
-  readonly omega: Float64Array
   /** Frequency of each point's anchor in Hz, 0 where it has none. */
   readonly base: Float64Array
   readonly frequency: Float64Array
@@ -20,10 +18,8 @@ export class GridArrays {
     this.length = n
     this.frequency = points.frequency
     this.offset = points.offset
-    this.omega = new Float64Array(n)
     this.base = new Float64Array(n)
     for (let i = 0; i < n; i++) {
-      this.omega[i] = 2 * Math.PI * points.frequency[i]
       const anchor = points.anchor[i]
       this.base[i] = anchor < 0 ? 0 : points.anchors[anchor].frequency
     }

@@ -3,19 +3,10 @@ import type { Network } from '../model/network.js'
 import { reducedPlanckConstant as hbar } from '../physics/constants.js'
 import { transfer, type Adjoint } from './adjoint.js'
 import { quadratic } from './densities.js'
-import {
-  addForms,
-  constantForm,
-  constantReal,
-  isZeroForm,
-  negateForm,
-  scaleForm,
-  scaleReal,
-  zeroForm,
-  type Form,
-  type Real,
-  type Tape,
-} from './tape.js'
+import { addForms, constantForm, isZeroForm, negateForm, scaleForm, zeroForm, type Form } from './form.js'
+import { oscillator } from './oscillator.js'
+import { constantReal, scaleReal, type Real } from './real.js'
+import type { Tape } from './tape.js'
 
 export type LimitPlan = Pick<LimitCurve, 'id' | 'title' | 'bounds' | 'about'> & { readonly psd: Real }
 
@@ -23,7 +14,7 @@ export type LimitPlan = Pick<LimitCurve, 'id' | 'title' | 'bounds' | 'about'> & 
 function bareResponse(tape: Tape, network: Network): Form {
   return network.sensing.weights.reduce((sum, { mode, weight }) => {
     const { mass, frequency, gamma, phi } = mode
-    const response = tape.reciprocal(tape.oscillator({ mass, frequency, gamma, phi }))
+    const response = tape.reciprocal(oscillator(tape, { mass, frequency, gamma, phi }))
     return addForms(sum, scaleForm(response, { re: weight * weight, im: 0 }))
   }, zeroForm)
 }
