@@ -143,5 +143,6 @@ function numbersIn(
   const put = substitute(name, ground, source.own[0])
   if (put === null) return null
   const left = tex.split('=')[0].replace('(f)', '')
-  return `${left} = ${put.tex} = \\left(${formatTex(Math.sqrt(put.value), unit)}\\right)^2`
+  const result = `\\left(${formatTex(Math.sqrt(put.value), unit)}\\right)^2`
+  return put.tex === result ? `${left} = ${result}` : `${left} = ${put.tex} = ${result}`
 }

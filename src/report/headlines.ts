@@ -1,5 +1,5 @@
 import type { Assessment, At } from '../model/assessment.js'
-import { decibelText, densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
+import { densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
 import { inSentence, lineTitle, listText } from './titles.js'
 
 /** A number that a report opens with. */
@@ -77,13 +77,18 @@ function referenceHeadline(assessment: Assessment, reference: At): Headline {
 }
 
 function marginHeadlines(at: At): readonly Headline[] {
-  const where = `to the standard quantum limit, as a ratio of powers, at ${frequencyText(at.frequency)}`
+  const where = `the standard quantum limit, as a ratio of powers, at ${frequencyText(at.frequency)}`
   const margin = (id: string, label: string, value: number | null): readonly Headline[] =>
-    value === null ? [] : [{ id, label, value: decibelText(value), note: where }]
+    value === null ? [] : [{ id, label, value: marginHeadline(value), note: where }]
   return [
     ...margin('total-margin', 'Margin of the total', at.totalMargin),
     ...margin('added-margin', 'Margin of the added noise', at.addedMargin),
   ]
+}
+
+function marginHeadline(margin: number): string {
+  const text = marginText(margin)
+  return text === 'at' ? 'Exactly at' : text
 }
 
 function largestHeadline(assessment: Assessment, at: At): Headline {

@@ -54,11 +54,24 @@ export function percentText(share: number): string {
   return `${share < 0 ? '−' : ''}${text}${space}%`
 }
 
-/** `1.20 – 1.30 MHz`, in one unit where both ends share it. */
+/** `1.2000 – 1.2413 MHz`, in one unit and with equal decimals where both ends share the unit. */
 export function rangeText(from: number, to: number): string {
   const [low, high] = distinct(from, to)
-  const [number, unit] = low.split(space)
-  return unit === high.split(space)[1] ? `${number} – ${high}` : `${low} – ${high}`
+  const [lowNumber, lowUnit] = low.split(space)
+  const [highNumber, highUnit] = high.split(space)
+  const dash = `${space}–${space}`
+  if (lowUnit !== highUnit) return `${low}${dash}${high}`
+  const decimals = Math.max(decimalsOf(lowNumber), decimalsOf(highNumber))
+  return `${padded(lowNumber, decimals)}${dash}${padded(highNumber, decimals)}${space}${highUnit}`
+}
+
+function decimalsOf(number: string): number {
+  return (number.split('.')[1] ?? '').length
+}
+
+function padded(number: string, decimals: number): string {
+  const missing = decimals - decimalsOf(number)
+  return missing === 0 ? number : `${number}${number.includes('.') ? '' : '.'}${'0'.repeat(missing)}`
 }
 
 /** Two frequencies with as many digits as it takes to tell them apart, five at least. */

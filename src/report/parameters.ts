@@ -19,10 +19,10 @@ export interface ParameterRow {
 export function parameterRows({ budget }: Assessment): readonly ParameterRow[] {
   return budget.roots
     .toSorted((a, b) => a.place.line - b.place.line || a.place.column - b.place.column)
-    .map(parameterRow)
+    .map(root => parameterRow(root, budget.file))
 }
 
-function parameterRow(root: Root): ParameterRow {
+function parameterRow(root: Root, file: string): ParameterRow {
   return {
     id: root.id,
     written: root.text,
@@ -32,6 +32,12 @@ function parameterRow(root: Root): ParameterRow {
     assumed: root.evidence === 'assumed',
     about: root.about ?? '',
     measured: root.measured ?? '',
-    place: `${root.place.file}:${root.place.line}`,
+    place: `${besides(root.place.file, file)}:${root.place.line}`,
   }
+}
+
+/** A path as seen from the budget's own folder, where it lies below it. */
+function besides(path: string, file: string): string {
+  const folder = file.slice(0, file.lastIndexOf('/') + 1)
+  return path.startsWith(folder) ? path.slice(folder.length) : path
 }

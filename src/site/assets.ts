@@ -15,6 +15,7 @@ const fontFiles = [
   ['@fontsource-variable/commissioner', 'commissioner-latin-wght-normal.woff2'],
   ['@fontsource-variable/commissioner', 'commissioner-latin-ext-wght-normal.woff2'],
   ['@fontsource-variable/commissioner', 'commissioner-greek-wght-normal.woff2'],
+  ['@fontsource-variable/open-sans', 'open-sans-math-wght-normal.woff2'],
 ] as const
 
 /** Styles and fonts: the package's own, KaTeX's, and the rules that stand for KaTeX's inline styles. */

@@ -180,7 +180,7 @@ interface Densities {
 
 function densities(points: Points): Densities {
   const chi = stiffness(points)
-  const Sx = 4e-38
+  const Sx = 1e-33
   return {
     thermal: points.frequency.map(f => {
       const w = 2 * Math.PI * f
