@@ -8,6 +8,7 @@ export interface SiteProject {
   /** Folder that the budgets' paths are relative to. */
   readonly root: string
   readonly title: string
+  readonly subtitle?: string | null
   /** ISO date (`2026-03-14`) of the commit that is built, or null outside git. */
   readonly date: string | null
 }

@@ -40,7 +40,7 @@ export interface Report {
 
 /** The global data of the templates. */
 export interface SitePages {
-  readonly site: { readonly title: string; readonly date: string }
+  readonly site: { readonly title: string; readonly subtitle: string; readonly date: string }
   readonly sensors: readonly SensorEntry[]
   readonly reports: readonly ReportPage[]
   readonly broken: readonly BrokenPage[]
@@ -54,7 +54,7 @@ export function sitePages({ project, results }: SiteInput): SitePages {
   const sensors = results.toSorted((a, b) => (a.sensor < b.sensor ? -1 : 1)).map(sensorEntry)
   const groups = kindGroups()
   return {
-    site: { title: project.title, date: project.date ?? '' },
+    site: { title: project.title, subtitle: project.subtitle ?? '', date: project.date ?? '' },
     sensors,
     reports: sensors.flatMap(({ sensor, report }) => (report === null ? [] : reportPages(sensor, report))),
     broken: sensors.filter(({ report }) => report === null).map(brokenPage),

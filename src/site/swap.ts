@@ -19,13 +19,24 @@ export async function swap(workshop: Workshop, stage: string): Promise<void> {
   await writeFile(draft, JSON.stringify({ stage, old } satisfies Journal))
   await rename(draft, journal)
   await reached('journal written')
-  if (await exists(target)) await rename(target, old)
-  await reached('old moved away')
-  await rename(stage, target)
+  try {
+    if (await exists(target)) await rename(target, old)
+    await reached('old moved away')
+    await rename(stage, target)
+  } catch (error) {
+    await putBack(workshop, { stage, old })
+    throw error
+  }
   await reached('new in place')
   await rm(journal, { force: true })
   await reached('journal removed')
   await rm(old, { recursive: true, force: true })
+}
+
+/** A rename that the system refuses (another file system, a folder in use) leaves the old site where it was. */
+async function putBack({ target, journal }: Workshop, { old }: Journal): Promise<void> {
+  if (!(await exists(target)) && (await exists(old))) await rename(old, target)
+  await rm(journal, { force: true })
 }
 
 /**
