@@ -49,7 +49,7 @@ export function tableByLine({ unit }: Assessment, at: Evaluation): TextTable {
 
 /** One row a frequency: the total, the margin to the standard quantum limit, the largest contribution; for many of them. */
 export function tableByFrequency(assessment: Assessment, at: Evaluation): TextTable {
-  const limit = standardLimit(at)
+  const limit = at.limits.find(each => each.id === 'sql')?.psd ?? null
   const rows = [...at.points.frequency].map((frequency, i) => {
     const largest = at.lines.reduce((best, line) => (line.psd[i] > best.psd[i] ? line : best))
     return [
@@ -61,10 +61,6 @@ export function tableByFrequency(assessment: Assessment, at: Evaluation): TextTa
     ].map(plain)
   })
   return { head: ['frequency', 'total', 'above the SQL', 'largest', 'its share'], rows, numeric: [0, 1, 2, 4] }
-}
-
-function standardLimit({ limits }: Evaluation): Float64Array | null {
-  return limits.find(limit => /^standard\b/i.test(limit.title))?.psd ?? null
 }
 
 /** Spaces that a terminal may break at, so that columns can be narrowed. */

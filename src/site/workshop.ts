@@ -1,3 +1,4 @@
+import { randomInt } from 'node:crypto'
 import { mkdir, readdir, realpath, rm, writeFile } from 'node:fs/promises'
 import { basename, dirname, join } from 'node:path'
 import { isAlive, thisProcess, type Owner } from './owner.js'
@@ -38,11 +39,9 @@ export async function openWorkshop(outputDir: string, options: WorkshopOptions =
   }
 }
 
-let count = 0
-
-/** A path in the workshop that no other build uses: `site.stage-<pid>-<start>-<count>`. */
+/** A path in the workshop that no other build uses: `site.stage-<pid>-<start>-<random>`. */
 export function freshPath({ folder, target, owner }: Workshop, purpose: 'stage' | 'old' | 'claim'): string {
-  return join(folder, `${basename(target)}.${purpose}-${owner.pid}-${owner.started}-${++count}`)
+  return join(folder, `${basename(target)}.${purpose}-${owner.pid}-${owner.started}-${randomInt(2 ** 47)}`)
 }
 
 /** Removes what builds that no longer run have left; `keep` are paths that a journal still needs. */

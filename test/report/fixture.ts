@@ -246,9 +246,9 @@ function lineCurves(d: Densities): readonly LineCurve[] {
 function limitCurves(d: Densities): readonly LimitCurve[] {
   const about = 'Least added noise of a detector without correlations.'
   return [
-    { id: 'standard-quantum-limit', title: 'Standard quantum limit', psd: d.limit, bounds: 'added', about },
+    { id: 'sql', title: 'Standard quantum limit', psd: d.limit, bounds: 'added', about },
     {
-      ...{ id: 'zero-point', title: 'Zero-point noise', psd: d.limit.map(value => value / 3), bounds: 'total' },
+      ...{ id: 'zero_point', title: 'Zero-point noise', psd: d.limit.map(value => value / 3), bounds: 'total' },
       about: 'The bath at zero temperature.',
     },
   ]
