@@ -11,15 +11,17 @@ export interface Chain {
 /** Follows `reads` from the readout; a way that comes back to itself is an error at every component of the loop. */
 export function followChain(components: readonly ComponentSpec[], readout: string, issues: Issues): Chain {
   const byId = new Map(components.map(component => [component.id, component]))
+  let loops = 0
   for (const component of components) {
     const loop = loopFrom(component.id, byId)
     if (loop === null) continue
+    loops++
     const place = component.places.get('reads') ?? component.place
     const way = loop.map(id => `\`${id}\``).join(' reads ')
     issues.error('loop', place, `${way}: the way of the light must end at a port, such as \`cavity.back\``)
   }
   const path = wayFrom(readout, byId)
-  warnAside(components, new Set(path), issues)
+  if (loops === 0) warnAside(components, new Set(path), issues)
   return { path }
 }
 

@@ -33,7 +33,7 @@ export class DensityReader {
     const table = child(tree, 'table')
     if (level !== undefined && table !== undefined)
       this.issues.error('exclusive', spot.place, 'both `density` and `table` are given; keep one of them')
-    if (level === undefined && table === undefined)
+    if (level === undefined && table === undefined && child(tree, 'expression') === undefined)
       this.issues.error(
         'missing-key',
         spot.place,

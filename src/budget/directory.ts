@@ -3,7 +3,7 @@ import { declarations } from '../catalogue/declarations.js'
 import type { Place } from '../model/problem.js'
 import { textOf } from './amount.js'
 import { nearest } from './nearest.js'
-import { quoted } from './quoted.js'
+import { quoted, withArticle } from './quoted.js'
 import { child, type Tree } from './tree.js'
 
 /** A component as the file lists it, before its fields are read. */
@@ -45,7 +45,7 @@ export class Directory {
     const choice = allowed.length === 0 ? `this file has no ${abilities[of].noun}` : `there ${list(allowed)}`
     if (listed === undefined) return `no component is called ${quoted(word)}; ${choice}${meant(word, allowed)}`
     if (listed.declaration === null || abilities[of].test(listed.declaration)) return null
-    return `\`${word}\` is a ${listed.declaration.kind}, but ${abilities[of].wanted} is needed here; ${choice}`
+    return `\`${word}\` is ${withArticle(listed.declaration.kind)}, but ${abilities[of].wanted} is needed here; ${choice}`
   }
 
   #portFault(word: string): string | null {
@@ -58,9 +58,9 @@ export class Directory {
     if (listed.declaration === null) return null
     if (listed.declaration.nature === 'chain' && port === undefined) return null
     if (listed.declaration.nature === 'chain')
-      return `\`${id}\` is a ${listed.declaration.kind} and has no ports; write \`${id}\` alone`
+      return `\`${id}\` is ${withArticle(listed.declaration.kind)} and has no ports; write \`${id}\` alone`
     if (listed.declaration.nature !== 'field')
-      return `\`${id}\` is a ${listed.declaration.kind}, from which no light can be read; there ${list(allowed)}`
+      return `\`${id}\` is ${withArticle(listed.declaration.kind)}, from which no light can be read; there ${list(allowed)}`
     const own = ports.map(name => `${id}.${name}`)
     if (port === undefined) return `\`${id}\` has several ports; name one: ${words(own)}`
     return ports.includes(port) ? null : `\`${id}\` has no port \`${port}\`; there ${list(own)}${meant(word, own)}`

@@ -44,6 +44,11 @@ function parameter(error: ErrorObject, key: string): unknown {
   return (error.params as Record<string, unknown>)[key]
 }
 
+/** What the schema says about an error, as a word: the unknown key, the missing one. */
+export function parameterOf(error: ErrorObject, key: string): string {
+  return word(parameter(error, key))
+}
+
 function word(value: unknown): string {
   return typeof value === 'string' || typeof value === 'number' ? String(value) : ''
 }
@@ -60,7 +65,8 @@ function holder(pointed: Pointed): string {
   return key === undefined ? 'a budget' : quoted(key)
 }
 
-function allowedKeys(error: ErrorObject): string[] {
+/** The keys that the schema at an error allows. */
+export function keysOf(error: ErrorObject): string[] {
   const schema = error.parentSchema as { properties?: Record<string, unknown> } | undefined
   return Object.keys(schema?.properties ?? {})
 }
@@ -70,18 +76,18 @@ function listed(words: readonly string[]): string {
 }
 
 function tellUnknownKey(error: ErrorObject, pointed: Pointed): Told {
-  const key = word(parameter(error, 'additionalProperty'))
+  const key = parameterOf(error, 'additionalProperty')
   const entry = pointed.tree.type === 'map' ? pointed.tree.entries.get(key) : undefined
   const place = entry?.keyPlace ?? headPlace(pointed)
   if (key === 'expression')
     return { code: 'not-yet', place, message: 'expressions are not part of format 1 yet; give `density` or a `table`' }
-  const keys = allowedKeys(error)
+  const keys = keysOf(error)
   const message = `unknown key ${quoted(key)} in ${holder(pointed)}; allowed are ${listed(keys)}${suggestion(key, keys)}`
   return { code: 'unknown-key', place, message }
 }
 
 function tellMissing(error: ErrorObject, pointed: Pointed): Told {
-  const key = word(parameter(error, 'missingProperty'))
+  const key = parameterOf(error, 'missingProperty')
   const schema = error.parentSchema as { properties?: Record<string, { description?: string }> } | undefined
   const meaning = schema?.properties?.[key]?.description
   const explained = meaning === undefined ? '' : ` (${meaning})`
@@ -119,7 +125,7 @@ function tellChoice(error: ErrorObject, pointed: Pointed): Told {
 }
 
 function tellConstant(error: ErrorObject, pointed: Pointed): Told {
-  const wanted = word(parameter(error, 'allowedValue'))
+  const wanted = parameterOf(error, 'allowedValue')
   const message = `${found(pointed)} is not allowed for ${holder(pointed)}; write \`${wanted}\``
   return { code: pointed.path.at(-1) === 'format' ? 'format' : 'choice', place: pointed.tree.place, message }
 }
@@ -135,7 +141,7 @@ const typeWords: { readonly [type: string]: string } = {
 function tellType(error: ErrorObject, pointed: Pointed): Told {
   const types = [parameter(error, 'type')].flat().map(word)
   const isQuantity = types.includes('object') && types.includes('string')
-  const keys = types.length === 1 && types[0] === 'object' ? allowedKeys(error) : []
+  const keys = types.length === 1 && types[0] === 'object' ? keysOf(error) : []
   const wanted = isQuantity
     ? 'a quantity such as `3.1(2) ng`'
     : types.includes('string') && types.includes('number')
@@ -158,20 +164,22 @@ function tellPattern(_error: ErrorObject, pointed: Pointed): Told {
     }
   if (key === 'measured')
     return { code: 'date', place, message: `${found(pointed)} is no date; write year, month and day: \`2026-11-30\`` }
-  const fault = pointed.tree.type === 'scalar' ? idFault(pointed.tree.text) : null
-  const reason = fault ?? 'is no name: names are made of a–z, 0–9 and _, with one point in `component.port`'
+  const text = pointed.tree.type === 'scalar' ? pointed.tree.text : ''
+  const reason = text.includes('.')
+    ? 'is no name of a port or noise; write it like `cavity.back`, of a–z, 0–9 and _'
+    : (idFault(text) ?? 'is no name')
   return { code: 'name', place, message: `${found(pointed)} ${reason}` }
 }
 
 function tellName(error: ErrorObject, pointed: Pointed): Told {
-  const key = word(parameter(error, 'propertyName'))
+  const key = parameterOf(error, 'propertyName')
   const entry = pointed.tree.type === 'map' ? pointed.tree.entries.get(key) : undefined
   const place = entry?.keyPlace ?? headPlace(pointed)
   return { code: 'name', place, message: `${quoted(key)} ${idFault(key) ?? 'is no name'}` }
 }
 
 function tellLength(error: ErrorObject, pointed: Pointed): Told {
-  const limit = word(parameter(error, 'limit'))
+  const limit = parameterOf(error, 'limit')
   const length = pointed.tree.type === 'scalar' ? pointed.tree.text.length : 0
   const message =
     error.keyword === 'minLength'
@@ -181,7 +189,7 @@ function tellLength(error: ErrorObject, pointed: Pointed): Told {
 }
 
 function tellCount(error: ErrorObject, pointed: Pointed): Told {
-  const limit = word(parameter(error, 'limit'))
+  const limit = parameterOf(error, 'limit')
   const bound = error.keyword.startsWith('min') ? `at least ${limit}` : `at most ${limit}`
   const things = error.keyword.endsWith('Items') ? 'items' : 'entries'
   return {
@@ -192,7 +200,7 @@ function tellCount(error: ErrorObject, pointed: Pointed): Told {
 }
 
 function tellRange(error: ErrorObject, pointed: Pointed): Told {
-  const limit = word(parameter(error, 'limit'))
+  const limit = parameterOf(error, 'limit')
   const bound = error.keyword === 'minimum' ? `at least ${limit}` : `at most ${limit}`
   return {
     code: 'range',

@@ -39,7 +39,9 @@ export function idFault(word: string): string | null {
     return `holds the letter U+${code}, which is not one of a to z; a name is made of a–z, 0–9 and _`
   }
   if (word.length > 60) return 'is longer than 60 letters'
-  return 'is no name: a name begins with a to z and goes on with a–z, 0–9 and _'
+  const near = word.toLowerCase().replace(/[^a-z0-9]+/g, '_')
+  const instead = id.test(near) && !reserved.has(near) ? `, such as \`${near}\`` : ''
+  return `is no name: a name begins with a to z and goes on with a–z, 0–9 and _${instead}`
 }
 
 /** Folder names that pages of the site need for themselves. */

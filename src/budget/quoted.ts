@@ -5,3 +5,8 @@ export function quoted(text: string): string {
   const short = [...line].length > 60 ? `${[...line].slice(0, 59).join('')}…` : line
   return `\`${short.replaceAll('`', '’')}\``
 }
+
+/** `a cavity`, `an amplifier`. */
+export function withArticle(noun: string): string {
+  return `${/^[aeiou]/.test(noun) ? 'an' : 'a'} ${noun}`
+}

@@ -78,7 +78,7 @@ export function budgetSchema(): Schema {
 
 function rootProperties(): Schema {
   return {
-    format: { const: formatVersion, description: 'version of the file format' },
+    format: { const: formatVersion, description: 'version of the file format, 1 today' },
     title: text,
     summary: { ...longText, description: 'one paragraph for the head of the report' },
     about: { ...longText, description: 'notes on the sensor' },
@@ -152,7 +152,6 @@ function byKind(kinds: readonly Declaration[]): Schema {
   return {
     type: 'object',
     discriminator: { propertyName: 'kind' },
-    required: ['kind'],
     oneOf: kinds.map(kind => reference(kind.kind)),
   }
 }

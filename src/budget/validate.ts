@@ -1,6 +1,7 @@
 import { Ajv, type ErrorObject, type ValidateFunction } from 'ajv'
 import type { Issues } from './issues.js'
-import { problemOf } from './messages.js'
+import { keysOf, parameterOf, problemOf } from './messages.js'
+import { nearest } from './nearest.js'
 import { budgetSchema } from './schema.js'
 import { plainValue, type Tree } from './tree.js'
 
@@ -30,7 +31,20 @@ function validator(): ValidateFunction {
 export function validateShape(tree: Tree, issues: Issues): void {
   const validate = validator()
   if (validate(plainValue(tree))) return
-  for (const error of relevant(validate.errors ?? [])) issues.add(problemOf(error, tree))
+  for (const error of withoutMisspelt(relevant(validate.errors ?? []))) issues.add(problemOf(error, tree))
+}
+
+/** A misspelt key is an unknown and a missing one: one sentence is enough. */
+function withoutMisspelt(errors: readonly ErrorObject[]): ErrorObject[] {
+  const missing = errors.filter(error => error.keyword === 'required')
+  const meant = new Set<ErrorObject>()
+  for (const unknown of errors.filter(error => error.keyword === 'additionalProperties')) {
+    const beside = missing.filter(error => error.instancePath === unknown.instancePath)
+    const near = nearest(parameterOf(unknown, 'additionalProperty'), keysOf(unknown))
+    const same = beside.find(error => parameterOf(error, 'missingProperty') === near)
+    if (same !== undefined) meant.add(same)
+  }
+  return errors.filter(error => !meant.has(error))
 }
 
 /**

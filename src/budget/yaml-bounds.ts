@@ -7,6 +7,7 @@ export const mostAliases = 20
 /** A budget of 256 kB that a person wrote has fewer; the parser's time grows with them. */
 const mostTokens = 60_000
 const mostProperties = 200
+const longestText = 25_000
 
 /**
  * Refuses, from the tokens alone, what would cost a parser time or stack: deep nesting, many aliases, very many tokens; and
@@ -34,7 +35,7 @@ class Scan {
   #tokens = 0
   #aliases = 0
   #anchors = 0
-  #documents = 0
+  #hasContent = false
   #flow = 0
   #isContent = false
   #startsLine = true
@@ -45,6 +46,8 @@ class Scan {
     if (++this.#tokens > mostTokens)
       return { code: 'too-many-tokens', message: 'the file holds too many keys and values' }
     const type = this.#isContent ? 'content' : (CST.tokenType(token) ?? 'content')
+    if (token.length > longestText)
+      return { code: 'too-long', message: `one text of ${token.length} characters; at most ${longestText} are read` }
     return this.#structure(type) ?? this.#unwanted(type)
   }
 
@@ -53,6 +56,7 @@ class Scan {
     this.#isContent = type === 'scalar'
     if (type === 'scalar' || type === 'doc-mode' || type === 'flow-error-end') return
     this.offset += token.length
+    if (type !== 'space' && type !== 'newline' && type !== 'comment') this.#hasContent = true
     const lastBreak = token.lastIndexOf('\n')
     this.#column = lastBreak < 0 ? this.#column + token.length : token.length - lastBreak - 1
     if (type === 'newline') this.#startsLine = true
@@ -90,7 +94,7 @@ class Scan {
       }
     if (type === 'explicit-key-ind')
       return { code: 'explicit-key', message: 'a key with `?` in front is not allowed; write `key: value`' }
-    if ((type === 'doc-start' && ++this.#documents > 1) || type === 'doc-end')
+    if ((type === 'doc-start' && this.#hasContent) || type === 'doc-end')
       return { code: 'second-document', message: 'one file holds one document; delete this line' }
     return null
   }

@@ -48,18 +48,24 @@ class Conversion {
   /** `fallback` is the place of a value that is empty: its key. */
   node(node: unknown, fallback: Place, depth: number): Tree {
     const place = this.#placeOf(node) ?? fallback
-    if (depth > deepest || ++this.#nodes > mostNodes) {
-      if (depth > deepest)
-        this.issues.error('too-deep', place, `nested deeper than ${deepest} levels; a budget needs six`)
-      else this.issues.error('too-many-nodes', place, `the file holds more than ${mostNodes} values`)
-      return { type: 'list', place, items: [] }
-    }
+    if (depth > deepest)
+      this.issues.error('too-deep', place, `nested deeper than ${deepest} levels; a budget needs six`)
+    if (depth > deepest || this.#overflows(1, place)) return { type: 'list', place, items: [] }
     if (isAlias(node)) return this.#alias(node, place, depth)
     const tree = this.#collection(node, place, depth) ?? this.#scalar(node, place, fallback)
     this.#extents.set(tree, this.#extent(tree))
     if ((isScalar(node) || isMap(node) || isSeq(node)) && node.anchor !== undefined)
       this.#anchors.set(node.anchor, tree)
     return tree
+  }
+
+  /** Counts values, those behind aliases included; complains once. */
+  #overflows(more: number, place: Place): boolean {
+    if (this.#nodes > mostNodes) return true
+    this.#nodes += more
+    if (this.#nodes <= mostNodes) return false
+    this.issues.error('too-many-nodes', place, `the file, its aliases written out, holds more than ${mostNodes} values`)
+    return true
   }
 
   #collection(node: unknown, place: Place, depth: number): Tree | null {
@@ -137,9 +143,7 @@ class Conversion {
       )
       return { type: 'list', place, items: [] }
     }
-    this.#nodes += extent.nodes
-    if (this.#nodes > mostNodes)
-      this.issues.error('too-many-nodes', place, `the aliases of this file stand for more than ${mostNodes} values`)
+    if (this.#overflows(extent.nodes, place)) return { type: 'list', place, items: [] }
     if (depth + extent.height > deepest)
       this.issues.error('too-deep', place, `nested deeper than ${deepest} levels through this alias`)
     return tree

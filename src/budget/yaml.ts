@@ -1,4 +1,4 @@
-import { Composer, Parser, type Document, type YAMLError } from 'yaml'
+import { Composer, Parser, visit, type Document, type YAMLError } from 'yaml'
 import type { Problem } from '../model/problem.js'
 import type { Tree } from './tree.js'
 import { treeOf } from './yaml-tree.js'
@@ -23,7 +23,7 @@ export function readYaml(file: string, bytes: Uint8Array): YamlFile {
   if (unbounded !== null) return { tree: null, problems: [unbounded] }
   const document = compose(source)
   if ('severity' in document) return { tree: null, problems: [document] }
-  if (document.errors.length > 0) return { tree: null, problems: syntaxProblems(source, document.errors) }
+  if (document.errors.length > 0) return { tree: null, problems: syntaxProblems(source, document) }
   return treeOf(source, document)
 }
 
@@ -42,16 +42,37 @@ function compose(source: SourceText): Document.Parsed | Problem {
   }
 }
 
-/** One problem a line: a first error makes others behind it on the same line. */
-function syntaxProblems(source: SourceText, errors: readonly YAMLError[]): Problem[] {
+/** Errors of these kinds follow from almost any other that stands before them. */
+const following: ReadonlySet<string> = new Set([
+  'BAD_INDENT',
+  'UNEXPECTED_TOKEN',
+  'MISSING_CHAR',
+  'MULTILINE_IMPLICIT_KEY',
+])
+
+/** One problem a line, without those that only follow from the first. */
+function syntaxProblems(source: SourceText, document: Document.Parsed): Problem[] {
   const problems = new Map<number, Problem>()
-  for (const error of errors) {
-    const place = source.place(error.pos[0])
-    if (problems.has(place.line)) continue
-    const message = yamlMessage(error.code, error.message, lineAt(source.text, error.pos[0]))
+  for (const error of document.errors) {
+    const offset = startOf(error, document)
+    const place = source.place(offset)
+    if (problems.has(place.line) || (problems.size > 0 && following.has(error.code))) continue
+    const message = yamlMessage(error.code, error.message, lineAt(source.text, offset))
     problems.set(place.line, { severity: 'error', code: 'yaml', place, message })
   }
   return [...problems.values()].slice(0, 20)
+}
+
+/** A quotation mark that is never closed is reported where the file ends; it is wrong where it begins. */
+function startOf(error: YAMLError, document: Document.Parsed): number {
+  let start = error.pos[0]
+  if (error.code !== 'MISSING_CHAR') return start
+  visit(document, {
+    Scalar: (_key, { range, type }) => {
+      if (range?.[1] === error.pos[0] && type?.startsWith('QUOTE') === true) start = range[0]
+    },
+  })
+  return start
 }
 
 function lineAt(text: string, offset: number): string {
