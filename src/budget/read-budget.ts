@@ -2,7 +2,6 @@ import type { Budget } from '../model/budget.js'
 import type { Problem } from '../model/problem.js'
 import { FileRefusal, type FileSource } from './file-source.js'
 import { Issues } from './issues.js'
-import type { Project } from './project.js'
 import { resolve } from './resolve.js'
 import { validateShape } from './validate.js'
 import { readYaml } from './yaml.js'
@@ -15,7 +14,7 @@ export interface BudgetRead {
 }
 
 /** Reads the budget of one sensor of a project. Whatever the files hold, it returns and does not throw. */
-export function readBudget(project: Project, sensor: string): BudgetRead {
+export function readBudget(project: { readonly files: FileSource }, sensor: string): BudgetRead {
   return readBudgetFile(project.files, { sensor, folder: `budgets/${sensor}`, name: 'budget.yaml' })
 }
 

@@ -1,4 +1,4 @@
-import type { Place } from '../model/problem.js'
+import type { Place, Problem } from '../model/problem.js'
 
 /** What a YAML file says, with the place of everything and every scalar's own text. */
 export type Tree = TreeScalar | TreeMap | TreeList
@@ -31,6 +31,13 @@ export interface TreeList {
   readonly type: 'list'
   readonly place: Place
   readonly items: readonly Tree[]
+}
+
+/** A YAML file as a tree, with what is wrong in it. */
+export interface YamlFile {
+  /** Null where the file cannot be read as one tree. */
+  readonly tree: Tree | null
+  readonly problems: readonly Problem[]
 }
 
 const numeral = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?$/

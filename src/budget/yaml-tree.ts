@@ -14,10 +14,9 @@ import type { Place } from '../model/problem.js'
 import { Issues } from './issues.js'
 import { suggestion } from './nearest.js'
 import { quoted } from './quoted.js'
-import type { Tree, TreeEntry, TreeScalar } from './tree.js'
+import type { Tree, TreeEntry, TreeScalar, YamlFile } from './tree.js'
 import { deepest } from './yaml-bounds.js'
 import { hasHiddenCharacter, type SourceText } from './yaml-text.js'
-import type { YamlFile } from './yaml.js'
 
 const mostKeys = 500
 /** With every alias written out. */

@@ -1,16 +1,10 @@
 import { Composer, Parser, visit, type Document, type YAMLError } from 'yaml'
 import type { Problem } from '../model/problem.js'
-import type { Tree } from './tree.js'
+import type { YamlFile } from './tree.js'
 import { treeOf } from './yaml-tree.js'
 import { refuseUnbounded } from './yaml-bounds.js'
 import { yamlMessage } from './yaml-messages.js'
 import { sourceText, type SourceText } from './yaml-text.js'
-
-export interface YamlFile {
-  /** Null where the file cannot be read as one tree. */
-  readonly tree: Tree | null
-  readonly problems: readonly Problem[]
-}
 
 /**
  * Reads a YAML file of a stranger: bounded in size, depth, keys and aliases before and while it is parsed, every scalar as

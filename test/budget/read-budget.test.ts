@@ -12,6 +12,12 @@ function rootOf(budget: Budget, slot: unknown) {
   return budget.roots[(slot as { root: number }).root]
 }
 
+function parametersOf(budget: Budget): Parameters {
+  const claims = budget.lines[0]?.claims
+  if (claims === undefined || !('kind' in claims)) throw new Error('the first line is no noise of its own')
+  return claims.parameters
+}
+
 describe('the example budget', () => {
   const budget = good(example)
 
@@ -156,7 +162,7 @@ describe('values', () => {
 
 describe('densities', () => {
   const noise = (text: string) => `${small}contributions:\n  stray: { kind: force-noise, into: drum, ${text} }\n`
-  const density = (budget: Budget) => (budget.lines[0]?.claims as { parameters: Parameters }).parameters['density']
+  const density = (budget: Budget) => parametersOf(budget)['density']
 
   it('tells amplitude from power by the unit', () => {
     expect(density(good(noise('density: 2 aN/√Hz')))).toMatchObject({ power: false })
