@@ -38,7 +38,8 @@ export function amplitudeDomain(input: FigureInput, shown: Shown): [number, numb
   const least = Math.max(Math.min(total[0], ...lows), total[0] / BELOW_TOTAL)
   const most = Math.min(total[1], least * LONGEST)
   const pad = Math.max(PAD_FACTOR, (most / least) ** PAD_DECADES)
-  return widened(least / pad, most * pad)
+  // A name may stand above the total.
+  return widened(least / pad, most * pad * pad)
 }
 
 function widened(low: number, high: number): [number, number] {

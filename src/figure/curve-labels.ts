@@ -1,6 +1,6 @@
 import type { Curve } from './curves.js'
 import { placeInside } from './inside-labels.js'
-import { makeLabel } from './label.js'
+import { makeLabel, type Label } from './label.js'
 import { MARGIN_AFTER, MARGIN_BEFORE, marginLabels, type Ending } from './margin-labels.js'
 import type { Occupancy } from './occupancy.js'
 import type { Box, Mark } from './scene.js'
@@ -19,6 +19,11 @@ export function labelMargin(titles: readonly string[], size: number): number {
   return MARGIN_BEFORE + MARGIN_AFTER + Math.max(NARROWEST, ...widths)
 }
 
+/** A label of the form that `labelMargin` leaves room for. */
+export function marginLabel(curve: Curve, size: number): Label {
+  return makeLabel(curve, size, WIDEST, LINES)
+}
+
 /**
  * A label for every curve: in the right margin where the curve ends there, inside the frame where it does not and there
  * is room, else in the margin with an arrow towards the edge that the curve has left the frame through.
@@ -27,7 +32,7 @@ export function wideLabels(curves: readonly Curve[], frame: Box, occupancy: Occu
   const endings: Ending[] = []
   const marks: Mark[] = []
   for (const curve of byWeight(curves)) {
-    const label = makeLabel(curve, size, WIDEST, LINES)
+    const label = marginLabel(curve, size)
     const y = endAt(curve, frame.right)
     if (y !== null) {
       endings.push({ label, y })
@@ -59,7 +64,7 @@ function middleOf({ pieces }: Curve): number {
 
 function leaving(curve: Curve, frame: Box, size: number): Ending {
   const up = curve.pieces.length > 0 && curve.pieces.at(-1)!.at(-1)! < (frame.top + frame.bottom) / 2
-  const label = makeLabel({ ...curve, title: `${curve.title} ${up ? '↑' : '↓'}` }, size, WIDEST, LINES)
+  const label = marginLabel({ ...curve, title: `${curve.title} ${up ? '↑' : '↓'}` }, size)
   return { label, y: up ? frame.top : frame.bottom, loose: true }
 }
 

@@ -1,6 +1,6 @@
 import type { FigureInput } from './input.js'
 import { indicesBetween } from './indices-between.js'
-import { plainNumber, withUnit } from './prefix.js'
+import { withUnit } from './prefix.js'
 
 /** What a description speaks of: points of the evaluation and how a place on the axis is said. */
 export interface Span {
@@ -86,6 +86,6 @@ function limitSentence({ limits, total }: FigureInput, { shown, at }: Span): str
   const nearest = valid.reduce((a, b) => (ratio(b) < ratio(a) ? b : a))
   const decibels = 10 * Math.log10(ratio(nearest))
   const side = decibels >= 0 ? 'above' : 'below'
-  const distance = `${plainNumber(Math.abs(decibels), Math.abs(decibels) < 10 ? 2 : 3)} dB`
+  const distance = `${Math.abs(decibels).toFixed(1)} dB`
   return `With respect to the ${limit.title} the total is lowest at ${at(nearest)}, ${distance} ${side} it.`
 }

@@ -16,6 +16,11 @@ export function figureCss(): string {
   ].join('\n')
 }
 
+/** For a file that is looked at by itself, on paper of its own. */
+export function standaloneCss(): string {
+  return `\n${figureCss()}svg { background: var(--figure-paper); }\n`
+}
+
 function properties(scheme: Scheme): string {
   const ground = Object.entries(GROUND[scheme]).map(([name, colour]) => `  --figure-${name}: ${colour};`)
   const families = FAMILIES.map(family => `  --figure-${family}: ${FAMILY_COLOURS[family][scheme]};`)
@@ -32,7 +37,7 @@ const RULES = `.figure {
   display: block;
   width: 100%;
   height: auto;
-  font-family: Helvetica, Arial, 'Liberation Sans', 'Nimbus Sans', sans-serif;
+  font-family: var(--sans, Commissioner, 'Helvetica Neue', Arial, 'Liberation Sans', sans-serif);
   font-variant-numeric: tabular-nums;
 }
 .figure-stroke { fill: none; stroke: var(--figure-own, currentColor); stroke-linejoin: round; }
@@ -47,7 +52,7 @@ const RULES = `.figure {
 .figure-leader { stroke-width: 0.7px; --figure-own: var(--figure-axis); }
 .figure-reference { --figure-own: var(--figure-axis); stroke-width: 0.8px; }
 .figure-best { --figure-own: var(--figure-ink); stroke-width: 1.4px; }
-.figure-share { opacity: 0.55; }
+.figure-share { opacity: 0.65; }
 .figure-beyond { --figure-own: var(--figure-beyond); }
 .figure-text.figure-axis, .figure-text.figure-tick, .figure-text.figure-total, .figure-text.figure-best { --figure-own: var(--figure-ink); }
 .figure-label.figure-total { font-weight: 700; }

@@ -1,7 +1,7 @@
 import type { Box, Polyline } from './scene.js'
 
 /** Edge of a cell in pixels: labels need no finer knowledge of where ink is. */
-const CELL = 2
+const CELL = 3
 
 /**
  * Where ink is in a frame, so that the ink inside any box is counted in constant time (a summed-area table). A cell counts

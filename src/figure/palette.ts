@@ -18,7 +18,7 @@ export interface Ground {
 }
 
 export const GROUND: { readonly [S in Scheme]: Ground } = {
-  light: { paper: '#ffffff', ink: '#171b20', limit: '#565f68', axis: '#5f6871', faint: '#e4e7ea', beyond: '#f3f4f6' },
+  light: { paper: '#ffffff', ink: '#171b20', limit: '#6a727a', axis: '#5f6871', faint: '#e4e7ea', beyond: '#f3f4f6' },
   dark: { paper: '#15181c', ink: '#f2f1ec', limit: '#a3a9b0', axis: '#8d949b', faint: '#2b3138', beyond: '#1d2126' },
 }
 

@@ -4,9 +4,8 @@ import { type Abscissa, bandAbscissa } from './band-abscissa.js'
 import { bandSpan, describe } from './describe.js'
 import type { FigureInput, FigureLine } from './input.js'
 import { indicesBetween } from './indices-between.js'
-import { makeLabel } from './label.js'
 import { keyRows } from './key-rows.js'
-import { labelMargin } from './curve-labels.js'
+import { labelMargin, marginLabel } from './curve-labels.js'
 import { makeFrame } from './make-frame.js'
 import { marginLabels, type Ending } from './margin-labels.js'
 import { axisScale, type AxisScale } from './scales.js'
@@ -67,13 +66,17 @@ function layOut(bands: readonly ShareBand[], abscissa: Abscissa, size: Size): { 
   }
 }
 
+/** Height of a share, kept inside the axis. */
+function heldAt(y: AxisScale, share: number): number {
+  return y.at(Math.min(y.high, Math.max(y.low, share)))
+}
+
 /** The closed outline of a band: its upper edge forwards, its lower edge backwards. */
 function outline(values: Float64Array, band: ShareBand, x: AxisScale, y: AxisScale): number[] {
   const inside = indicesBetween(values, x.low, x.high)
-  const held = (share: number) => y.at(Math.min(y.high, Math.max(y.low, share)))
   const edge = (shares: Float64Array) =>
     thinTo(
-      inside.flatMap(k => [x.at(values[k]), held(shares[k])]),
+      inside.flatMap(k => [x.at(values[k]), heldAt(y, shares[k])]),
       TOLERANCE,
       MOST,
     )
@@ -100,9 +103,9 @@ function nameBands(
     return { marks: rows.marks, height: rows.height + 8 }
   }
   const endings = bands.map((band): Ending => {
-    const label = makeLabel(shareCurve(band), type.label, 168, 1)
-    const bottom = y.at(band.lower.at(-1)!)
-    const top = y.at(band.upper.at(-1)!)
+    const label = marginLabel(shareCurve(band), type.label)
+    const bottom = heldAt(y, band.lower.at(-1)!)
+    const top = heldAt(y, band.upper.at(-1)!)
     return { label, y: (bottom + top) / 2, ...(bottom - top < THINNEST && { loose: true }) }
   })
   return { marks: marginLabels(endings, frame, type.label).marks, height: 0 }

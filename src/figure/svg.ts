@@ -1,4 +1,5 @@
 import type { Ink, Mark, PathMark, Polyline, RingMark, Scene, TextMark } from './scene.js'
+import { standaloneCss } from './figure-css.js'
 import { LINE_HEIGHT, isCompact, typeSizes, type TypeSizes } from './type-sizes.js'
 
 /**
@@ -6,6 +7,15 @@ import { LINE_HEIGHT, isCompact, typeSizes, type TypeSizes } from './type-sizes.
  * `idPrefix`, so that several figures can share a page. It scales to the width of its container.
  */
 export function renderSvg(scene: Scene, idPrefix: string): string {
+  return render(scene, idPrefix, '')
+}
+
+/** The same as a file of its own, which carries its style sheet with it. */
+export function renderStandaloneSvg(scene: Scene, idPrefix: string): string {
+  return `<?xml version="1.0" encoding="UTF-8"?>\n${render(scene, idPrefix, `<style>${standaloneCss()}</style>\n`)}\n`
+}
+
+function render(scene: Scene, idPrefix: string, style: string): string {
   const { width, height } = scene
   const id = (name: string) => escapeXml(`${idPrefix}-${name}`)
   const sizes = typeSizes(width)
@@ -14,7 +24,7 @@ export function renderSvg(scene: Scene, idPrefix: string): string {
       ` width="${tenths(width)}" height="${tenths(height)}" role="img" aria-labelledby="${id('title')} ${id('description')}">`,
     `<title id="${id('title')}">${escapeXml(scene.title)}</title>`,
     `<desc id="${id('description')}">${escapeXml(scene.description)}</desc>`,
-    ...scene.marks.map(mark => renderMark(mark, sizes, idPrefix)),
+    style + scene.marks.map(mark => renderMark(mark, sizes, idPrefix)).join('\n'),
     '</svg>',
   ].join('\n')
 }

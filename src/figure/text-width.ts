@@ -1,35 +1,59 @@
 /**
- * Advance widths, in thousandths of the font size, of the sans-serif metrics that Helvetica, Arial and Liberation Sans
- * share; measured with Liberation Sans 2 in Chromium. Characters that are not listed count as `OTHER`.
+ * Advance widths in thousandths of the font size: for each character the larger of Commissioner (which the site brings
+ * along) and of the widths that Helvetica, Arial and Liberation Sans share, at regular weight, measured in Chromium and
+ * rounded up to ten. Characters that are not listed count as `OTHER`.
  */
 const WIDTHS: readonly (readonly [number, string])[] = [
-  [191, "'"],
-  [222, 'ijl'],
-  [260, '|'],
-  [278, ' !,./:;I[\\]ft·'],
-  [333, '()-`r⁻²³'],
-  [334, '{}'],
-  [355, '"'],
-  [389, '*'],
-  [400, '°'],
-  [469, '^'],
-  [500, 'Jcksvxyzκγ↓↑'],
-  [556, '#$0123456789?L_abdeghnopqu–ηµμ√±Γχ'],
-  [584, '+<=>~−×'],
-  [611, 'FTZ'],
-  [667, '&ABEKPSVXYÅ'],
-  [690, 'π'],
-  [722, 'CDHNRU'],
-  [778, 'GOQΩω'],
-  [833, 'Mm'],
-  [889, '%'],
-  [944, 'W'],
+  [210, "'"],
+  [260, 'ijl'],
+  [270, '|'],
+  [280, ' \u00a0!,.:;I·'],
+  [340, '¹'],
+  [380, '"[]'],
+  [390, '()'],
+  [400, 'fr'],
+  [410, '{}²⁰⁴₂'],
+  [420, 't³⁵⁶⁷⁸⁹'],
+  [430, '-'],
+  [450, '/\\'],
+  [480, '*°'],
+  [500, 'Jcsz↓↑'],
+  [510, 'γ'],
+  [520, 'vy'],
+  [530, '⁻'],
+  [540, 'xχ'],
+  [550, 'k√κ'],
+  [560, '127?_aegu'],
+  [570, '$±Γ'],
+  [580, '35Ldhnµμη'],
+  [590, '+<=>q~−–×'],
+  [600, 'bop'],
+  [610, '4689^`'],
+  [620, 'Fß'],
+  [650, 'T'],
+  [660, '0'],
+  [670, 'BEPSY'],
+  [680, 'KXZ'],
+  [690, '#Vπ'],
+  [700, 'AÅ'],
+  [730, 'CR'],
+  [740, '&DU'],
+  [750, 'H'],
+  [760, 'N'],
+  [780, 'G'],
+  [790, 'ω'],
+  [810, 'w'],
+  [820, 'OQΩ'],
+  [880, 'm'],
+  [890, '%'],
+  [960, 'M'],
   [1000, '…→'],
-  [1015, '@'],
+  [1020, '@'],
+  [1030, 'W'],
 ]
 const OTHER = 1000
-/** Other fonts of the fallback list are wider by up to about this factor at the sizes used here. */
-const RESERVE = 1.04
+/** For other fallback fonts, and for hinting at small sizes. */
+const RESERVE = 1.02
 
 const widthOf = new Map(WIDTHS.flatMap(([width, characters]) => [...characters].map(c => [c, width] as const)))
 

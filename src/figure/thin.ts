@@ -7,32 +7,37 @@
  * @param tolerance in pixels, > 0
  */
 export function thin(line: readonly number[], tolerance: number): number[] {
-  const count = line.length / 2
-  if (count <= 2) return line.slice()
-  const keep = new Uint8Array(count)
-  keep[0] = keep[count - 1] = 1
-  // A stack instead of recursion: a spiky curve would nest thousands of calls.
-  const stack = [0, count - 1]
-  while (stack.length > 0) {
-    const last = stack.pop()!
-    const first = stack.pop()!
-    const far = farthest(line, first, last)
-    if (far.distance <= tolerance) continue
-    keep[far.index] = 1
-    stack.push(first, far.index, far.index, last)
-  }
-  return line.filter((_, k) => keep[k >> 1] === 1)
+  const significance = significances(line, tolerance)
+  return line.filter((_, k) => significance[k >> 1] > tolerance)
 }
 
-/** The same with a tolerance that doubles until at most `most` points are left. */
+/** The same with the least tolerance above `tolerance` that leaves at most `most` points, ends included. */
 export function thinTo(line: readonly number[], tolerance: number, most: number): number[] {
-  let allowed = tolerance
-  let thinned = thin(line, allowed)
-  while (thinned.length / 2 > Math.max(2, most)) {
-    allowed *= 2
-    thinned = thin(line, allowed)
+  const significance = significances(line, tolerance)
+  const ranked = significance.filter(s => s > tolerance).sort((a, b) => b - a)
+  const threshold = ranked.length > most ? ranked[Math.max(1, most)] : tolerance
+  return line.filter((_, k) => significance[k >> 1] > threshold)
+}
+
+/**
+ * The tolerance up to which each point would be kept: infinite for the ends, 0 where it is not above `tolerance`. It never
+ * grows from a split to the splits below it, so that any threshold cuts the tree of splits at one level.
+ */
+function significances(line: readonly number[], tolerance: number): Float64Array {
+  const count = line.length / 2
+  const significance = new Float64Array(count)
+  if (count === 0) return significance
+  significance[0] = significance[count - 1] = Infinity
+  // A stack instead of recursion: a spiky curve would nest thousands of calls.
+  const stack: [number, number, number][] = [[0, count - 1, Infinity]]
+  while (stack.length > 0) {
+    const [first, last, above] = stack.pop()!
+    const { index, distance } = farthest(line, first, last)
+    if (distance <= tolerance) continue
+    significance[index] = Math.min(distance, above)
+    stack.push([first, index, significance[index]], [index, last, significance[index]])
   }
-  return thinned
+  return significance
 }
 
 function farthest(line: readonly number[], first: number, last: number): { index: number; distance: number } {

@@ -13,7 +13,15 @@ export function randomNumbers(seed: number): () => number {
   }
 }
 
-const WORDS = ['thermal', 'bath of the second mode', 'shot noise', 'ground motion', 'ß', 'gas damping & recoil', 'amplifier']
+const WORDS = [
+  'thermal',
+  'bath of the second mode',
+  'shot noise',
+  'ground motion',
+  'ß',
+  'gas damping & recoil',
+  'amplifier',
+]
 const UNITS = ['N/√Hz', 'm/√Hz', '1/√Hz', 'm/s²/√Hz']
 
 /** A figure's input that nobody would draw by hand: any number of curves of any shape and size, with holes. */
@@ -22,7 +30,10 @@ export function randomBudget(seed: number): FigureInput {
   const pick = <T>(list: readonly T[]): T => list[Math.floor(random() * list.length)]
   const low = 10 ** (random() * 8 - 1)
   const high = low * (1 + 10 ** (random() * 8 - 5))
-  const frequency = Float64Array.from({ length: 60 + Math.floor(random() * 300) }, (_, k, n = 359) => low * (high / low) ** (k / n))
+  const frequency = Float64Array.from(
+    { length: 60 + Math.floor(random() * 300) },
+    (_, k, n = 359) => low * (high / low) ** (k / n),
+  )
   const scale = 10 ** (random() * 40 - 44)
   const shape = () => randomShape(random, frequency, scale)
   const lines = Array.from({ length: 1 + Math.floor(random() * 18) }, (_, k): FigureLine => {
@@ -39,14 +50,24 @@ export function randomBudget(seed: number): FigureInput {
     }
   })
   const limits = Array.from({ length: Math.floor(random() * 4) }, (_, k): FigureLimit => {
-    return { id: `limit_${k}`, title: k === 0 ? 'standard quantum limit' : `limit number ${k}`, prominent: k === 0, psd: shape() }
+    return {
+      id: `limit_${k}`,
+      title: k === 0 ? 'standard quantum limit' : `limit number ${k}`,
+      prominent: k === 0,
+      psd: shape(),
+    }
   })
   const total = frequency.map((_, k) => lines.reduce((sum, l) => sum + (l.psd[k] > 0 ? l.psd[k] : 0), 0))
   return { ...frame(frequency, low, high), unit: pick(UNITS), total, lines, limits, ...marks(random, frequency, total) }
 }
 
 function frame(frequency: Float64Array, low: number, high: number) {
-  const points: Points = { anchors: [], frequency, anchor: new Int32Array(frequency.length).fill(-1), offset: frequency }
+  const points: Points = {
+    anchors: [],
+    frequency,
+    anchor: new Int32Array(frequency.length).fill(-1),
+    offset: frequency,
+  }
   return { title: 'Any <sensor> & "more"', quantity: 'force', band: { low, high }, points }
 }
 
