@@ -56,17 +56,17 @@ interface At {
 }
 
 function xText({ tick, at }: At, frame: Box, type: TypeSizes): TextMark | null {
-  return tickText(tick, at, frame.bottom + MAJOR + 4 + type.tick * 0.8, 'middle', type)
+  return tickText(tick, { x: at, y: frame.bottom + MAJOR + 4 + type.tick * 0.8, anchor: 'middle' }, type)
 }
 
 function yText({ tick, at }: At, frame: Box, type: TypeSizes): TextMark | null {
-  return tickText(tick, frame.left - MAJOR - 4, at + type.tick * 0.35, 'end', type)
+  return tickText(tick, { x: frame.left - MAJOR - 4, y: at + type.tick * 0.35, anchor: 'end' }, type)
 }
 
-function tickText(tick: Tick, x: number, y: number, anchor: 'middle' | 'end', type: TypeSizes): TextMark | null {
+function tickText(tick: Tick, at: Pick<TextMark, 'x' | 'y' | 'anchor'>, type: TypeSizes): TextMark | null {
   if (tick.text === null) return null
   const raised = tick.raised === undefined ? {} : { raised: tick.raised }
-  return textMark({ ink: { as: 'tick' }, role: 'tick', x, y, anchor, lines: [tick.text], ...raised }, type.tick)
+  return textMark({ ink: { as: 'tick' }, role: 'tick', ...at, lines: [tick.text], ...raised }, type.tick)
 }
 
 /** Leaves out a text that would touch the one before it. */

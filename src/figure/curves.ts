@@ -1,7 +1,7 @@
 import type { FigureInput } from './input.js'
 import type { Box, Ink, PathMark, Polyline } from './scene.js'
 import type { AxisScale } from './scales.js'
-import { curvePath } from './curve-path.js'
+import { curvePath, type CurvePath } from './curve-path.js'
 import { dashOf, negativeDash } from './dashes.js'
 
 /** A curve as it is drawn and labelled. */
@@ -32,21 +32,23 @@ const LIMIT_WEIGHT = 1e-3
 /** Every curve of the input in the order of drawing: limits, lines (smallest share first), total. */
 export function drawCurves(input: FigureInput, window: Window): Curve[] {
   const limits = input.limits.map(({ id, title, prominent, psd }) =>
-    draw({ id: `limit-${id}`, title, psd }, 1, false, limitStyle(prominent), window),
+    draw({ id: `limit-${id}`, title, psd }, POSITIVE, limitStyle(prominent), window),
   )
   const lines = input.lines.flatMap(line => {
     const weight = largestShare(line.psd, input.total, window)
     const ink: Ink = { as: 'line', family: line.family, tone: line.tone }
     const dash = dashOf(line.family, line.tone)
     const curve = { id: `line-${line.id}`, title: line.title, psd: line.psd }
-    const positive = draw(curve, 1, line.signed, { ink, weight, ...(dash && { dash }) }, window)
+    const positive = draw(curve, { sign: 1, signed: line.signed }, { ink, weight, ...(dash && { dash }) }, window)
     if (!line.signed) return [positive]
     const negative = { ...curve, id: `${curve.id}-negative`, title: `− ${line.title}` }
-    return [positive, draw(negative, -1, true, { ink, weight, dash: negativeDash() }, window)].filter(isSomewhere)
+    return [positive, draw(negative, { sign: -1, signed: true }, { ink, weight, dash: negativeDash() }, window)].filter(
+      isSomewhere,
+    )
   })
   lines.sort((a, b) => a.weight - b.weight)
   const total = { id: 'total', title: 'total', psd: input.total }
-  return [...limits, ...lines, draw(total, 1, false, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window)]
+  return [...limits, ...lines, draw(total, POSITIVE, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window)]
 }
 
 type Style = Pick<Curve, 'ink' | 'dash' | 'weight'>
@@ -57,15 +59,12 @@ function limitStyle(prominent: boolean): Style {
     : { ink: { as: 'bound' }, weight: LIMIT_WEIGHT, dash: [1.5, 3.5] }
 }
 
-function draw(
-  curve: Pick<Curve, 'id' | 'title' | 'psd'>,
-  sign: 1 | -1,
-  signed: boolean,
-  style: Style,
-  window: Window,
-): Curve {
+type Signs = Pick<CurvePath, 'sign' | 'signed'>
+const POSITIVE: Signs = { sign: 1, signed: false }
+
+function draw(curve: Pick<Curve, 'id' | 'title' | 'psd'>, signs: Signs, style: Style, window: Window): Curve {
   const { x, xScale, yScale, frame } = window
-  return { ...curve, ...style, pieces: curvePath({ x, psd: curve.psd, sign, signed }, xScale, yScale, frame) }
+  return { ...curve, ...style, pieces: curvePath({ x, psd: curve.psd, ...signs }, xScale, yScale, frame) }
 }
 
 /** A signed line that never has one of its signs has no curve and no label for it. */

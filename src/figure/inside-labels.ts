@@ -64,14 +64,14 @@ function inflated(box: Box, by: number): Box {
 
 /** Points every `STEP` pixels along a polyline. */
 function* along(line: Polyline): Generator<[number, number]> {
-  let left = 0
+  let next = 0
   for (let k = 0; k + 3 < line.length; k += 2) {
     const dx = line[k + 2] - line[k]
     const dy = line[k + 3] - line[k + 1]
     const length = Math.hypot(dx, dy)
-    for (; left <= length && length > 0; left += STEP)
-      yield [line[k] + (dx * left) / length, line[k + 1] + (dy * left) / length]
-    left -= length
+    if (length === 0) continue
+    for (; next <= length; next += STEP) yield [line[k] + (dx * next) / length, line[k + 1] + (dy * next) / length]
+    next -= length
   }
 }
 
