@@ -22,7 +22,10 @@ export interface Output {
 
 /** The network while it is built. Kernels are called in the order mechanical, field, chain, detector, noise; what is read is looked up when it is read. */
 export interface Assembly {
-  unknown(id: string, nature: 'mechanical' | 'field'): number
+  /** A new mechanical unknown. */
+  displacement(id: string): number
+  /** A new field a and its conjugate a†. */
+  field(id: string): readonly [number, number]
   stamp(row: number, column: number, entry: Entry): void
   source(source: Source): void
   mode(mode: Mode): void

@@ -38,8 +38,14 @@ class Builder implements Assembly {
 
   constructor(readonly readoutId: string) {}
 
-  unknown(id: string, nature: 'mechanical' | 'field'): number {
-    return this.unknowns.push({ id, nature }) - 1
+  displacement(id: string): number {
+    return this.unknowns.push({ id, nature: 'mechanical', conjugate: null }) - 1
+  }
+  field(id: string): readonly [number, number] {
+    const a = this.unknowns.length
+    this.unknowns.push({ id: `${id}.a`, nature: 'field', conjugate: a + 1 })
+    this.unknowns.push({ id: `${id}.a†`, nature: 'field', conjugate: a })
+    return [a, a + 1]
   }
   stamp(row: number, column: number, entry: Entry): void {
     this.entries.push({ row, column, entry })

@@ -69,6 +69,8 @@ export interface Unknown {
   readonly id: string
   /** Mechanical unknowns are clamped for the imprecision part. */
   readonly nature: 'mechanical' | 'field'
+  /** Of a field: the unknown that is its Hermitian conjugate. */
+  readonly conjugate: number | null
 }
 
 /** A mechanical unknown with what others need to know of it. */

@@ -141,7 +141,7 @@ export const kernel: Kernel<Values> = {
   assemble(instance, net) {
     const modes = sensedModes(instance, net)
     const point = workingPoint(instance, couplingPerMetre(instance, modes))
-    const fields = [net.unknown(`${instance.id}.a`, 'field'), net.unknown(`${instance.id}.a†`, 'field')] as const
+    const fields = net.field(instance.id)
     stampFields(net, point, modes, fields)
     net.workingPoint(point)
     const push = point.coupling * Math.sqrt(point.quanta)

@@ -6,7 +6,7 @@ export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
   stage: 'mechanical',
   assemble(instance, net) {
     const { mass } = instance.values
-    const unknown = net.unknown(instance.id, 'mechanical')
+    const unknown = net.displacement(instance.id)
     net.stamp(unknown, unknown, { form: 'oscillator', mass, frequency: 0, gamma: 0, phi: 0 })
     net.mode({
       id: instance.id,

@@ -93,7 +93,7 @@ export function assembleMode(instance: Instance<ModeValues>, net: Assembly, move
   const sum = (law: Channel['law']) => channels.filter(c => c.law === law).reduce((total, c) => total + c.angle, 0)
   const gamma = omega0 * sum('viscous')
   const phi = sum('structural')
-  const unknown = net.unknown(instance.id, 'mechanical')
+  const unknown = net.displacement(instance.id)
   net.stamp(unknown, unknown, { form: 'oscillator', mass, frequency, gamma, phi })
   const mode: Mode = {
     id: instance.id,

@@ -1,0 +1,111 @@
+import type { Assessment } from '../model/assessment.js'
+import type { Budget } from '../model/budget.js'
+import type { Evaluation } from '../model/evaluation.js'
+import type { Network } from '../model/network.js'
+import { EngineFault, type Problem } from '../model/problem.js'
+import { ascending, modeAnchors, zeroAnchors } from './anchors.js'
+import { assemble } from './assemble.js'
+import { Evaluator } from './evaluate.js'
+import { firstPoints, pointAt, refine } from './grid.js'
+import { headlinesOf } from './headlines.js'
+import { polesOf, type Pole } from './poles.js'
+import { refuseUnstable } from './stability.js'
+import { cavityStates, modeStates } from './states.js'
+
+const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz' } as const
+
+/** A budget at its working point, ready to be evaluated anywhere. */
+export interface Prepared {
+  readonly budget: Budget
+  readonly network: Network
+  readonly poles: readonly Pole[]
+}
+
+/** Throws `Refusal` where the working point is unstable or a kernel refuses its values. */
+export function prepare(budget: Budget): Prepared {
+  const network = assemble(budget)
+  const poles = polesOf(network)
+  refuseUnstable(network, poles)
+  return { budget, network, poles }
+}
+
+/** All curves on a grid of the engine's own choice over the whole band. */
+export function evaluateBand({ budget, network, poles }: Prepared): Evaluation {
+  const curves = new Evaluator(budget, network, { sources: false, limits: true })
+  const knots = budget.tables.flatMap(table => [...table.frequency])
+  const modes = modeAnchors(network, poles, budget.band)
+  const first = curves.at(firstPoints(modes, budget.band, knots))
+  const zeros = zeroAnchors(network, first, budget.band)
+  const anchors = ascending([...modes, ...zeros])
+  const start = zeros.length === 0 ? first.points : firstPoints(anchors, budget.band, knots)
+  return new Evaluator(budget, network, { sources: true, limits: true }).at(refine(curves, start))
+}
+
+/** All curves exactly at given frequencies in Hz, in the order given. */
+export function evaluateAtFrequencies(budget: Budget, frequencies: ArrayLike<number>): Evaluation {
+  return evaluateList(prepare(budget), frequencies)
+}
+
+function evaluateList({ budget, network, poles }: Prepared, frequencies: ArrayLike<number>): Evaluation {
+  const anchors = modeAnchors(network, poles, { low: 0, high: Infinity })
+  const list = Array.from(frequencies, frequency => pointAt(anchors, frequency))
+  const points = {
+    anchors,
+    frequency: Float64Array.from(frequencies),
+    anchor: Int32Array.from(list, p => p.anchor),
+    offset: Float64Array.from(list, p => p.offset),
+  }
+  return new Evaluator(budget, network, { sources: true, limits: true }).at(points)
+}
+
+/**
+ * A limit that binds the readout's computed noise cannot be passed: where it is, the engine contradicts itself. A part in a million is
+ * left for lossless readouts, which reach their limits.
+ */
+function checkLimits(evaluation: Evaluation): void {
+  for (const limit of evaluation.limits) {
+    if (limit.bounds !== 'added') continue
+    for (let i = 0; i < evaluation.added.length; i++) {
+      if (evaluation.added[i] >= limit.psd[i] * (1 - 1e-6)) continue
+      const at = evaluation.points.frequency[i]
+      const ratio = (evaluation.added[i] / limit.psd[i]).toPrecision(6)
+      throw new EngineFault(
+        `the added noise is ${ratio} of the ${limit.title.toLowerCase()} at ${at} Hz, which nothing can pass`,
+      )
+    }
+  }
+}
+
+/** What a person should know beside the numbers. */
+function warningsOf({ budget, network }: Prepared): Problem[] {
+  const warnings = [...budget.warnings]
+  if (network.sensing.light === null) {
+    warnings.push({
+      severity: 'warning',
+      code: 'no-back-action',
+      place: budget.readoutPlace,
+      message: `back-action missing: \`${budget.readout}\` states its noise but not how it disturbs the motion; margins to quantum limits mean little without it`,
+    })
+  }
+  return warnings
+}
+
+/** Everything that a report says about one budget. Throws `Refusal` for the input's faults and `EngineFault` for the engine's. */
+export function assess(budget: Budget): Assessment {
+  const prepared = prepare(budget)
+  const evaluation = evaluateBand(prepared)
+  const computed = prepared.network.sensing.light !== null
+  if (computed) checkLimits(evaluation)
+  const reference = budget.reference === null ? null : evaluateList(prepared, [budget.reference])
+  const headlines = headlinesOf(evaluation, reference)
+  return {
+    budget,
+    evaluation,
+    atReference: reference ?? evaluateList(prepared, [headlines.best.frequency]),
+    headlines,
+    modes: modeStates(prepared.network, prepared.poles),
+    cavities: cavityStates(prepared.network),
+    unit: units[budget.measurand.quantity],
+    warnings: warningsOf(prepared),
+  }
+}

@@ -1,0 +1,203 @@
+import type { Evaluation } from '../model/evaluation.js'
+import type { Anchor, Points } from '../model/points.js'
+import type { Band } from './anchors.js'
+import type { Evaluator } from './evaluate.js'
+import { makePoints, type Point } from './points.js'
+
+/** Log–log interpolation between neighbouring points is at most this far off, relative in amplitude. */
+export const gridTolerance = 1e-3
+
+/** Curves below this share of the total power are only followed to the same fraction of this floor. */
+export const gridFloor = 1e-6
+
+/** An interval counts as straight when its middle is off by less than this part of the tolerance: the middle is not quite the worst place. */
+const safety = 0.7
+
+/** Far more than any budget needs; a curve that never becomes straight stops here. */
+const mostPoints = 50_000
+
+/** Points that the engine starts from, in steps of this size in asinh(offset/half width) around each anchor. */
+const firstStep = 0.5
+
+const firstPerDecade = 24
+
+/** The anchor that a frequency is measured from: the nearest one; −1 without anchors. */
+function nearestAnchor(anchors: readonly Anchor[], frequency: number): number {
+  let best = -1
+  for (const [i, anchor] of anchors.entries()) {
+    const distance = Math.abs(anchor.frequency - frequency)
+    if (best < 0 || distance < Math.abs(anchors[best].frequency - frequency)) best = i
+  }
+  return best
+}
+
+export function pointAt(anchors: readonly Anchor[], frequency: number): Point {
+  const anchor = nearestAnchor(anchors, frequency)
+  return { anchor, offset: anchor < 0 ? frequency : frequency - anchors[anchor].frequency }
+}
+
+/** A regular start: evenly in log f over the band, and in asinh steps from each anchor to half-way to its neighbours. */
+export function firstPoints(anchors: readonly Anchor[], { low, high }: Band, extra: readonly number[]): Points {
+  const list: Point[] = []
+  const steps = Math.max(64, Math.ceil(firstPerDecade * Math.log10(high / low)))
+  for (let i = 0; i <= steps; i++) {
+    const frequency = i === steps ? high : low * (high / low) ** (i / steps)
+    list.push(pointAt(anchors, frequency))
+  }
+  for (const frequency of extra) if (frequency > low && frequency < high) list.push(pointAt(anchors, frequency))
+  for (const [anchor, { frequency, halfWidth }] of anchors.entries()) {
+    list.push({ anchor, offset: 0 })
+    const left = anchor === 0 ? low : (anchors[anchor - 1].frequency + frequency) / 2
+    const right = anchor === anchors.length - 1 ? high : (anchors[anchor + 1].frequency + frequency) / 2
+    for (const [sign, reach] of [
+      [-1, frequency - left],
+      [1, right - frequency],
+    ] as const) {
+      for (let u = firstStep; halfWidth * Math.sinh(u) < reach; u += firstStep) {
+        list.push({ anchor, offset: sign * halfWidth * Math.sinh(u) })
+      }
+    }
+  }
+  return distinct(anchors, list)
+}
+
+/** Points ascending without repetition of a frequency. */
+function distinct(anchors: readonly Anchor[], list: readonly Point[]): Points {
+  const all = makePoints(anchors, list)
+  const keep = [...all.frequency.keys()].filter(i => i === 0 || separation(all, i - 1, i) > 0)
+  return makePoints(
+    anchors,
+    keep.map(i => ({ anchor: all.anchor[i], offset: all.offset[i] })),
+  )
+}
+
+/** Distance in Hz between two points, exact where they share an anchor. */
+function separation(points: Points, i: number, j: number): number {
+  return points.anchor[i] === points.anchor[j]
+    ? points.offset[j] - points.offset[i]
+    : points.frequency[j] - points.frequency[i]
+}
+
+/** The middle of an interval: in asinh(offset/half width) next to an anchor, in log f elsewhere. */
+function middle(points: Points, i: number): Point {
+  const anchor = points.anchor[i]
+  if (anchor >= 0 && points.anchor[i + 1] === anchor) {
+    const { halfWidth } = points.anchors[anchor]
+    const u = (Math.asinh(points.offset[i] / halfWidth) + Math.asinh(points.offset[i + 1] / halfWidth)) / 2
+    return { anchor, offset: halfWidth * Math.sinh(u) }
+  }
+  if (anchor < 0) return { anchor, offset: Math.sqrt(points.frequency[i] * points.frequency[i + 1]) }
+  return pointAt(points.anchors, (points.frequency[i] + points.frequency[i + 1]) / 2)
+}
+
+/** All curves that must be straight between points. */
+function followed(evaluation: Evaluation): Float64Array[] {
+  const { total, lines, limits } = evaluation
+  return [total, ...lines.map(line => line.psd), ...limits.map(limit => limit.psd)]
+}
+
+/** log(f_mid/f_left)/log(f_right/f_left) from hertz differences, exact next to a resonance. */
+function fraction(points: Points, i: number, middles: Points, k: number): number {
+  const left = points.frequency[i]
+  const anchor = points.anchor[i]
+  const toMiddle = middles.anchor[k] === anchor ? middles.offset[k] - points.offset[i] : middles.frequency[k] - left
+  return Math.log1p(toMiddle / left) / Math.log1p(separation(points, i, i + 1) / left)
+}
+
+/** What log–log interpolation makes of a curve; straight interpolation where a signed curve changes sign. */
+function interpolate(left: number, right: number, part: number): number {
+  if (left > 0 && right > 0) return left * (right / left) ** part
+  if (left < 0 && right < 0) return left * (right / left) ** part
+  return left + (right - left) * part
+}
+
+/**
+ * Refines the points until log–log interpolation of the amplitude density of the total, the lines and the limits is within
+ * `gridTolerance`, and of curves below `gridFloor` of the total within that part of the floor. Intervals that fail at their middle
+ * are halved, a generation at a time.
+ */
+export function refine(evaluator: Evaluator, start: Points): Points {
+  let points = start
+  let curves = followed(evaluator.at(points))
+  let open = [...points.frequency.keys()].slice(0, -1)
+  while (open.length > 0 && points.frequency.length < mostPoints) {
+    const middles = middlesOf(points, open)
+    const there = followed(evaluator.at(middles))
+    const bent = open.filter((i, k) => !straight({ points, curves, i }, { middles, there, k }))
+    if (bent.length === 0) break
+    const grown = insert({ points, curves, open, bent }, { middles, there })
+    points = grown.points
+    curves = grown.curves
+    open = grown.open
+  }
+  return points
+}
+
+/** Middles in the order of the intervals, which is that of frequency. */
+function middlesOf(points: Points, open: readonly number[]): Points {
+  const list = open.map(i => middle(points, i))
+  const frequencyOf = ({ anchor, offset }: Point): number =>
+    anchor < 0 ? offset : points.anchors[anchor].frequency + offset
+  return {
+    anchors: points.anchors,
+    frequency: Float64Array.from(list, frequencyOf),
+    anchor: Int32Array.from(list, p => p.anchor),
+    offset: Float64Array.from(list, p => p.offset),
+  }
+}
+
+function straight(
+  { points, curves, i }: { points: Points; curves: readonly Float64Array[]; i: number },
+  { middles, there, k }: { middles: Points; there: readonly Float64Array[]; k: number },
+): boolean {
+  // Neighbours that double precision cannot halve are as close as can be.
+  if (separation(points, i, i + 1) <= 4e-16 * points.frequency[i]) return true
+  const part = fraction(points, i, middles, k)
+  if (!(part > 0 && part < 1)) return true
+  const floor = gridFloor * there[0][k]
+  return curves.every((curve, c) => {
+    const actual = there[c][k]
+    const off = Math.abs(interpolate(curve[i], curve[i + 1], part) - actual)
+    return off <= 2 * gridTolerance * safety * Math.max(Math.abs(actual), floor)
+  })
+}
+
+/** Puts the middles of bent intervals among the points; both halves are open for the next generation. */
+function insert(
+  {
+    points,
+    curves,
+    open,
+    bent,
+  }: { points: Points; curves: readonly Float64Array[]; open: readonly number[]; bent: readonly number[] },
+  { middles, there }: { middles: Points; there: readonly Float64Array[] },
+): { points: Points; curves: Float64Array[]; open: number[] } {
+  const size = points.frequency.length + bent.length
+  const next = {
+    anchors: points.anchors,
+    frequency: new Float64Array(size),
+    anchor: new Int32Array(size),
+    offset: new Float64Array(size),
+  }
+  const grown = curves.map(() => new Float64Array(size))
+  const place = new Map(open.map((i, k) => [i, k]))
+  const halves: number[] = []
+  let at = 0
+  const put = (from: Points, values: readonly Float64Array[], index: number): void => {
+    next.frequency[at] = from.frequency[index]
+    next.anchor[at] = from.anchor[index]
+    next.offset[at] = from.offset[index]
+    for (const [c, curve] of values.entries()) grown[c][at] = curve[index]
+    at++
+  }
+  let b = 0
+  for (let i = 0; i < points.frequency.length; i++) {
+    put(points, curves, i)
+    if (b < bent.length && bent[b] === i) {
+      halves.push(at - 1, at)
+      put(middles, there, place.get(i)!)
+      b++
+    }
+  }
+  return { points: next, curves: grown, open: halves }
+}

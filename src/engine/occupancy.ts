@@ -1,0 +1,153 @@
+import type { Injection, Mode, Network, Shape, Source } from '../model/network.js'
+import { complex } from '../physics/complex.js'
+import { boltzmannConstant, reducedPlanckConstant } from '../physics/constants.js'
+import { gaussLegendre } from '../physics/gauss-legendre.js'
+import { Evaluator } from './evaluate.js'
+import { makePoints, type Point } from './points.js'
+import { energyDecay, type Pole } from './poles.js'
+import type { Anchor } from '../model/points.js'
+
+/**
+ * A viscous bath as the white force that it is next to the resonance, 4ħΩ(n(Ω,T)+½)mΓ. Taken literally, the zero point of a viscous
+ * bath grows with frequency and ⟨p²⟩ diverges; the occupancy of a mode means this white bath.
+ */
+function whitened(shape: Shape, mode: Mode): Shape {
+  if (shape.form !== 'viscous bath') return shape
+  const omega = 2 * Math.PI * mode.frequency
+  const x = (reducedPlanckConstant * omega) / (2 * boltzmannConstant * shape.temperature)
+  const coth = shape.temperature === 0 ? 1 : 1 / Math.tanh(x)
+  return { form: 'constant', value: 2 * reducedPlanckConstant * omega * shape.strength * coth }
+}
+
+/** The network whose record is the motion of one mode itself, shaken by everything that enters its equations. */
+function motionOf(network: Network, mode: Mode): Network {
+  const still = (node: Injection): Injection => ({ rows: node.rows, direct: complex(0) })
+  const sources: Source[] = network.sources
+    .filter(source => source.nodes.some(node => node.rows.length > 0))
+    .map(source => ({ ...source, nodes: source.nodes.map(still), shape: whitened(source.shape, mode) }))
+  const one = complex(1)
+  return {
+    ...network,
+    readout: [{ column: mode.unknown, value: one }],
+    measurand: { rows: [], direct: one },
+    sources,
+  }
+}
+
+/** A panel of the integral, its ends as offsets from an anchor. */
+interface Panel {
+  readonly anchor: number
+  readonly from: number
+  readonly to: number
+}
+
+/** Each panel is √2 times as far from a pole as the one before, so that the integrand is smooth on every panel. */
+const growth = Math.SQRT2
+
+/** Poles at positive frequencies as anchors, ascending; one at zero frequency stands for those on the imaginary axis. */
+function poleAnchors(poles: readonly Pole[]): Anchor[] {
+  const anchors = poles
+    .filter(pole => pole.omega.re >= 0)
+    .map((pole, i): Anchor => ({
+      id: `pole ${i + 1}`,
+      nature: 'pole',
+      frequency: pole.omega.re / (2 * Math.PI),
+      halfWidth: Math.abs(energyDecay(pole)) / (4 * Math.PI),
+    }))
+    .sort((a, b) => a.frequency - b.frequency)
+  return anchors.filter((a, i) => i === 0 || a.frequency > anchors[i - 1].frequency)
+}
+
+/**
+ * Where the integral begins, over the lowest pole: at 0 for white baths. A structural bath diverges there as ln f/Q, which a millionth of
+ * the pole keeps below 10/Q; a stated power law or table may rise faster, and motion slower than a thousandth of the pole is then drift.
+ */
+function lowestOf({ sources }: Network): number {
+  if (sources.some(({ shape }) => shape.form === 'power' || shape.form === 'table')) return 1e-3
+  return sources.some(({ shape }) => shape.form === 'structural bath') ? 1e-6 : 0
+}
+
+/** Ends of panels from `lowest` to `highest` in Hz: geometric around every pole, whatever other poles lie in between. */
+function panelEnds(anchors: readonly Anchor[], lowest: number, highest: number): Point[] {
+  const ends: Point[] = []
+  for (const [anchor, { frequency, halfWidth }] of anchors.entries()) {
+    const first = Math.max(halfWidth, Number.EPSILON * frequency)
+    for (const [sign, reach] of [
+      [-1, frequency - lowest],
+      [1, highest - frequency],
+    ] as const) {
+      for (let offset = first; offset < reach; offset *= growth) ends.push({ anchor, offset: sign * offset })
+      if (reach > 0) ends.push({ anchor, offset: sign * reach })
+    }
+    if (frequency > lowest) ends.push({ anchor, offset: 0 })
+  }
+  return ends.map(end => fromNearest(anchors, end))
+}
+
+/** The same frequency as an offset from the nearest pole. */
+function fromNearest(anchors: readonly Anchor[], end: Point): Point {
+  const offsets = anchors.map(({ frequency }) => anchors[end.anchor].frequency - frequency + end.offset)
+  const nearest = offsets.reduce(
+    (best, offset, i) => (Math.abs(offset) < Math.abs(offsets[best]) ? i : best),
+    end.anchor,
+  )
+  return nearest === end.anchor ? end : { anchor: nearest, offset: offsets[nearest] }
+}
+
+/** Panels between neighbouring ends, each measured from the pole that it is nearest to. */
+function panelsOver(anchors: readonly Anchor[], lowest: number, highest: number): Panel[] {
+  const ends = panelEnds(anchors, lowest, highest).sort(
+    (a, b) => frequencyOf(anchors, a) - frequencyOf(anchors, b) || a.offset - b.offset,
+  )
+  return ends.slice(1).flatMap((right, i) => {
+    const left = ends[i]
+    const shift = anchors[right.anchor].frequency - anchors[left.anchor].frequency
+    const fromLeft = Math.min(Math.abs(left.offset), Math.abs(right.offset + shift))
+    const fromRight = Math.min(Math.abs(right.offset), Math.abs(left.offset - shift))
+    const panel =
+      fromLeft <= fromRight
+        ? { anchor: left.anchor, from: left.offset, to: right.offset + shift }
+        : { anchor: right.anchor, from: left.offset - shift, to: right.offset }
+    return panel.to > panel.from ? [panel] : []
+  })
+}
+
+/**
+ * Final occupancy n_f = (⟨q²⟩ + ⟨p²⟩)/2 − ½ about the bare frequency, light on, q = x/(√2 x_zp) and p likewise, from
+ * ⟨x²⟩ = ∫S_x df and ⟨p²⟩ = m²∫ω²S_x df over one-sided S_x of the actual motion, by Gauss–Legendre panels around the poles of the network.
+ * For white baths it equals the Lyapunov solution.
+ */
+export function finalOccupancy(network: Network, poles: readonly Pole[], mode: Mode): number {
+  const anchors = poleAnchors(poles)
+  const fastest = Math.max(...poles.map(pole => Math.hypot(pole.omega.re, pole.omega.im))) / (2 * Math.PI)
+  const motion = motionOf(network, mode)
+  const lowest =
+    lowestOf(motion) * Math.min(...anchors.filter(a => a.frequency > 0).map(a => a.frequency), mode.frequency)
+  const panels = panelsOver(anchors, lowest, 1e9 * fastest)
+  const rule = gaussLegendre(16)
+  const list: Point[] = []
+  const weights: number[] = []
+  for (const { anchor, from, to } of panels) {
+    for (const [k, node] of rule.nodes.entries()) {
+      list.push({ anchor, offset: (from + to) / 2 + (node * (to - from)) / 2 })
+      weights.push((rule.weights[k] * (to - from)) / 2)
+    }
+  }
+  // Points come out in the order of frequency, panels overlap nowhere: the weights are sorted along with them.
+  const order = list.map((_, i) => i).sort((i, j) => frequencyOf(anchors, list[i]) - frequencyOf(anchors, list[j]))
+  const points = makePoints(anchors, list)
+  const { total } = new Evaluator({ lines: [] }, motion, { sources: false, limits: false }).at(points)
+  let x = 0
+  let p = 0
+  for (const [i, from] of order.entries()) {
+    const density = total[i] * weights[from]
+    x += density
+    p += density * (2 * Math.PI * points.frequency[i]) ** 2
+  }
+  const zeroPoint = mode.zeroPoint!
+  const momentum = (reducedPlanckConstant / (2 * zeroPoint)) ** 2
+  return (x / zeroPoint ** 2 + (p * mode.mass ** 2) / momentum) / 4 - 0.5
+}
+
+const frequencyOf = (anchors: readonly Anchor[], { anchor, offset }: Point): number =>
+  anchors[anchor].frequency + offset
