@@ -142,7 +142,7 @@ function numbersIn(
   }
   const put = substitute(name, ground, source.own[0])
   if (put === null) return null
-  const left = tex.split('=')[0].replace('(f)', '')
+  const left = tex.split('=')[0].replace('(f)', '').trim()
   const result = `\\left(${formatTex(Math.sqrt(put.value), unit)}\\right)^2`
   return put.tex === result ? `${left} = ${result}` : `${left} = ${put.tex} = ${result}`
 }

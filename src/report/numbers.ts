@@ -74,11 +74,12 @@ function padded(number: string, decimals: number): string {
   return missing === 0 ? number : `${number}${number.includes('.') ? '' : '.'}${'0'.repeat(missing)}`
 }
 
-/** Two frequencies with as many digits as it takes to tell them apart, five at least. */
+/** Two frequencies with as many digits as it takes to tell them apart and one more, five at least. */
 function distinct(from: number, to: number): readonly [string, string] {
   for (let digits = 5; digits < 15; digits++) {
-    const texts = [frequencyText(from, digits), frequencyText(to, digits)] as const
-    if (texts[0] !== texts[1] || from === to) return texts
+    if (frequencyText(from, digits) === frequencyText(to, digits) && from !== to) continue
+    const kept = digits === 5 ? 5 : digits + 1
+    return [frequencyText(from, kept), frequencyText(to, kept)]
   }
   return [frequencyText(from, 15), frequencyText(to, 15)]
 }
