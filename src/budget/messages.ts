@@ -100,7 +100,7 @@ function tellMissing(error: ErrorObject, pointed: Pointed): Told {
 
 function tellKind(error: ErrorObject, pointed: Pointed): Told {
   const schema = error.parentSchema as { oneOf?: readonly { $ref?: string }[] } | undefined
-  const kinds = (schema?.oneOf ?? []).map(each => (each.$ref ?? '').replace('#/definitions/', ''))
+  const kinds = (schema?.oneOf ?? []).map(each => (each.$ref ?? '').replace('#/definitions/kind-', ''))
   const entry = pointed.tree.type === 'map' ? pointed.tree.entries.get('kind') : undefined
   if (entry === undefined)
     return {

@@ -54,6 +54,7 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
     format: formatVersion,
     title: textOf(child(root, 'title')) ?? origin.sensor,
     summary: textOf(child(root, 'summary')),
+    about: textOf(child(root, 'about')),
     revision,
     measurand,
     readout: readout.id,

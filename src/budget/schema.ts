@@ -103,7 +103,7 @@ function definitions(): Schema {
     then: byKind(kinds.filter(kind => kind.role === 'contribution')),
     else: reference('claim'),
   }
-  for (const kind of kinds) result[kind.kind] = kindSchema(kind)
+  for (const kind of kinds) result[`kind-${kind.kind}`] = kindSchema(kind)
   return result
 }
 
@@ -152,7 +152,7 @@ function byKind(kinds: readonly Declaration[]): Schema {
   return {
     type: 'object',
     discriminator: { propertyName: 'kind' },
-    oneOf: kinds.map(kind => reference(kind.kind)),
+    oneOf: kinds.map(kind => reference(`kind-${kind.kind}`)),
   }
 }
 
@@ -220,7 +220,7 @@ function orQuantity(group: Schema): Schema {
   return {
     if: { type: 'object', not: { type: 'object', required: ['value'] } },
     then: group,
-    else: quantity,
+    else: reference('quantity'),
   }
 }
 

@@ -102,6 +102,8 @@ export interface Budget {
   readonly format: number
   readonly title: string
   readonly summary: string | null
+  /** Notes on the sensor, Markdown like the summary; null where the file says nothing. */
+  readonly about: string | null
   readonly revision: string
   readonly measurand: MeasurandSpec
   /** Id of the detector component whose output is y. */

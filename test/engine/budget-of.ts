@@ -18,6 +18,7 @@ export function budgetOf(components: ComponentSpec[], changes: Partial<Budget> =
     format: 1,
     title: 'Test',
     summary: null,
+    about: null,
     revision: '1',
     measurand: { quantity: 'force', weights: null, at: null, place },
     readout: 'detector',

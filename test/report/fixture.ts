@@ -117,6 +117,7 @@ export function fixtureBudget(sensor = 'fixture'): Budget {
     format: 1,
     title: 'Membrane <force> sensor & window',
     summary: 'A membrane in a cavity. See [the note](https://example.org/note), not [this](javascript:alert(1)).',
+    about: null,
     revision: '2.1',
     measurand: { quantity: 'force', weights: new Map([['fundamental', 1]]), at: null, place: place(4) },
     readout: 'detector',
