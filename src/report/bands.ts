@@ -24,5 +24,5 @@ export function bandRows(assessment: Assessment): readonly BandRow[] {
 }
 
 function shareRange(least: string, greatest: string): string {
-  return least === greatest ? least : `${least.replace(' %', '')} – ${greatest}`
+  return least === greatest ? least : `${least.replace('\u00a0%', '')} to ${greatest}`
 }

@@ -30,7 +30,10 @@ export interface EquationCard {
   readonly evidence: string
   readonly equations: readonly CardEquation[]
   readonly terms: readonly TermRow[]
+  /** Of the components that no card before this one has shown. */
   readonly symbols: readonly SymbolRow[]
+  /** Lines whose cards show the symbols of the others. */
+  readonly symbolsBefore: readonly { readonly id: string; readonly title: string }[]
   /** Titles and words of the kinds behind it. */
   readonly kinds: readonly { readonly kind: string; readonly title: string; readonly validity: string }[]
   /** Keys of the catalogue's references. */
@@ -39,7 +42,8 @@ export interface EquationCard {
 
 /** One card a line, in the order of the file; values at the reference frequency. */
 export function equationCards(assessment: Assessment): readonly EquationCard[] {
-  return assessment.atReference.lines.map(line => equationCard(line, assessment))
+  const shown = new Map<string, string>()
+  return assessment.atReference.lines.map(line => equationCard(line, assessment, shown))
 }
 
 interface Owner {
@@ -48,10 +52,14 @@ interface Owner {
   readonly parameters: Parameters
 }
 
-function equationCard(line: LineCurve, assessment: Assessment): EquationCard {
+/** `shown` keeps, over the cards, which line's card lists the symbols of an owner. */
+function equationCard(line: LineCurve, assessment: Assessment, shown: Map<string, string>): EquationCard {
   const { budget, atReference, unit } = assessment
   const spec = budget.lines.find(each => each.id === line.id)
   const owners = ownersOf(line, assessment)
+  const fresh = owners.filter(owner => !shown.has(owner.id))
+  const before = new Set(owners.flatMap(owner => shown.get(owner.id) ?? []))
+  for (const owner of fresh) shown.set(owner.id, line.id)
   const declarations = [...new Set(owners.map(owner => owner.declaration))]
   return {
     id: line.id,
@@ -64,7 +72,8 @@ function equationCard(line: LineCurve, assessment: Assessment): EquationCard {
     evidence: spec?.evidence ?? '',
     equations: line.signed ? [correlation] : cardEquations(line, owners, assessment),
     terms: line.signed ? [] : line.of.flatMap(claim => termRow(claim, assessment) ?? []),
-    symbols: owners.flatMap(owner => symbolRows(owner, budget)),
+    symbols: fresh.flatMap(owner => symbolRows(owner, budget)),
+    symbolsBefore: atReference.lines.filter(each => before.has(each.id)).map(({ id, title }) => ({ id, title })),
     kinds: declarations.map(({ kind, title, validity }) => ({ kind, title, validity })),
     references: [...new Set(declarations.flatMap(declaration => declaration.references))],
   }

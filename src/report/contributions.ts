@@ -65,7 +65,7 @@ export function claimedSources(line: LineCurve, at: Evaluation): readonly Source
 
 /** Every limit at the reference frequency. */
 export function limitRows({ atReference, unit }: Assessment): readonly LimitRow[] {
-  const bounds = { added: 'the added noise', total: 'the total', none: 'nothing; shown to compare' }
+  const bounds = { added: 'the added noise', total: 'the total', none: 'nothing strictly; shown to compare' }
   return atReference.limits.map(limit => ({
     id: limit.id,
     title: limit.title,

@@ -1,7 +1,8 @@
 import type { Assessment } from '../model/assessment.js'
 import type { Root } from '../model/budget.js'
 import { claimedSources } from './contributions.js'
-import { frequencyText, percentText } from './numbers.js'
+import { tableFrequencyText } from './headlines.js'
+import { percentText } from './numbers.js'
 import { givenNumbers, slotRoot } from './slots.js'
 
 /** On what a budget rests. */
@@ -16,19 +17,26 @@ const isAssumed = (evidence: string | null): boolean => evidence === 'assumed'
 
 /** Counts the values by evidence and adds up the lines whose own component or text is assumed. */
 export function evidenceOf(assessment: Assessment): Evidence {
-  const { budget, atReference } = assessment
+  const { budget } = assessment
   const assumed = budget.roots.filter(root => isAssumed(root.evidence)).length
   const silent = budget.roots.filter(root => root.evidence === null).length
   const assumedShare = shareOfAssumed(assessment)
-  const share = percentText(assumedShare)
-  const frequency = frequencyText(atReference.points.frequency[0])
   return {
     assumedShare,
     sentences: [
-      `${share} of the total power at ${frequency} lies in contributions that use a value of their own marked as assumed.`,
-      `Of ${countText(budget.roots.length, 'value')} in the file, ${assumed} ${assumed === 1 ? 'is' : 'are'} assumed, ${budget.roots.length - assumed - silent} rest on a stated source and ${silent} state no evidence.`,
+      shareSentence(assumedShare, tableFrequencyText(assessment)),
+      `Of ${countText(budget.roots.length, 'value')} in the file, ${wordOf(assumed)} ${assumed === 1 ? 'is' : 'are'} assumed, ${wordOf(budget.roots.length - assumed - silent)} rest on a stated source and ${wordOf(silent)} state no evidence.`,
     ],
   }
+}
+
+function shareSentence(share: number, frequency: string): string {
+  if (share === 0) return 'No contribution uses a value of its own marked as assumed.'
+  return `${percentText(share)} of the total power at ${frequency} lies in contributions that use a value of their own marked as assumed.`
+}
+
+function wordOf(count: number): string {
+  return count === 0 ? 'none' : String(count)
 }
 
 function countText(count: number, noun: string): string {

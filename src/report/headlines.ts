@@ -1,5 +1,5 @@
 import type { Assessment, At } from '../model/assessment.js'
-import { densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
+import { frequencyDigits, densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
 import { inSentence, lineTitle, listText } from './titles.js'
 
 /** A number that a report opens with. */
@@ -23,8 +23,19 @@ export function opening(assessment: Assessment): Opening {
   const { best } = assessment.headlines
   const value = densityText(best.asd, assessment.unit)
   const margin = best.totalMargin === null ? '' : `, ${limitText(best.totalMargin)}`
-  const rest = `at ${frequencyText(best.frequency)}${margin}, set by ${setBy(assessment, best)}.`
+  const rest = `at ${bestFrequencyText(assessment)}${margin}, set by ${setBy(assessment, best)}.`
   return { value, rest, sentence: `Best ${value} ${rest}` }
+}
+
+/** The best frequency to a hundredth or so of the band in which the sensor is good. */
+export function bestFrequencyText({ headlines: { best, halfPowerBand } }: Assessment): string {
+  return frequencyText(best.frequency, frequencyDigits(best.frequency, halfPowerBand.to - halfPowerBand.from))
+}
+
+/** Where tables and cards are evaluated: the file's reference frequency, else the best one. */
+export function tableFrequencyText(assessment: Assessment): string {
+  const { reference } = assessment.headlines
+  return reference === null ? bestFrequencyText(assessment) : frequencyText(reference.frequency, 12)
 }
 
 function limitText(margin: number): string {
@@ -50,7 +61,7 @@ export function headlineNumbers(assessment: Assessment): readonly Headline[] {
   return [
     bestHeadline(assessment),
     ...(headlines.reference === null ? [] : [referenceHeadline(assessment, headlines.reference)]),
-    ...marginHeadlines(headlines.reference ?? headlines.best),
+    ...marginHeadlines(headlines.reference ?? headlines.best, tableFrequencyText(assessment)),
     largestHeadline(assessment, headlines.reference ?? headlines.best),
     {
       id: 'band',
@@ -62,9 +73,9 @@ export function headlineNumbers(assessment: Assessment): readonly Headline[] {
   ]
 }
 
-function bestHeadline({ headlines: { best }, unit }: Assessment): Headline {
-  const value = densityText(best.asd, unit)
-  return { id: 'best', label: 'Best sensitivity', value, note: `at ${frequencyText(best.frequency)}` }
+function bestHeadline(assessment: Assessment): Headline {
+  const value = densityText(assessment.headlines.best.asd, assessment.unit)
+  return { id: 'best', label: 'Best sensitivity', value, note: `at ${bestFrequencyText(assessment)}` }
 }
 
 function referenceHeadline(assessment: Assessment, reference: At): Headline {
@@ -72,17 +83,30 @@ function referenceHeadline(assessment: Assessment, reference: At): Headline {
     id: 'reference',
     label: 'At the reference frequency',
     value: densityText(reference.asd, assessment.unit),
-    note: `at ${frequencyText(reference.frequency)}`,
+    note: `at ${tableFrequencyText(assessment)}`,
   }
 }
 
-function marginHeadlines(at: At): readonly Headline[] {
-  const where = `the standard quantum limit, as a ratio of powers, at ${frequencyText(at.frequency)}`
+function marginHeadlines(at: At, frequency: string): readonly Headline[] {
+  const where = `the standard quantum limit, as a ratio of powers, at ${frequency}`
   const margin = (id: string, label: string, value: number | null): readonly Headline[] =>
     value === null ? [] : [{ id, label, value: marginHeadline(value), note: where }]
   return [
     ...margin('total-margin', 'Margin of the total', at.totalMargin),
     ...margin('added-margin', 'Margin of the added noise', at.addedMargin),
+  ]
+}
+
+/** For a list of sensors: what the opening sentence does not say. */
+export function furtherFacts(assessment: Assessment): readonly { readonly label: string; readonly value: string }[] {
+  const { best, reference, halfPowerBand } = assessment.headlines
+  const added = best.addedMargin
+  return [
+    ...(reference === null
+      ? []
+      : [{ label: `At ${tableFrequencyText(assessment)}`, value: densityText(reference.asd, assessment.unit) }]),
+    ...(added === null ? [] : [{ label: 'Added noise, to the same limit', value: marginHeadline(added) }]),
+    { label: 'Half-power band', value: frequencyText(halfPowerBand.to - halfPowerBand.from, 3) },
   ]
 }
 
@@ -97,7 +121,7 @@ function largestHeadline(assessment: Assessment, at: At): Headline {
     id: 'largest',
     label: 'Largest contribution',
     value: lineTitle(assessment, largest.line),
-    note: `${percentText(largest.share)} of the total power at ${frequencyText(at.frequency)}`,
+    note: `${percentText(largest.share)} of the total power at ${tableFrequencyText(assessment)}`,
   }
 }
 

@@ -16,6 +16,12 @@ export function frequencyTex(hertz: number, digits = 6): string {
   return trimZeros(formatTex(hertz, 'Hz', { digits }))
 }
 
+/** Digits that a frequency deserves when it is known to a hundredth or so of a width in Hz: three to twelve. */
+export function frequencyDigits(hertz: number, width: number): number {
+  if (!(width > 0)) return 12
+  return Math.min(12, Math.max(3, Math.ceil(Math.log10(hertz / width)) + 2))
+}
+
 /** A plain number; powers of ten where it is very small or large: `6.87 × 10⁴`. */
 export function numberText(value: number, digits = 4): string {
   return trimZeros(formatQuantity(value, '', { digits }))
@@ -54,15 +60,15 @@ export function percentText(share: number): string {
   return `${share < 0 ? '−' : ''}${text}${space}%`
 }
 
-/** `1.2000 – 1.2413 MHz`, in one unit and with equal decimals where both ends share the unit. */
+/** `1.2000 to 1.2413 MHz`, in one unit and with equal decimals where both ends share the unit. */
 export function rangeText(from: number, to: number): string {
   const [low, high] = distinct(from, to)
   const [lowNumber, lowUnit] = low.split(space)
   const [highNumber, highUnit] = high.split(space)
-  const dash = `${space}–${space}`
-  if (lowUnit !== highUnit) return `${low}${dash}${high}`
+  const between = `${space}to${space}`
+  if (lowUnit !== highUnit) return `${low}${between}${high}`
   const decimals = Math.max(decimalsOf(lowNumber), decimalsOf(highNumber))
-  return `${padded(lowNumber, decimals)}${dash}${padded(highNumber, decimals)}${space}${highUnit}`
+  return `${padded(lowNumber, decimals)}${between}${padded(highNumber, decimals)}${space}${highUnit}`
 }
 
 function decimalsOf(number: string): number {

@@ -48,7 +48,7 @@ function cavityFacts(cavity: CavityState): readonly Fact[] {
     ...cavity.ports.map(port =>
       fact(
         `Port ${port.id}`,
-        `κ/2π ${frequencyText(port.rate / (2 * Math.PI), 4)}, ${port.occupancy === 0 ? 'vacuum' : `${occupancyText(port.occupancy)} quanta`}`,
+        `κ/2π ${frequencyText(port.rate, 4)}, ${port.occupancy === 0 ? 'vacuum' : `${occupancyText(port.occupancy)} quanta`}`,
       ),
     ),
   ]

@@ -5,10 +5,10 @@ import { referenceText } from './catalogue.js'
 import { cautions, type Caution } from './cautions.js'
 import { contributionRows, limitRows, type ContributionRow, type LimitRow } from './contributions.js'
 import { evidenceOf, type Evidence } from './evidence.js'
-import { headlineNumbers, opening, type Headline, type Opening } from './headlines.js'
-import { densityText, frequencyText, rangeText } from './numbers.js'
+import { furtherFacts, headlineNumbers, opening, tableFrequencyText, type Headline, type Opening } from './headlines.js'
+import { densityText, rangeText } from './numbers.js'
 import { parameterRows, type ParameterRow } from './parameters.js'
-import { cavityBlocks, modeBlocks, type StateBlock } from './state.js'
+import { cavityBlocks, modeBlocks, type Fact, type StateBlock } from './state.js'
 
 /** A card whose references have got their numbers in the report's list. */
 export interface CitedCard extends EquationCard {
@@ -33,6 +33,8 @@ export interface ReportView {
   readonly referenceStated: boolean
   readonly opening: Opening
   readonly headlines: readonly Headline[]
+  /** For a list of sensors. */
+  readonly facts: readonly Fact[]
   readonly bands: readonly BandRow[]
   readonly contributions: readonly ContributionRow[]
   /** At the reference frequency. */
@@ -64,10 +66,11 @@ export function reportView(assessment: Assessment): ReportView {
     unit: assessment.unit,
     readout: budget.readout,
     band: rangeText(budget.band.low, budget.band.high),
-    referenceFrequency: frequencyText(assessment.atReference.points.frequency[0]),
+    referenceFrequency: tableFrequencyText(assessment),
     referenceStated: budget.reference !== null,
     opening: opening(assessment),
     headlines: headlineNumbers(assessment),
+    facts: furtherFacts(assessment),
     bands: bandRows(assessment),
     contributions: contributionRows(assessment),
     total: { value: densityText(Math.sqrt(assessment.atReference.total[0]), assessment.unit) },

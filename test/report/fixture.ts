@@ -322,8 +322,8 @@ const cavity: CavityState = {
   pumpPower: 3e-6,
   detuning: 0,
   ports: [
-    { id: 'front', rate: 2 * Math.PI * 600e3, occupancy: 0 },
-    { id: 'back', rate: 2 * Math.PI * 90e3, occupancy: 0 },
+    { id: 'front', rate: 600e3, occupancy: 0 },
+    { id: 'back', rate: 90e3, occupancy: 0 },
   ],
 }
 

@@ -11,7 +11,7 @@ const plain = (text: string): string => text.replaceAll('\u00a0', ' ')
 describe('the opening', () => {
   it('says how good, where, how far from the limit, and what sets it', () => {
     expect(plain(view.opening.sentence)).toBe(
-      'Best 15.8 aN/√Hz at 1.24307 MHz, 17.3 dB above the standard quantum limit, set by thermal (91.5 %).',
+      'Best 15.8 aN/√Hz at 1.2431 MHz, 17.3 dB above the standard quantum limit, set by thermal (91.5 %).',
     )
     expect(view.opening.sentence).toBe(`Best ${view.opening.value} ${view.opening.rest}`)
   })
@@ -61,9 +61,9 @@ describe('the headline numbers', () => {
 describe('the tables', () => {
   it('say what dominates where', () => {
     expect(view.bands.map(band => [plain(band.range), band.title])).toEqual([
-      ['1.2000 – 1.2413 MHz', 'Shot'],
-      ['1.2413 – 1.2445 MHz', 'Thermal'],
-      ['1.2445 – 1.3000 MHz', 'Shot'],
+      ['1.2000 to 1.2413 MHz', 'Shot'],
+      ['1.2413 to 1.2445 MHz', 'Thermal'],
+      ['1.2445 to 1.3000 MHz', 'Shot'],
     ])
   })
 
@@ -120,7 +120,8 @@ describe('the equation cards', () => {
   })
 
   it('give symbols their values, ports by name', () => {
-    const symbols = card('back_action')?.symbols.map(symbol => [symbol.tex, symbol.value, symbol.root])
+    expect(card('back_action')?.symbolsBefore).toEqual([{ id: 'shot', title: 'Shot' }])
+    const symbols = card('shot')?.symbols.map(symbol => [symbol.tex, symbol.value, symbol.root])
     expect(symbols).toContainEqual(['\\kappa_{\\mathrm{front}}', '600 kHz', 'cavity.ports.front.rate'])
     expect(symbols).toContainEqual(['\\Delta', '0 Hz', ''])
   })
