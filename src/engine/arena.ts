@@ -1,4 +1,5 @@
-import { blockBytes, blockLength, loops, memory } from './loops.js'
+import { blockBytes, blockLength, loops } from './loops.js'
+import { copyIn, copyOut } from './registers.js'
 
 /** Arrays for evaluations that follow one another: taking again after `reset` overwrites what was taken before. */
 export class Arena {
@@ -22,9 +23,9 @@ export function amplitude(psd: Float64Array, out = new Float64Array(psd.length))
   const at = 3 * blockBytes
   for (let start = 0; start < psd.length; start += blockLength) {
     const n = Math.min(blockLength, psd.length - start)
-    memory.set(psd.subarray(start, start + n), at / 8)
+    copyIn(psd, { start, n }, at)
     loops.root(at, at, n)
-    out.set(memory.subarray(at / 8, at / 8 + n), start)
+    copyOut(at, { start, n }, out)
   }
   return out
 }

@@ -7,8 +7,8 @@ import { Arena } from './arena.js'
 import { gridArrays } from './grid-arrays.js'
 import { planLimits, type LimitPlan } from './limits.js'
 import { planLines, type LinePlan } from './lines.js'
-import { memory } from './loops.js'
 import type { Real } from './real.js'
+import { copyOut } from './registers.js'
 import { SourceDensities, type RealParts } from './source-densities.js'
 import { Tape } from './tape.js'
 
@@ -38,11 +38,8 @@ class Harvest {
     const grid = gridArrays(points)
     this.#arrays = this.addresses.map(() => arena.take(grid.length))
     this.#next = 0
-    this.tape.run(grid, ({ start, n }) => {
-      for (const [i, array] of this.#arrays.entries()) {
-        const from = this.addresses[i] / 8
-        array.set(memory.subarray(from, from + n), start)
-      }
+    this.tape.run(grid, block => {
+      for (const [i, array] of this.#arrays.entries()) copyOut(this.addresses[i], block, array)
     })
   }
 

@@ -15,7 +15,7 @@ export function oscillator(
   const slope = -mass * gamma * twoPi
   const level = -mass * (twoPi * frequency) ** 2 * phi
   const { frequency: f, base, offset } = inputs
-  return tape.complex(`oscillator ${mass} ${frequency} ${gamma} ${phi}`, out => ({ n }) => {
+  return tape.complex(['oscillator', mass, frequency, gamma, phi], out => ({ n }) => {
     loops.oscillator(out, f, base, offset, n, stiffness, frequency, slope, level)
   })
 }

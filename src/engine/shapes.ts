@@ -45,7 +45,7 @@ export function shapeReal(tape: Tape, shape: Shape): Real {
 }
 
 const bath = (tape: Tape, temperature: number): Real =>
-  tape.real(`bath ${temperature}`, out => block => fillBath(out, block, temperature))
+  tape.real(['bath', temperature], out => block => fillBath(out, block, temperature))
 
 const numbers = new WeakMap<object, number>()
 let count = 0

@@ -15,7 +15,9 @@ import {
   type Term,
 } from './form.js'
 import type { GridArrays } from './grid-arrays.js'
-import { blockBytes, blockCapacity, blockLength, loops, memory } from './loops.js'
+import { KeyTree, type Key } from './key-tree.js'
+import { blockBytes, blockCapacity, blockLength, loops } from './loops.js'
+import { copyIn } from './registers.js'
 import { arrayKey, constantReal, mergeReals, realZero, registerReal, scaleReal, type Real } from './real.js'
 
 /** What a step is given at each block. */
@@ -37,7 +39,7 @@ export const inputs = { frequency: 0, base: blockBytes, offset: 2 * blockBytes }
  */
 export class Tape {
   readonly #steps: Step[] = []
-  readonly #known = new Map<string, number>()
+  readonly #known = new KeyTree()
   /** Registers that hold 1/[κ/2 − i(Δ+ω)], for the exact difference of two of them. */
   readonly #decays = new Map<number, { half: number; detuning: number }>()
   /** Real registers that hold |a|² or 1/|a|² of a complex register: their product is 1. */
@@ -50,33 +52,32 @@ export class Tape {
     for (let start = 0; start < grid.length; start += blockLength) {
       block.start = start
       block.n = Math.min(blockLength, grid.length - start)
-      memory.set(grid.frequency.subarray(start, start + block.n), 0)
-      memory.set(grid.base.subarray(start, start + block.n), blockLength)
-      memory.set(grid.offset.subarray(start, start + block.n), 2 * blockLength)
+      copyIn(grid.frequency, block, inputs.frequency)
+      copyIn(grid.base, block, inputs.base)
+      copyIn(grid.offset, block, inputs.offset)
       for (const step of this.#steps) step(block)
       copy(block)
     }
   }
 
-  #register(key: string, blocks: number, step: (out: number) => Step): number {
-    let address = this.#known.get(key)
-    if (address === undefined) {
-      address = this.#blocks * blockBytes
+  #register(key: Key, blocks: number, step: (out: number) => Step): number {
+    const node = this.#known.find(key)
+    if (node.address < 0) {
+      node.address = this.#blocks * blockBytes
       this.#blocks += blocks
       if (this.#blocks > blockCapacity) throw new EngineFault(`this budget needs more than ${blockCapacity} arrays`)
-      this.#known.set(key, address)
-      this.#steps.push(step(address))
+      this.#steps.push(step(node.address))
     }
-    return address
+    return node.address
   }
 
   /** A complex register filled by a step that is written once for each key. */
-  complex(key: string, step: (out: number) => Step): Form {
+  complex(key: Key, step: (out: number) => Step): Form {
     return registerForm(this.#register(key, 2, step))
   }
 
   /** A real register, likewise. */
-  real(key: string, step: (out: number) => Step): Real {
+  real(key: Key, step: (out: number) => Step): Real {
     return registerReal(this.#register(key, 1, step))
   }
 
@@ -84,7 +85,7 @@ export class Tape {
   decayReciprocal(values: { half: number; detuning: number }): Form {
     const half = values.half
     const detuning = values.detuning + 0
-    const form = this.complex(`decay ${half} ${detuning}`, out => ({ n }) => {
+    const form = this.complex(['decay', half, detuning], out => ({ n }) => {
       loops.decayReciprocal(out, inputs.frequency, n, half, detuning)
     })
     this.#decays.set(form.terms[0].register, { half, detuning })
@@ -119,7 +120,7 @@ export class Tape {
   }
 
   #combine({ constant: c, terms }: Form): Form {
-    const key = `combine ${c.re} ${c.im} ${terms.map(t => `${t.register}*${t.scale.re},${t.scale.im}`).join(' ')}`
+    const key = ['combine', c.re, c.im, ...terms.flatMap(t => [t.register, t.scale.re, t.scale.im])]
     const [a, b, ...rest] = terms
     if (b === undefined) {
       return this.complex(
@@ -146,7 +147,7 @@ export class Tape {
     }
     if (b.terms.length === 1 && !isSingle(b) && isSingle(a)) return this.multiply(b, a)
     const [x, y] = [this.#single(a), this.#single(b)].sort((p, q) => p.register - q.register)
-    const product = this.complex(`multiply ${x.register} ${y.register}`, out => ({ n }) => {
+    const product = this.complex(['multiply', x.register, y.register], out => ({ n }) => {
       loops.multiply(out, x.register, y.register, n)
     })
     return scaleForm(product, times(x.scale, y.scale))
@@ -156,7 +157,7 @@ export class Tape {
     if (isConstant(a)) return reciprocalConstant(a)
     const { register, scale } = this.#single(a)
     const form = this.complex(
-      `reciprocal ${register}`,
+      ['reciprocal', register],
       out =>
         ({ n }) =>
           loops.reciprocal(out, register, n),
@@ -169,7 +170,7 @@ export class Tape {
     if (isConstant(b)) return scaleForm(a, reciprocal(b.constant))
     if (isConstant(a)) return scaleForm(this.reciprocal(b), a.constant)
     const [x, y] = [this.#single(a), this.#single(b)]
-    const form = this.complex(`divide ${x.register} ${y.register}`, out => ({ n }) => {
+    const form = this.complex(['divide', x.register, y.register], out => ({ n }) => {
       loops.divide(out, x.register, y.register, n)
     })
     return scaleForm(form, times(x.scale, reciprocal(y.scale)))
@@ -180,7 +181,7 @@ export class Tape {
     if (isConstant(a)) return constantReal(norm(a.constant))
     const { register, scale } = this.#single(a)
     const real = this.real(
-      `abs2 ${register}`,
+      ['abs2', register],
       out =>
         ({ n }) =>
           loops.abs2(out, register, n),
@@ -194,7 +195,7 @@ export class Tape {
     if (isConstant(a)) return constantReal(1 / norm(a.constant))
     const { register, scale } = this.#single(a)
     const real = this.real(
-      `inverse ${register}`,
+      ['inverse', register],
       out =>
         ({ n }) =>
           loops.inverseAbs2(out, register, n),
@@ -209,7 +210,7 @@ export class Tape {
     if (square.array.kind === 'one') return constantReal(Math.sqrt(square.scale))
     const address = this.#address(square)
     const real = this.real(
-      `root ${address}`,
+      ['root', address],
       out =>
         ({ n }) =>
           loops.root(out, address, n),
@@ -224,7 +225,7 @@ export class Tape {
     const plain = single.scale.re === 1 && single.scale.im === 0
     const { register } = plain ? single : this.#combine({ constant: { re: 0, im: 0 }, terms: [single] }).terms[0]
     return this.real(
-      `imaginary ${register}`,
+      ['imaginary', register],
       out =>
         ({ n }) =>
           loops.absImaginary(out, register, n),
@@ -238,7 +239,7 @@ export class Tape {
     const first = p * norm(x.scale)
     // Rounded to 14 digits, so that ports that differ by their rate alone share one array.
     const ratio = Number(((q * norm(y.scale)) / first).toPrecision(14))
-    const real = this.real(`pair ${x.register} ${y.register} ${ratio}`, out => ({ n }) => {
+    const real = this.real(['pair', x.register, y.register, ratio], out => ({ n }) => {
       loops.pair(out, x.register, y.register, n, ratio)
     })
     return scaleReal(real, first)
@@ -252,7 +253,7 @@ export class Tape {
       const [x, y] = [this.#written(a), this.#written(b)]
       return { x: x.register, y: y.register, factor: times(c, times(x.scale, conjugate(y.scale))) }
     })
-    const key = `cross ${parts.map(p => `${p.x} ${p.y} ${p.factor.re},${p.factor.im}`).join(' ')}`
+    const key = ['cross', ...parts.flatMap(p => [p.x, p.y, p.factor.re, p.factor.im])]
     return this.real(key, out => ({ n }) => {
       for (const [i, { x, y, factor }] of parts.entries()) {
         if (i === 0) loops.cross(out, x, y, n, factor.re, factor.im)
@@ -264,7 +265,7 @@ export class Tape {
   /** Like `#single`, for constants too. */
   #written(a: Form): Term {
     if (!isConstant(a)) return this.#single(a)
-    const unit = this.complex('unit', out => ({ n }) => {
+    const unit = this.complex(['unit'], out => ({ n }) => {
       loops.constant(out, n, 1)
       loops.constant(out + blockBytes, n, 0)
     })
@@ -280,7 +281,7 @@ export class Tape {
     const one = p !== undefined && q !== undefined && p.of === q.of && p.inverse !== q.inverse
     if (one) return constantReal(a.scale * b.scale)
     const real = this.real(
-      `product ${x} ${y}`,
+      ['product', x, y],
       out =>
         ({ n }) =>
           loops.product(out, x, y, n),
@@ -294,7 +295,7 @@ export class Tape {
     const [x, y] = [this.#address(a), this.#address(b)]
     if (x === y) return constantReal(a.scale / b.scale)
     const real = this.real(
-      `ratio ${x} ${y}`,
+      ['ratio', x, y],
       out =>
         ({ n }) =>
           loops.ratio(out, x, y, n),
@@ -308,7 +309,7 @@ export class Tape {
     if (live.length === 0) return realZero
     if (live.length === 1) return live[0]
     const written = live.map(term => ({ address: this.#address(term), scale: term.scale }))
-    const key = `sum ${written.map(t => `${t.scale}*${t.address}`).join(' + ')}`
+    const key = ['sum', ...written.flatMap(t => [t.scale, t.address])]
     return this.real(
       key,
       out =>
@@ -321,9 +322,9 @@ export class Tape {
   #address({ array }: Real): number {
     if (array.kind === 'register') return array.address
     return addressOf(
-      this.real(`copy ${arrayKey(array)}`, out => ({ grid, start, n }) => {
-        if (array.kind === 'grid') memory.set(array.of(grid).subarray(start, start + n), out / 8)
-        else loops.constant(out, n, 1)
+      this.real(['copy', arrayKey(array)], out => block => {
+        if (array.kind === 'grid') copyIn(array.of(block.grid), block, out)
+        else loops.constant(out, block.n, 1)
       }),
     )
   }
@@ -336,7 +337,7 @@ export class Tape {
     if (scale === 1) return address
     return addressOf(
       this.real(
-        `sum ${scale}*${address}`,
+        ['sum', scale, '*', address],
         out =>
           ({ n }) =>
             loops.sum1(out, address, n, scale),
