@@ -8,7 +8,7 @@ import type { SitePages } from './pages.js'
 /** The part of Eleventy's configuration object that is used here; Eleventy ships no types. */
 export interface EleventyConfig {
   /** Set by the build, read by `.eleventy.js`. */
-  configureSite?: (config: EleventyConfig) => object
+  configureSite?: (config: EleventyConfig) => EleventyInput
   readonly ignores: { delete(glob: string): boolean }
   setUseGitIgnore(use: boolean): void
   setQuietMode(quiet: boolean): void
@@ -16,11 +16,19 @@ export interface EleventyConfig {
   setFrontMatterParsingOptions(options: object): void
   setTemplateFormats(formats: readonly string[]): void
   addGlobalData(name: string, data: unknown): void
-  on(event: string, callback: (event: { readonly directories: { readonly output: string } }) => unknown): void
+  on(event: 'eleventy.after', callback: (event: FinishedBuild) => Promise<void>): void
 }
 
-export interface EleventyDirectories {
-  readonly dir: { readonly input: string; readonly output?: string }
+/** What Eleventy tells at its end. */
+export interface FinishedBuild {
+  readonly directories: { readonly output: string }
+  readonly results: readonly { readonly url: string | false; readonly content: string }[]
+}
+
+/** What `.eleventy.js` has to know. */
+export interface EleventyInput {
+  /** Folder of the pages. */
+  readonly input: string
 }
 
 /** Folder of the pages, relative to the working directory as Eleventy wants it. */
@@ -36,7 +44,7 @@ export function configureEleventy(
   config: EleventyConfig,
   pages: SitePages,
   typesetter: Typesetter,
-): EleventyDirectories {
+): EleventyInput {
   config.setUseGitIgnore(false)
   config.ignores.delete('**/node_modules/**')
   config.setQuietMode(true)
@@ -44,7 +52,7 @@ export function configureEleventy(
   config.setFrontMatterParsingOptions({ engines: refusedEngines })
   config.setLibrary('njk', nunjucksEnvironment(typesetter))
   for (const [name, value] of Object.entries(pages)) config.addGlobalData(name, value)
-  return { dir: { input: pagesFolder() } }
+  return { input: pagesFolder() }
 }
 
 const refuse = (): never => {
