@@ -1,7 +1,7 @@
 import type { Curve } from './curves.js'
 import { placeInside } from './inside-labels.js'
 import { makeLabel, type Label } from './label.js'
-import { MARGIN_AFTER, MARGIN_BEFORE, marginLabels, type Ending } from './margin-labels.js'
+import { displacements, MARGIN_AFTER, MARGIN_BEFORE, marginLabels, type Ending } from './margin-labels.js'
 import type { Occupancy } from './occupancy.js'
 import type { Box, Mark } from './scene.js'
 import { textSize } from './text-box.js'
@@ -24,25 +24,49 @@ export function marginLabel(curve: Curve, size: number): Label {
   return makeLabel(curve, size, WIDEST, LINES)
 }
 
+/** A name farther than this from the end of its curve is better placed inside the frame, in pixels. */
+const FAR = 30
+
 /**
- * A label for every curve: in the right margin where the curve ends there, inside the frame where it does not and there
- * is room, else in the margin with an arrow towards the edge that the curve has left the frame through.
+ * A label for every curve: in the right margin where the curve ends there and the label can stand near its end, else
+ * inside the frame where there is room, else in the margin, with an arrow towards the edge that the curve has left the
+ * frame through.
  */
 export function wideLabels(curves: readonly Curve[], frame: Box, occupancy: Occupancy, size: number): Mark[] {
-  const endings: Ending[] = []
   const marks: Mark[] = []
+  const inside = (label: Label): boolean => {
+    const mark = placeInside(label, occupancy, middleOf(label.curve), size)
+    if (mark !== null) marks.push(mark)
+    return mark !== null
+  }
+  const endings: Ending[] = []
   for (const curve of byWeight(curves)) {
     const label = marginLabel(curve, size)
     const y = endAt(curve, frame.right)
-    if (y !== null) {
-      endings.push({ label, y })
-      continue
-    }
-    const inside = placeInside(label, occupancy, middleOf(curve), size)
-    if (inside !== null) marks.push(inside)
-    else endings.push(leaving(curve, frame, size))
+    if (y !== null) endings.push({ label, y })
+    else if (!inside(label)) endings.push(leaving(curve, frame, size))
   }
-  return [...marks, ...marginLabels(endings, frame, size).marks]
+  const near = withoutFar(endings, frame, size, inside)
+  return [...marks, ...marginLabels(near, frame, size).marks]
+}
+
+/** Takes the labels that others have moved far from their curves out of the margin, the farthest first, where `inside` finds room for them. */
+function withoutFar(
+  endings: readonly Ending[],
+  frame: Box,
+  size: number,
+  inside: (label: Label) => boolean,
+): readonly Ending[] {
+  const tried = new Set<Ending>()
+  let left = endings
+  for (;;) {
+    const moved = displacements(left, frame, size)
+    const far = left.filter(e => !e.loose && !tried.has(e) && (moved.get(e) ?? 0) > FAR)
+    if (far.length === 0) return left
+    const worst = far.reduce((a, b) => (moved.get(b)! > moved.get(a)! ? b : a))
+    tried.add(worst)
+    if (inside(worst.label)) left = left.filter(e => e !== worst)
+  }
 }
 
 export function byWeight(curves: readonly Curve[]): Curve[] {

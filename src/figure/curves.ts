@@ -47,7 +47,7 @@ export function drawCurves(input: FigureInput, window: Window): Curve[] {
     )
   })
   lines.sort((a, b) => a.weight - b.weight)
-  const total = { id: 'total', title: 'total', psd: input.total }
+  const total = { id: 'total', title: 'Total', psd: input.total }
   return [...limits, ...lines, draw(total, POSITIVE, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window)]
 }
 

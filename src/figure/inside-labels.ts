@@ -22,11 +22,14 @@ const MOST_NEIGHBOUR_COST = 40
 export function placeInside(label: Label, occupancy: Occupancy, preferred: number, size: number): TextMark | null {
   const own = new Occupancy(occupancy.frame)
   own.addCurve(label.curve.pieces)
+  // The total is drawn over all others and named in bold: a curve that hides behind it is no rival for its name.
+  const isTotal = label.curve.ink.as === 'total'
+  const rivals = (box: Box, distance: number) => !isTotal && others(box, distance + CLEARER, occupancy, own) > 0
   let best: { box: Box; cost: number } | null = null
   for (const piece of label.curve.pieces)
     for (const [x, y] of along(piece)) {
       for (const { box, distance } of boxesAt(x, y, label)) {
-        if (!occupancy.isFree(inflated(box, 2)) || others(box, distance + CLEARER, occupancy, own) > 0) continue
+        if (!occupancy.isFree(inflated(box, 2)) || rivals(box, distance)) continue
         const cost = distance * 1.5 + Math.abs(x - preferred) * 0.05 + neighbourCost(box, occupancy, own)
         if (best === null || cost < best.cost) best = { box, cost }
       }

@@ -28,13 +28,26 @@ export interface Ending {
  */
 export function marginLabels(endings: readonly Ending[], frame: Box, size: number): { marks: Mark[]; left: Label[] } {
   const { kept, left } = fitting(endings, frame.bottom - frame.top)
-  const centres = spread(
-    kept.map(({ label, y }) => y + label.height / 2 - size * AIM),
-    kept.map(e => e.label.height + GAP),
-    frame.top,
-    frame.bottom,
-  )
+  const centres = centresOf(kept, frame, size)
   return { marks: kept.flatMap((ending, k) => labelMarks(ending, centres[k], frame, size)), left }
+}
+
+/** How far each label of the margin would stand from the height of its curve's end, in pixels. */
+export function displacements(endings: readonly Ending[], frame: Box, size: number): ReadonlyMap<Ending, number> {
+  const { kept } = fitting(endings, frame.bottom - frame.top)
+  const centres = centresOf(kept, frame, size)
+  return new Map(kept.map((ending, k) => [ending, Math.abs(centres[k] - targetOf(ending, size))]))
+}
+
+function centresOf(kept: readonly Ending[], frame: Box, size: number): number[] {
+  const targets = kept.map(ending => targetOf(ending, size))
+  const heights = kept.map(ending => ending.label.height + GAP)
+  return spread(targets, heights, frame.top, frame.bottom)
+}
+
+/** The centre of a label whose hairline is level. */
+function targetOf({ label, y }: Ending, size: number): number {
+  return y + label.height / 2 - size * AIM
 }
 
 function fitting(endings: readonly Ending[], room: number): { kept: Ending[]; left: Label[] } {

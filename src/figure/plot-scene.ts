@@ -37,9 +37,7 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
   const compact = isCompact(size.width)
   const { window, curves, axes } = layOut(view, size, plot)
   const { frame } = window
-  const shown = compact
-    ? curves.filter(isWorthSpace)
-    : curves.filter(curve => curve.pieces.length > 0 || (plot.nameHidden ?? true))
+  const shown = curves.filter(compact ? isWorthSpace : curve => isNamed(curve, plot.nameHidden ?? true))
   const occupancy = occupied(frame, shown)
   addReference(view, window, plot.abscissa, occupancy)
   const points = pointMarks(view, window, plot.abscissa, { occupancy, type })
@@ -57,7 +55,7 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
       ...(beyond === null ? [] : [beyond]),
       ...axes,
       ...points.behind,
-      ...shown.map(curveMark),
+      ...shown.filter(curve => curve.pieces.length > 0).map(curveMark),
       ...names.marks,
       ...points.front,
     ],
@@ -87,8 +85,14 @@ function longNames({ lines, limits }: FigureInput): string[] {
   return [...titles, ...signed].flatMap(title => [title, `${title} ↓`])
 }
 
-function isWorthSpace(curve: Curve): boolean {
-  return curve.pieces.length > 0 && (curve.ink.as !== 'line' || curve.weight >= LEAST_COMPACT_SHARE)
+/** Limits that are not in the frame have no name beside it. */
+function isNamed(curve: Curve, nameHidden: boolean): boolean {
+  return curve.pieces.length > 0 || (nameHidden && curve.ink.as === 'line')
+}
+
+/** A compact figure keeps the standard quantum limit of the limits, and the lines that matter. */
+function isWorthSpace({ ink, pieces, weight }: Curve): boolean {
+  return pieces.length > 0 && ink.as !== 'bound' && (ink.as !== 'line' || weight >= LEAST_COMPACT_SHARE)
 }
 
 function occupied(frame: Box, curves: readonly Curve[]): Occupancy {
@@ -120,7 +124,14 @@ function pointMarks(
   const x = xScale.at(best.frequency - origin)
   const y = yScale.at(best.asd)
   const inside = x >= frame.left && x <= frame.right && y >= frame.top && y <= frame.bottom
-  return { behind, front: bestMarks(best, inside ? { x, y } : null, occupancy, { unit, type }) }
+  return {
+    behind,
+    front: inside ? bestMarks(best.asd, { x, y }, occupancy, { unit, type, taken: textsIn(behind) }) : [],
+  }
+}
+
+function textsIn(marks: readonly Mark[]): Box[] {
+  return marks.flatMap(mark => (mark.mark === 'text' ? [mark.box] : []))
 }
 
 interface CompactLook {

@@ -1,9 +1,8 @@
-import type { FigureInput } from './input.js'
 import type { Occupancy } from './occupancy.js'
 import { frequencyName, withUnit } from './prefix.js'
 import type { AxisScale } from './scales.js'
 import type { Box, Mark } from './scene.js'
-import { textMark } from './text-box.js'
+import { overlaps, textMark } from './text-box.js'
 import type { TypeSizes } from './type-sizes.js'
 
 const RING = 4.5
@@ -30,32 +29,53 @@ export function referenceMarks(
   return [{ mark: 'path', ink, dash: [1, 3], pieces: [[at, frame.top, at, frame.bottom]] }, text]
 }
 
-/** A ring at the least total and its value beside it where there is room. */
-export function bestMarks(
-  best: FigureInput['best'],
-  at: { x: number; y: number } | null,
-  occupancy: Occupancy,
-  look: BestLook,
-): Mark[] {
-  if (best === null || at === null) return []
-  const ink = { as: 'best' } as const
-  const ring: Mark = { mark: 'ring', ink, x: at.x, y: at.y, radius: RING }
-  const lines = [`best ${withUnit(best.asd, look.unit)}`]
+/**
+ * A ring at the least total and its value beside it; where there is no room, above the frame behind a ring of the same
+ * look. `look.taken` are boxes above the frame that are not free.
+ */
+export function bestMarks(asd: number, at: Spot, occupancy: Occupancy, look: BestLook): Mark[] {
+  const { type, unit } = look
+  const lines = [`best ${withUnit(asd, unit)}`]
   for (const [dx, dy, anchor] of AROUND) {
-    const text = textMark(
-      { ink, role: 'note', x: at.x + dx, y: at.y + dy + look.type.note * 0.35, anchor, lines },
-      look.type.note,
-    )
+    const place = { x: at.x + dx, y: at.y + dy + type.note * 0.35, anchor }
+    const text = textMark({ ink: INK, role: 'note', ...place, lines }, type.note)
     if (!occupancy.isFree(text.box)) continue
     occupancy.addBox(text.box)
-    return [ring, text]
+    return [ring(at), text]
   }
-  return [ring]
+  return [ring(at), ...above(lines, occupancy.frame, look)]
+}
+
+interface Spot {
+  readonly x: number
+  readonly y: number
 }
 
 interface BestLook {
   readonly unit: string
   readonly type: TypeSizes
+  readonly taken: readonly Box[]
+}
+
+const INK = { as: 'best' } as const
+
+function ring({ x, y }: Spot): Mark {
+  return { mark: 'ring', ink: INK, x, y, radius: RING }
+}
+
+function above(lines: readonly string[], frame: Box, { type, taken }: BestLook): Mark[] {
+  const y = frame.top - 8
+  const note = (x: number) => textMark({ ink: INK, role: 'note', x, y, anchor: 'start', lines }, type.note)
+  const left = note(frame.left + 4 * RING)
+  // Starts where its generous width allows, so that the ring stands close to the words.
+  const right = note(frame.right - (left.box.right - left.box.left))
+  const text = [right, left].find(t => !taken.some(box => overlaps(withRing(t.box), box)))
+  if (text === undefined) return []
+  return [ring({ x: text.box.left - 2 * RING, y: y - type.note * 0.35 }), text]
+}
+
+function withRing(box: Box): Box {
+  return { ...box, left: box.left - 4 * RING, right: box.right + RING }
 }
 
 /** Places of the text around the ring, the preferred ones first. */

@@ -10,7 +10,7 @@ import { textMark } from './text-box.js'
 import { COMPACT } from './type-sizes.js'
 
 const NAMES = new Map([
-  ['total', 'total'],
+  ['total', 'Total'],
   ['limit', 'SQL'],
 ])
 const FONT = COMPACT.label

@@ -18,12 +18,13 @@ describe('the membrane', () => {
     await expect(renderSvg(sensitivityScene(input, size), name)).toMatchFileSnapshot(`pictures/membrane-${name}.svg`)
   })
 
-  it('names every line, the total and the limits once, in the curve’s own ink', () => {
+  it('names every line, the total and the limits in the frame once, in the curve’s own ink', () => {
     const input = membraneInput()
     const scene = sensitivityScene(input, WIDE)
     const names = labelsOf(scene).map(name => name.replace(' ↓', ''))
-    const expected = [...input.lines, ...input.limits].map(curve => curve.title)
-    expect(names.toSorted()).toEqual([...expected, 'total', '− correlation'].toSorted())
+    // The correlation limit lies below the frame.
+    const expected = [...input.lines, input.limits[0]].map(curve => curve.title)
+    expect(names.toSorted()).toEqual([...expected, 'Total', '− correlation'].toSorted())
     for (const text of textsOf(scene).filter(t => t.role === 'label'))
       if (pathsOf(scene).some(p => p.of === text.of)) expect(curveOf(scene, text.of!).ink).toEqual(text.ink)
   })
@@ -51,7 +52,7 @@ describe('the membrane', () => {
     const scene = sensitivityScene(membraneInput(), COMPACT)
     expect(scene.height).toBeGreaterThan(COMPACT.height)
     const names = labelsOf(scene)
-    for (const name of ['total', 'shot noise', 'thermal', 'back-action', 'stray forces']) expect(names).toContain(name)
+    for (const name of ['Total', 'shot noise', 'thermal', 'back-action', 'stray forces']) expect(names).toContain(name)
     expect(names.filter(name => /SQL|standard quantum limit/.test(name))).toHaveLength(1)
     expectTextsApart(scene, 'compact')
   })
@@ -93,7 +94,7 @@ describe('inputs at the edge', () => {
 
   it('draws axes and no total when the total is nowhere above zero', () => {
     const scene = sensitivityScene({ ...empty, lines: [], limits: [] }, WIDE)
-    expect(curveOf(scene, 'total').pieces).toEqual([])
+    expect(pathsOf(scene).map(path => path.ink.as)).toEqual(['grid', 'axis', 'tick', 'reference'])
     expect(scene.description).toContain('The total is nowhere above zero.')
     expectTextsApart(scene, 'empty')
     expect(renderSvg(scene, 'e')).not.toMatch(/NaN|Infinity|undefined|null/)

@@ -10,7 +10,7 @@ const SIZE = { width: 260, height: 84 }
 describe('sparkScene', () => {
   it('shows the total and the standard quantum limit alone, named at their ends', () => {
     const scene = sparkScene(membraneInput(), SIZE)
-    expect(labelsOf(scene).toSorted()).toEqual(['SQL', 'total'])
+    expect(labelsOf(scene).toSorted()).toEqual(['SQL', 'Total'])
     expect(pathsOf(scene).map(p => p.of)).toEqual([undefined, 'limit-standard-quantum-limit', 'total'])
     expect(scene.description).not.toContain('thermal')
   })
