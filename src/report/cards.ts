@@ -121,7 +121,7 @@ function sourceEquations(
   return (wanted.length > 0 ? wanted : equations).map(({ name, tex }) => ({
     name,
     tex,
-    numbers: numbersIn(name, tex, source, owner, assessment),
+    numbers: numbersIn({ name, tex }, source, owner, assessment),
   }))
 }
 
@@ -134,8 +134,7 @@ function wantedNames(source: SourceCurve, owner: Owner, part: string | null): re
 }
 
 function numbersIn(
-  name: string,
-  tex: string,
+  { name, tex }: { readonly name: string; readonly tex: string },
   source: SourceCurve,
   owner: Owner,
   { budget, atReference }: Assessment,

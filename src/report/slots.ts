@@ -33,7 +33,7 @@ function numbersOf(value: Value, path: readonly string[]): readonly GivenNumber[
   if (isMap(value)) return [...value].flatMap(([name, inner]) => numbersOf(inner, [...path, name]))
   if (isSlot(value)) return [{ path, slot: value }]
   if (isDensity(value)) return densityNumbers(value, path)
-  return Object.entries(value as Parameters).flatMap(([field, inner]) => numbersOf(inner, [...path, field]))
+  return Object.entries(value).flatMap(([field, inner]) => numbersOf(inner, [...path, field]))
 }
 
 function densityNumbers(spec: DensitySpec, path: readonly string[]): readonly GivenNumber[] {

@@ -8,7 +8,7 @@ const assessment = fixtureAssessment()
 const { evaluation } = assessment
 
 describe('curves.csv', () => {
-  const rows = parse(curvesCsv(assessment)) as string[][]
+  const rows = parse(curvesCsv(assessment))
   const column = (title: string): number[] => {
     const index = rows[0].indexOf(title)
     expect(index, title).toBeGreaterThanOrEqual(0)
