@@ -16,6 +16,7 @@ export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
     net.output(instance.id, {
       senses: () => net.outputOf(reads).senses(),
       carrier: () => net.outputOf(reads).carrier(),
+      amplified: () => instance.values.gain === undefined || net.outputOf(reads).amplified(),
       read(u, v) {
         const amplitude = Math.sqrt(gain)
         const weights = [scale(u, amplitude), scale(v, amplitude)] as const

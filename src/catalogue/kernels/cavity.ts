@@ -107,6 +107,7 @@ function addPort(
   net.output(id, {
     senses: () => instance.id,
     carrier: () => (vanishes ? null : phase(mean)),
+    amplified: () => false,
     read(u, v) {
       net.record(fields[0], multiply(u, root))
       net.record(fields[1], multiply(v, root))

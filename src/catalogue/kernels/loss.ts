@@ -12,6 +12,7 @@ export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
     net.output(instance.id, {
       senses: () => net.outputOf(reads).senses(),
       carrier: () => net.outputOf(reads).carrier(),
+      amplified: () => net.outputOf(reads).amplified(),
       read(u, v) {
         if (transmission < 1) {
           const rest = Math.sqrt(1 - transmission)
