@@ -5,6 +5,7 @@ import type { Network } from '../model/network.js'
 import { EngineFault, type Problem } from '../model/problem.js'
 import { ascending, modeAnchors, zeroAnchors } from './anchors.js'
 import { assemble } from './assemble.js'
+import { refuseBlind } from './blind.js'
 import { Evaluator } from './evaluate.js'
 import { firstPoints, pointAt, refine } from './grid.js'
 import { headlinesOf } from './headlines.js'
@@ -21,11 +22,12 @@ export interface Prepared {
   readonly poles: readonly Pole[]
 }
 
-/** Throws `Refusal` where the working point is unstable or a kernel refuses its values. */
+/** Throws `Refusal` where the working point is unstable, the record blind, or a kernel refuses its values. */
 export function prepare(budget: Budget): Prepared {
   const network = assemble(budget)
   const poles = polesOf(network)
   refuseUnstable(network, poles)
+  refuseBlind(budget, network)
   return { budget, network, poles }
 }
 

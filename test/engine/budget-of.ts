@@ -34,6 +34,10 @@ export function budgetOf(components: ComponentSpec[], changes: Partial<Budget> =
   }
 }
 
-export function line(id: string, of: string[], part: LineSpec['claims'] extends infer C ? (C extends { part: infer P } ? P : never) : never): LineSpec {
+export function line(
+  id: string,
+  of: string[],
+  part: LineSpec['claims'] extends infer C ? (C extends { part: infer P } ? P : never) : never,
+): LineSpec {
   return { id, title: null, about: null, evidence: null, place, claims: { of, part } }
 }
