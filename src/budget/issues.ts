@@ -44,11 +44,10 @@ export class Issues {
   sorted(): readonly Problem[] {
     const all = [...this.#found].sort(byPlace)
     if (all.length <= shown) return all
-    const kept = all.slice(0, shown)
-    const last = kept[shown - 1]
-    if (last === undefined) return kept
-    const message = `${all.length - shown} more problems are not listed`
-    return [...kept, { severity: 'error', code: 'more', place: last.place, message }]
+    const [kept, cut] = [all.slice(0, shown), all.slice(shown)]
+    const severity = cut.some(problem => problem.severity === 'error') ? 'error' : 'warning'
+    const place = kept.at(-1)?.place ?? { file: '', line: 1, column: 1 }
+    return [...kept, { severity, code: 'more', place, message: `${cut.length} more problems are not listed` }]
   }
 }
 

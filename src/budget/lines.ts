@@ -3,7 +3,6 @@ import type { LineClaim, LineSpec, PartName } from '../model/budget.js'
 import type { Place } from '../model/problem.js'
 import { textOf } from './amount.js'
 import type { FieldReader } from './fields.js'
-import type { Issues } from './issues.js'
 import { nearest } from './nearest.js'
 import type { Noise } from './noises.js'
 import { quoted } from './quoted.js'
@@ -14,7 +13,7 @@ const parts: readonly PartName[] = ['imprecision', 'back-action', 'heating']
 /** Reads `contributions:`; lines that are wrong are left out, which has been said. */
 export function readLines(tree: Tree | undefined, noises: readonly Noise[], reader: FieldReader): LineSpec[] {
   if (tree?.type !== 'map') return []
-  const ledger = new Ledger(noises, reader.issues)
+  const ledger = new Ledger(noises, reader)
   return [...tree.entries.values()].flatMap(entry => {
     const claims = child(entry.value, 'kind') === undefined ? ledger.claim(entry) : ownNoise(entry, reader)
     return claims === null ? [] : [{ ...headOf(entry), claims }]
@@ -48,7 +47,7 @@ class Ledger {
 
   constructor(
     noises: readonly Noise[],
-    readonly issues: Issues,
+    readonly reader: FieldReader,
   ) {
     this.#byId = new Map(noises.map(noise => [noise.id, noise]))
     this.#components = new Set(noises.map(noise => noise.component))
@@ -72,14 +71,20 @@ class Ledger {
     const found = this.#byId.get(word.text)
     const all = found === undefined ? [...this.#byId.values()].filter(noise => noise.component === word.text) : [found]
     if (all.length === 0) {
-      this.issues.error('unknown-noise', word.place, this.#unknown(word.text))
+      if (this.#isOfUnknownKind(word.text)) return []
+      this.reader.issues.error('unknown-noise', word.place, this.#unknown(word.text))
       return null
     }
     const whole = part === null ? undefined : all.find(noise => !noise.parts)
     if (whole === undefined) return all
     const message = `\`${whole.id}\` has no parts, so that \`${part}\` of it cannot be claimed; leave \`part\` out or name other noises`
-    this.issues.error('no-parts', word.place, message)
+    this.reader.issues.error('no-parts', word.place, message)
     return null
+  }
+
+  /** Nothing can be said of the noises of a component whose kind is wrong, which has been said. */
+  #isOfUnknownKind(word: string): boolean {
+    return this.reader.directory.components.get(word.split('.')[0] ?? '')?.declaration === null
   }
 
   #unknown(word: string): string {
@@ -103,7 +108,7 @@ class Ledger {
         clash.line === claimed.line
           ? `twice by \`${clash.line}\``
           : `by \`${clash.line}\` (line ${clash.place.line}) and by \`${claimed.line}\``
-      this.issues.error(
+      this.reader.issues.error(
         'claimed-twice',
         claimed.place,
         `${what}\`${noise.id}\` is claimed ${who}; it may count once: take it out of one of them`,

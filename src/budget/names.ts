@@ -2,7 +2,7 @@
 export const idPattern = '^[a-z][a-z0-9_]{0,59}$'
 const id = new RegExp(idPattern)
 
-/** Names of constants and functions of the expression language, and words that columns and headlines use. */
+/** Names of constants and functions of the expression language. */
 const reserved: ReadonlySet<string> = new Set([
   ...[
     'pi',
@@ -24,14 +24,21 @@ const reserved: ReadonlySet<string> = new Set([
   ],
   ...['sqrt', 'exp', 'log', 'ln', 'log10', 'sin', 'cos', 'tan', 'asin', 'acos', 'atan', 'sinh', 'cosh', 'tanh', 'abs'],
   ...['min', 'max', 'coth', 'pow', 'sinc', 'bessel', 'if', 'to', 'kind', 'of', 'value'],
-  ...['total', 'frequency', 'anchor', 'offset', 'margin', 'occupancy'],
   // Words that every JavaScript object answers to.
   ...['constructor', 'prototype'],
 ])
 
+/** Words that columns of data and headlines use beside the lines of a budget. */
+const columns: ReadonlySet<string> = new Set(['total', 'frequency', 'anchor', 'offset', 'margin', 'occupancy'])
+
+/** Why a word cannot be a line of the budget. */
+export function lineFault(word: string): string | null {
+  return columns.has(word) ? 'is the name of a column or headline; choose another' : idFault(word)
+}
+
 /** Why a word cannot be an id: a clause that fits behind the word; null for a good one. */
 export function idFault(word: string): string | null {
-  if (reserved.has(word)) return 'is the name of a constant, a function or a column; choose another'
+  if (reserved.has(word)) return 'is the name of a constant or a function; choose another'
   if (id.test(word)) return null
   const foreign = [...word].find(character => (character.codePointAt(0) ?? 0) > 0x7f)
   if (foreign !== undefined) {

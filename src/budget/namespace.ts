@@ -1,5 +1,6 @@
 import type { Place } from '../model/problem.js'
-import { idFault } from './names.js'
+import { idFault, lineFault } from './names.js'
+import { quoted } from './quoted.js'
 import type { Issues } from './issues.js'
 import { child, type Tree } from './tree.js'
 
@@ -10,7 +11,7 @@ export function checkNames(root: Tree, issues: Issues): void {
     const tree = child(root, section)
     if (tree?.type !== 'map') continue
     for (const { key, keyPlace } of tree.entries.values()) {
-      checkId(key, keyPlace, issues)
+      report(key, section === 'contributions' ? lineFault(key) : idFault(key), { place: keyPlace, issues })
       const other = taken.get(key)
       if (other !== undefined)
         issues.error(
@@ -30,12 +31,11 @@ export function checkPortNames(components: Tree | undefined, issues: Issues): vo
     for (const field of ['ports', 'losses']) {
       const tree = child(value, field)
       if (tree?.type !== 'map') continue
-      for (const { key, keyPlace } of tree.entries.values()) checkId(key, keyPlace, issues)
+      for (const { key, keyPlace } of tree.entries.values()) report(key, idFault(key), { place: keyPlace, issues })
     }
   }
 }
 
-function checkId(key: string, place: Place, issues: Issues): void {
-  const fault = idFault(key)
-  if (fault !== null) issues.error('name', place, `\`${key.slice(0, 60)}\` ${fault}`)
+function report(key: string, fault: string | null, at: { readonly place: Place; readonly issues: Issues }): void {
+  if (fault !== null) at.issues.error('name', at.place, `${quoted(key)} ${fault}`)
 }

@@ -77,6 +77,12 @@ function listSensors(files: FileSource, issues: Issues): string[] {
   const sensors: string[] = []
   const folded = new Map<string, string>()
   for (const { name, nature } of list(files, 'budgets')) {
+    if (nature === 'other')
+      issues.error(
+        'sensor-name',
+        { file: `budgets/${name}`, line: 1, column: 1 },
+        `${quoted(name)} is a link, and links are not followed`,
+      )
     if (nature !== 'folder' || !list(files, `budgets/${name}`).some(entry => entry.name === 'budget.yaml')) continue
     const place = { file: `budgets/${name}/budget.yaml`, line: 1, column: 1 }
     const fault = sensorFault(name)

@@ -1,4 +1,3 @@
-import { CsvError, parse } from 'csv-parse/sync'
 import type { DensityField } from '../catalogue/declaration.js'
 import type { Table } from '../model/budget.js'
 import type { Place } from '../model/problem.js'
@@ -6,12 +5,11 @@ import { toDeclared, toDensity } from '../quantity/declared.js'
 import { QuantityError } from '../quantity/error.js'
 import { parseQuantity } from '../quantity/parse.js'
 import { textOf } from './amount.js'
+import { cellsFault, mostRows, readCsv, type CsvFault, type CsvRow } from './csv.js'
 import { FileRefusal, joinInside, type FileSource } from './file-source.js'
 import type { Issues } from './issues.js'
 import { quoted } from './quoted.js'
 import { child, placeWithin, type Tree } from './tree.js'
-
-const mostRows = 200_000
 
 /** Where the data files of a budget are looked for, and the band that a table must cover. */
 export interface DataFolder {
@@ -31,15 +29,12 @@ interface Columns {
   readonly power: boolean
 }
 
-/** A row as the CSV library gives it, with the line it ends in. */
-interface Row {
-  readonly record: readonly string[]
-  readonly info: { readonly lines: number }
-}
-
 /** Reads tables of densities from CSV files. */
 export class TableReader {
   readonly tables: Table[] = []
+  /** By path and lines skipped: many lines may name one file. */
+  readonly #read = new Map<string, readonly CsvRow[] | CsvFault>()
+  #rows = 0
 
   constructor(
     readonly data: DataFolder,
@@ -62,13 +57,33 @@ export class TableReader {
       )
       return null
     }
-    const text = this.#text(path, file, fileTree.place)
-    if (text === null) return null
-    const skip = Number(textOf(child(tree, 'skip')) ?? 0)
-    const rows = this.#rows(text, Number.isInteger(skip) ? skip : 0, path)
-    const table = rows === null ? null : this.#table(rows, columns, { file: path, place: fileTree.place })
+    const rows = this.#rowsOf(path, child(tree, 'skip'), { written: file, place: fileTree.place })
+    if (rows === null) return null
+    const table = this.#table(rows, columns, { file: path, place: fileTree.place })
     if (table === null || !this.#covers(table)) return null
     return this.tables.push(table) - 1
+  }
+
+  #rowsOf(path: string, skipTree: Tree | undefined, from: { written: string; place: Place }): readonly CsvRow[] | null {
+    const skip = Number(textOf(skipTree) ?? 0)
+    const key = `${skip} ${path}`
+    const known = this.#read.get(key)
+    const text = known === undefined ? this.#text(path, from.written, from.place) : ''
+    if (text === null) return null
+    const rows = known ?? readCsv(text, Number.isInteger(skip) ? skip : 0)
+    this.#read.set(key, rows)
+    if ('message' in rows) {
+      this.issues.error('table', { file: path, line: rows.line, column: 1 }, rows.message)
+      return null
+    }
+    this.#rows += rows.length
+    if (this.#rows <= mostRows) return rows
+    this.issues.error(
+      'table',
+      from.place,
+      `the tables of one budget have at most ${mostRows} rows in all; thin them out`,
+    )
+    return null
   }
 
   #columns(units: Tree | undefined, of: DensityField['of']): Columns | null {
@@ -103,46 +118,19 @@ export class TableReader {
     }
   }
 
-  #rows(text: string, skip: number, file: string): string[][] | null {
-    try {
-      const records: unknown = parse(text, {
-        comment: '#',
-        comment_no_infix: true,
-        from_line: skip + 1,
-        skip_empty_lines: true,
-        trim: true,
-        relax_column_count: true,
-        to: mostRows + 1,
-        max_record_size: 10_000,
-        info: true,
-      })
-      return (records as readonly Row[]).map(({ record, info }) => [String(info.lines), ...record])
-    } catch (error) {
-      if (!(error instanceof CsvError)) throw error
-      const line = Number((error as { lines?: unknown }).lines)
-      const place = { file, line: Number.isFinite(line) && line > 0 ? line : 1, column: 1 }
-      this.issues.error('table', place, `this line is no CSV: ${error.message.split('\n')[0] ?? ''}`)
-      return null
-    }
-  }
-
-  #table(rows: readonly string[][], columns: Columns, from: { file: string; place: Place }): Table | null {
-    if (rows.length < 2 || rows.length > mostRows) {
-      this.issues.error(
-        'table',
-        from.place,
-        `${quoted(from.file)} has ${rows.length > mostRows ? 'more than ' + mostRows : rows.length} rows; a table has 2 to ${mostRows}`,
-      )
+  #table(rows: readonly CsvRow[], columns: Columns, from: { file: string; place: Place }): Table | null {
+    if (rows.length < 2) {
+      const count = rows.length === 1 ? 'one row' : 'no rows'
+      this.issues.error('table', from.place, `${quoted(from.file)} has ${count}; a table needs two`)
       return null
     }
     const frequency = new Float64Array(rows.length)
     const psd = new Float64Array(rows.length)
     let faults = 0
     for (const [index, row] of rows.entries()) {
-      const place = { file: from.file, line: Number(row[0]), column: 1 }
-      const fault = rowFault(row) ?? fill(row, columns, { frequency, psd, index })
+      const fault = cellsFault(row, index === 0) ?? fill(row, columns, { frequency, psd, index })
       if (fault === null) continue
-      this.issues.error('table', place, fault)
+      this.issues.error('table', { file: from.file, line: row.line, column: 1 }, fault)
       if (++faults >= 5) return null
     }
     return faults > 0 ? null : { ...from, frequency, psd }
@@ -161,36 +149,24 @@ export class TableReader {
   }
 }
 
-const decimal = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d{1,4})?$/
-
-/** What is wrong with the cells of a row, whose first entry is its line. */
-function rowFault(row: readonly string[]): string | null {
-  const cells = row.slice(1)
-  if (cells.length !== 2) return `this row has ${cells.length} cells; frequency and density are two`
-  for (const cell of cells) {
-    if (cell === '') return 'this row has an empty cell; an empty cell is not 0: write the number or delete the row'
-    if (!decimal.test(cell)) return `${quoted(cell)} is no number; write it with a decimal point, such as \`2.5e-18\``
-  }
-  return null
-}
-
 interface Target {
   readonly frequency: Float64Array
   readonly psd: Float64Array
   readonly index: number
 }
 
-function fill(row: readonly string[], columns: Columns, { frequency, psd, index }: Target): string | null {
-  const f = Number(row[1]) * columns.frequency
-  const level = Number(row[2]) * columns.density
+function fill({ cells }: CsvRow, columns: Columns, { frequency, psd, index }: Target): string | null {
+  const [frequencyText = '', densityText = ''] = cells
+  const f = Number(frequencyText) * columns.frequency
+  const level = Number(densityText) * columns.density
   const power = columns.power ? level : level * level
-  if (!(f > 0 && Number.isFinite(f))) return `the frequency ${quoted(row[1] ?? '')} must be greater than 0 and finite`
-  if (!(power > 0 && Number.isFinite(power)))
-    return `the density ${quoted(row[2] ?? '')} must be greater than 0 and finite`
+  if (!(f > 0 && Number.isFinite(f))) return `the frequency ${quoted(frequencyText)} must be greater than 0 and finite`
+  if (!(level > 0 && power > 0 && Number.isFinite(power)))
+    return `the density ${quoted(densityText)} must be greater than 0 and finite`
   const before = index === 0 ? 0 : (frequency[index - 1] ?? 0)
   frequency[index] = f
   psd[index] = power
-  if (f === before) return `the frequency ${quoted(row[1] ?? '')} stands in two rows; keep one`
-  if (f < before) return `the frequency ${quoted(row[1] ?? '')} is below the row before it; sort the rows`
+  if (f === before) return `the frequency ${quoted(frequencyText)} stands in two rows; keep one`
+  if (f < before) return `the frequency ${quoted(frequencyText)} is below the row before it; sort the rows`
   return null
 }

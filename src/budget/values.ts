@@ -57,8 +57,16 @@ export class Values {
     if (given === null) return null
     const fault = rangeFault(given.value, spot.range)
     if (fault === null) return given
-    this.issues.error('range', amount.scalar.place, `${quoted(amount.scalar.text)} ${fault}`)
+    this.issues.error('range', amount.scalar.place, `${this.#shown(amount.scalar.text)} ${fault}`)
     return null
+  }
+
+  /** A quantity as it stands; a parameter with what stands for it. */
+  #shown(text: string): string {
+    const parameter = this.#parameters.get(text)?.amount.scalar
+    return parameter === undefined
+      ? quoted(text)
+      : `\`${text}\` (${quoted(parameter.text)}, line ${parameter.place.line})`
   }
 
   /** A quantity that is no root of its own, or a parameter: the reference frequency. */
@@ -130,6 +138,8 @@ export class Values {
 
   #add(id: string, amount: Amount, converted: Converted): number {
     const { about, evidence, measured, scalar } = amount
+    if (measured !== null && !isDate(measured))
+      this.issues.error('date', scalar.place, `\`measured\` says ${quoted(measured)}, which is no day of the calendar`)
     const { value, uncertainty, dimension } = converted
     this.roots.push({
       id,
@@ -215,4 +225,11 @@ function scaleBetween(first: Converted, other: Converted): number | null {
   if (first.dimension === 'frequency' && other.dimension === 'rate') return 2 * Math.PI
   if (first.dimension === 'rate' && other.dimension === 'frequency') return 1 / (2 * Math.PI)
   return first.value === other.value && first.uncertainty === other.uncertainty ? 1 : null
+}
+
+/** Words that the schema has refused for their shape are none of this function's business. */
+function isDate(text: string): boolean {
+  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return true
+  const time = Date.parse(`${text}T00:00:00Z`)
+  return Number.isFinite(time) && new Date(time).toISOString().startsWith(text)
 }
