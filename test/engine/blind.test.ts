@@ -25,7 +25,7 @@ function refused(budget: Budget): string[] {
 
 describe('a record that holds nothing of the measurand', () => {
   // 180° is 0 but for the rounding of π.
-  test.each([0, Math.PI])('amplitude quadrature of a resonant pump, angle %g rad', record => {
+  test.each([0, Math.PI])('amplitude quadrature of a resonant pump, angle %s rad', record => {
     const [message] = refused(readoutOf({ ...readout, record }, { band, readoutPlace: { ...place, line: 7 } }))
     expect(message).toMatch(/^blind 7: `detector` records nothing of the measurand .* 90°/)
   })

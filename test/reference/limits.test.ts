@@ -51,7 +51,7 @@ describe('product of imprecision and back-action, pump on resonance, phase quadr
   const frequencies = [3e3, 1e5, 0.999e6, 1e6, 1.003e6, 7e6, 2e8]
 
   // Identity; 1e-11 leaves a hundred roundings of the transfer and of the bare response formed here without offsets.
-  test.each([1e3, 1e5, 1e7, 1e9])('one port, κ = %g rad/s: ħ² at every frequency', kappa => {
+  test.each([1e3, 1e5, 1e7, 1e9])('one port, κ = %s rad/s: ħ² at every frequency', kappa => {
     for (const product of products(resonant(kappa), frequencies)) expect(Math.abs(product - 1)).toBeLessThan(1e-11)
   })
 
@@ -60,7 +60,7 @@ describe('product of imprecision and back-action, pump on resonance, phase quadr
     [0.3, 1],
     [0.9, 0.4],
     [0.25, 0.05],
-  ])('share %g of κ detected with efficiency %g: ħ²κ/(ηκ_d)', (share, efficiency) => {
+  ])('share %s of κ detected with efficiency %s: ħ²κ/(ηκ_d)', (share, efficiency) => {
     const ports = { inner: { rate: (1 - share) * 2e6 }, out: { rate: share * 2e6 } }
     for (const product of products(resonant(2e6, { ports, reads: 'out', efficiency }), frequencies)) {
       expect(Math.abs(product * share * efficiency - 1)).toBeLessThan(1e-11)
@@ -105,7 +105,7 @@ describe('added noise at the best power', () => {
   // Limit: the best angle and power reach 2ħ|Im χ⁻¹| for ω ≪ κ; Q = 20 so that the optimum is broad enough to search for. κ = 1e12 leaves
   // (ω/κ)² = 4e-11, the search some 1e-8.
   test.each([0.6e6, 0.97e6, 1.3e6])(
-    'best angle and power reach the correlation limit at %g Hz, below the standard one',
+    'best angle and power reach the correlation limit at %s Hz, below the standard one',
     f => {
       const drum = { ...mode, quality: 20 }
       const ratio = (record: number, quanta: number, id: string): number => {
