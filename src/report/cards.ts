@@ -11,11 +11,12 @@ import { substitute } from './substitution.js'
 import { symbolRows, type SymbolRow } from './symbols.js'
 import { termRow, type TermRow } from './terms.js'
 
-/** An equation of the catalogue, and the same with this budget's numbers where it has a closed form. */
+/** An equation of the catalogue as this budget uses it. */
 export interface CardEquation {
   readonly name: string
   readonly tex: string
-  readonly numbers: string | null
+  /** The same with numbers, one for each source that it describes; empty where it has no closed form. */
+  readonly numbers: readonly string[]
 }
 
 /** Everything a report says about one line of the budget. */
@@ -31,7 +32,7 @@ export interface EquationCard {
   readonly equations: readonly CardEquation[]
   readonly terms: readonly TermRow[]
   /** Of the components that no card before this one has shown. */
-  readonly symbols: readonly SymbolRow[]
+  readonly symbols: readonly { readonly owner: string; readonly rows: readonly SymbolRow[] }[]
   /** Lines whose cards show the symbols of the others. */
   readonly symbolsBefore: readonly { readonly id: string; readonly title: string }[]
   /** Titles and words of the kinds behind it. */
@@ -72,7 +73,9 @@ function equationCard(line: LineCurve, assessment: Assessment, shown: Map<string
     evidence: spec?.evidence ?? '',
     equations: line.signed ? [correlation] : cardEquations(line, owners, assessment),
     terms: line.signed ? [] : line.of.flatMap(claim => termRow(claim, assessment) ?? []),
-    symbols: fresh.flatMap(owner => symbolRows(owner, budget)),
+    symbols: fresh
+      .map(owner => ({ owner: owner.id, rows: symbolRows(owner, budget) }))
+      .filter(({ rows }) => rows.length > 0),
     symbolsBefore: atReference.lines.filter(each => before.has(each.id)).map(({ id, title }) => ({ id, title })),
     kinds: declarations.map(({ kind, title, validity }) => ({ kind, title, validity })),
     references: [...new Set(declarations.flatMap(declaration => declaration.references))],
@@ -82,7 +85,7 @@ function equationCard(line: LineCurve, assessment: Assessment, shown: Map<string
 const correlation: CardEquation = {
   name: 'correlation',
   tex: 'S^{\\mathrm{cor}} = \\frac{4}{|R|^2}\\,\\mathrm{Re}\\left(t_{\\mathrm{imp}}V_j f^\\dagger R^*\\right)',
-  numbers: null,
+  numbers: [],
 }
 
 function ownersOf(line: LineCurve, { budget, atReference }: Assessment): readonly Owner[] {
@@ -103,9 +106,17 @@ function cardEquations(line: LineCurve, owners: readonly Owner[], assessment: As
     const owner = owners.find(each => each.id === source?.owner)
     return source === undefined || owner === undefined ? [] : sourceEquations(source, owner, part ?? null, assessment)
   })
-  return found.filter(
-    (each, i) => found.findIndex(other => other.tex === each.tex && other.numbers === each.numbers) === i,
-  )
+  return joined(found)
+}
+
+/** One entry an equation, with the numbers of every source that it describes. */
+function joined(equations: readonly CardEquation[]): readonly CardEquation[] {
+  const byTex = new Map<string, CardEquation>()
+  for (const equation of equations) {
+    const numbers = new Set([...(byTex.get(equation.tex)?.numbers ?? []), ...equation.numbers])
+    byTex.set(equation.tex, { ...equation, numbers: [...numbers] })
+  }
+  return [...byTex.values()]
 }
 
 /** The kind's equations for this part or channel; all of them where none is named after it. */
@@ -138,8 +149,8 @@ function numbersIn(
   source: SourceCurve,
   owner: Owner,
   { budget, atReference }: Assessment,
-): string | null {
-  if (source.ownUnit === 'quanta') return null
+): readonly string[] {
+  if (source.ownUnit === 'quanta') return []
   const unit = source.ownUnit === 'N²/Hz' ? 'N/√Hz' : 'm/√Hz'
   const ground = {
     budget,
@@ -149,8 +160,8 @@ function numbersIn(
     frequency: atReference.points.frequency[0],
   }
   const put = substitute(name, ground, source.own[0])
-  if (put === null) return null
+  if (put === null) return []
   const left = tex.split('=')[0].replace('(f)', '').trim()
   const result = `\\left(${formatTex(Math.sqrt(put.value), unit)}\\right)^2`
-  return put.tex === result ? `${left} = ${result}` : `${left} = ${put.tex} = ${result}`
+  return [put.tex === result ? `${left} = ${result}` : `${left} = ${put.tex} = ${result}`]
 }

@@ -49,10 +49,15 @@ function setBy(assessment: Assessment, at: At): string {
   let sum = 0
   for (const { line, share } of at.shares) {
     if (named.length === 3 || sum >= 0.75 || share <= 0) break
-    named.push(`${inSentence(lineTitle(assessment, line))} (${percentText(share)})`)
+    named.push(`${inSentence(lineTitle(assessment, line))} (${roundPercent(share)})`)
     sum += share
   }
   return listText(named)
+}
+
+/** A sentence wants no tenths: `60 %`. */
+function roundPercent(share: number): string {
+  return share < 0.1 ? percentText(share) : `${Math.round(100 * share)}\u00a0%`
 }
 
 /** Every headline number, in the order of a reader's questions. */

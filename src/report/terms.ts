@@ -45,7 +45,8 @@ function whole(parts: Parts): number {
 }
 
 function ownText(own: number, unit: SourceCurve['ownUnit']): string {
-  if (unit === 'quanta') return own === vacuumQuanta ? '½ quantum' : `${numberText(own, 3)} quanta`
+  if (unit === 'quanta')
+    return own === vacuumQuanta ? '½ quantum' : `${numberText(own, 3)} ${own === 1 ? 'quantum' : 'quanta'}`
   return squareText(own, unit === 'N²/Hz' ? 'N/√Hz' : 'm/√Hz')
 }
 

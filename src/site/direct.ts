@@ -15,8 +15,8 @@ import { otherFiles, pathOf, type SiteFiles } from './render.js'
  * For Eleventy started by itself: the project around the working directory. Eleventy then writes the pages one after the
  * other, so that a run that is stopped leaves a part of them; `floorbook build` publishes whole.
  */
-export async function configureDirect(config: EleventyConfig): Promise<EleventyInput> {
-  const project = findProject({ cwd: process.cwd() })
+export async function configureDirect(config: EleventyConfig, cwd = process.cwd()): Promise<EleventyInput> {
+  const project = findProject({ cwd })
   if (project === null) throw new Error('no folder `budgets` here or above; start it inside a project')
   const input: SiteInput = {
     project: { root: project.root, ...project.site, date: null },
