@@ -15,7 +15,9 @@ import { textOf } from './amount.js'
 import type { DensityReader } from './density.js'
 import type { Directory } from './directory.js'
 import type { Issues } from './issues.js'
+import { idFault } from './names.js'
 import { suggestion } from './nearest.js'
+import { quoted } from './quoted.js'
 import { isSpread } from './schema.js'
 import { child, type Tree } from './tree.js'
 import { useAs } from './use.js'
@@ -188,6 +190,8 @@ class Walk {
     for (const { key, keyPlace, value } of tree.entries.values()) {
       const below = `${path}.${key}`
       this.places.set(below, keyPlace)
+      const fault = idFault(key)
+      if (fault !== null) this.reader.issues.error('name', keyPlace, `${quoted(key)} ${fault}`)
       if (value.type !== 'map') continue
       read.set(
         key,

@@ -24,18 +24,6 @@ export function checkNames(root: Tree, issues: Issues): void {
   }
 }
 
-/** Ports and loss channels have names too. */
-export function checkPortNames(components: Tree | undefined, issues: Issues): void {
-  if (components?.type !== 'map') return
-  for (const { value } of components.entries.values()) {
-    for (const field of ['ports', 'losses']) {
-      const tree = child(value, field)
-      if (tree?.type !== 'map') continue
-      for (const { key, keyPlace } of tree.entries.values()) report(key, idFault(key), { place: keyPlace, issues })
-    }
-  }
-}
-
 function report(key: string, fault: string | null, at: { readonly place: Place; readonly issues: Issues }): void {
   if (fault !== null) at.issues.error('name', at.place, `${quoted(key)} ${fault}`)
 }

@@ -11,7 +11,7 @@ import { checkKinds } from './kind-checks.js'
 import { readLines } from './lines.js'
 import { checkMovedMass, readMeasurand } from './measurand.js'
 import { revisionPattern } from './names.js'
-import { checkNames, checkPortNames } from './namespace.js'
+import { checkNames } from './namespace.js'
 import { impliedNoises } from './noises.js'
 import { quoted } from './quoted.js'
 import { warnRequirements } from './requirements.js'
@@ -32,7 +32,6 @@ export interface Origin {
 export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | null {
   if (root.type !== 'map') return null
   checkNames(root, issues)
-  checkPortNames(child(root, 'components'), issues)
   const band = readBand(child(root, 'band'), issues)
   const directory = new Directory(child(root, 'components'))
   const reader = readerFor(root, { origin, band, directory }, issues)
