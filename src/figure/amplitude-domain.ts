@@ -15,6 +15,9 @@ const COLUMNS = 200
 /** Of these columns a limit may leave the frame through the bottom in this part, a contribution in half. */
 const LIMIT_PART = 0.02
 const LINE_PART = 0.5
+/** A peak of the total that is narrower than this part of the axis is cut this far above the rest, or it would press the rest flat. */
+const PEAK_PART = 0.02
+const PEAK_ABOVE = 100
 
 /** What a figure shows along its horizontal axis. */
 export interface Shown {
@@ -32,11 +35,12 @@ export function amplitudeDomain(input: FigureInput, shown: Shown): [number, numb
   if (total === null) return [0.1, 10]
   const columns = columnIndices(shown)
   const lows = [
-    ...input.limits.filter(limit => limit.prominent).map(limit => low(limit.psd, columns, LIMIT_PART)),
-    ...input.lines.map(line => low(line.psd, columns, LINE_PART)),
+    ...input.limits.filter(limit => limit.prominent).map(limit => quantile(limit.psd, columns, LIMIT_PART)),
+    ...input.lines.map(line => quantile(line.psd, columns, LINE_PART)),
   ]
   const least = Math.max(Math.min(total[0], ...lows), total[0] / BELOW_TOTAL)
-  const most = Math.min(total[1], least * LONGEST)
+  const crest = quantile(input.total, columns, 1 - PEAK_PART) * PEAK_ABOVE
+  const most = Math.min(total[1], crest, least * LONGEST)
   const pad = Math.max(PAD_FACTOR, (most / least) ** PAD_DECADES)
   // A name may stand above the total.
   return widened(least / pad, most * pad * pad)
@@ -68,7 +72,7 @@ function columnIndices({ x, kind, domain: [low, high] }: Shown): number[] {
 }
 
 /** Amplitude below which a curve is in a part of the columns; infinite for a curve that is nowhere drawn. */
-function low(psd: Float64Array, columns: readonly number[], part: number): number {
+function quantile(psd: Float64Array, columns: readonly number[], part: number): number {
   const drawn = columns.map(k => Math.sqrt(Math.abs(psd[k]))).filter(v => v > 0 && Number.isFinite(v))
   return (
     quantileSorted(
