@@ -17,7 +17,7 @@ export function curvesCsv({ evaluation, unit }: Assessment): string {
   const powerUnit = powerUnitOf(unit)
   const amplitude = (name: string, psd: Float64Array): Column => ({
     title: `${name} (${unit})`,
-    cell: index => numberCell(Math.sqrt(psd[index])),
+    cell: index => numberCell(amplitudeOf(psd[index], total[index])),
   })
   const columns: readonly Column[] = [
     ...pointColumns(points),
@@ -34,6 +34,13 @@ export function curvesCsv({ evaluation, unit }: Assessment): string {
   const rows = [columns.map(column => textCell(column.title)).join(',')]
   for (let i = 0; i < points.frequency.length; i++) rows.push(columns.map(column => column.cell(i)).join(','))
   return `${rows.join('\n')}\n`
+}
+
+/** Rounding can leave a source that vanishes a hair below zero; more than that is refused with its number. */
+function amplitudeOf(psd: number, total: number): number {
+  if (psd < 0 && psd > -1e-12 * total) return 0
+  if (psd < 0) throw new RangeError(`a curve holds the power density ${psd}, which has no root`)
+  return Math.sqrt(psd)
 }
 
 function pointColumns({ frequency, anchor, offset, anchors }: Points): readonly Column[] {

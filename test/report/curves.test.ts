@@ -48,6 +48,23 @@ describe('curves.csv', () => {
     expect(() => curvesCsv({ ...assessment, evaluation: { ...evaluation, total } })).toThrow('a curve holds NaN')
   })
 
+  it('takes a hair below zero for zero, and no more', () => {
+    const withLast = (psd: number) => {
+      const [first, ...others] = evaluation.lines
+      return curvesCsv({
+        ...assessment,
+        evaluation: { ...evaluation, lines: [{ ...first, psd: first.psd.map(() => psd) }, ...others] },
+      })
+    }
+    const total = Math.min(...evaluation.total)
+    expect(
+      withLast(-1e-14 * total)
+        .split('\n')[1]
+        .split(',')[5],
+    ).toBe('0')
+    expect(() => withLast(-1e-6 * total)).toThrow('which has no root')
+  })
+
   it('keeps a spreadsheet from running a text', () => {
     expect(['=1+1', '+1', '-1', '@x', '\tx'].map(textCell)).toEqual([`"'=1+1"`, `"'+1"`, `"'-1"`, `"'@x"`, `"'\tx"`])
     expect(textCell('a "b", c')).toBe('"a ""b"", c"')

@@ -118,6 +118,7 @@ describe('the site', () => {
   it('makes every sideways scroll box reachable and named', () => {
     const boxes = page('tern/draft/index.html').match(/<div class="scroll[^>]*>/g) ?? []
     expect(boxes.length).toBeGreaterThan(8)
+    expect(new Set(boxes).size).toBe(boxes.length)
     for (const box of boxes) expect(box).toMatch(/role="region" aria-label="[^"]+" tabindex="0"/)
   })
 
@@ -126,6 +127,14 @@ describe('the site', () => {
     const used = new Set([...pages.values()].flatMap(html => html.match(/\bt[0-9a-f]{8}\b/g) ?? []))
     expect(used.size).toBeGreaterThan(10)
     for (const name of used) expect(sheet).toContain(`.${name}.${name}.${name}.${name}{`)
+  })
+})
+
+describe('a project without budgets', () => {
+  it('has a front page that says what a budget is', async () => {
+    const empty = await renderSite({ ...input, results: [] })
+    expect(text(String(empty.files.get('index.html')))).toContain('There is no budget yet.')
+    expect([...empty.files.keys()].filter(path => path.endsWith('/draft/index.html'))).toEqual([])
   })
 })
 
