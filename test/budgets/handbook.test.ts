@@ -79,7 +79,7 @@ describe('dunlin, a membrane over a microwave circuit', () => {
   const kappa = turn * 149e3
   const g = turn * 1.42 * Math.sqrt(1.7e5)
   const bath = 1 / Math.expm1((hbar * omega) / (k * 24e-3))
-  const circuit = (6 * (0.02 + 2) + 121 * 0.012 + 22 * (0.04 + 0.8)) / 149
+  const circuit = (6 * (0.02 + 1.3) + 121 * 0.012 + 22 * (0.04 + 0.52)) / 149
 
   it('is cooled as published, n_f of a resolved red sideband [Dobrindt et al. 2008; Teufel et al. 2011]', () => {
     const [drum] = demo('dunlin').modes
@@ -91,10 +91,10 @@ describe('dunlin, a membrane over a microwave circuit', () => {
       (kappa ** 2 + 8 * g ** 2) / (16 * (omega ** 2 - 4 * g ** 2))
     expectNear(drum?.finalOccupancy, cooled, 0.003)
     expectNear(drum?.cooperativity, (4 * g ** 2) / (kappa * gamma), 1e-6)
-    // Just below one quantum, and a quarter of it is that of the circuit.
-    expect(drum?.finalOccupancy).toBeGreaterThan(0.9)
-    expect(drum?.finalOccupancy).toBeLessThan(1)
-    expect(circuit / (drum?.finalOccupancy ?? NaN)).toBeCloseTo(1 / 4, 1)
+    // Somewhat less than one quantum, and a sixth of it is that of the circuit.
+    expect(drum?.finalOccupancy).toBeGreaterThan(0.8)
+    expect(drum?.finalOccupancy).toBeLessThan(0.95)
+    expectNear(circuit / (drum?.finalOccupancy ?? NaN), 1 / 6, 0.1)
   })
 
   it('has the bath of its drum, 4ħω(n + ½)mΓ [Callen, Welton 1951]', () => {
@@ -128,7 +128,8 @@ describe('dunlin, a membrane over a microwave circuit', () => {
       'added',
       'added',
     ])
-    expectNear(asdOf('dunlin', 'heating', 1.4862e6), asdOf('dunlin', 'vacuum', 1.4862e6), 0.2)
+    const heating = asdOf('dunlin', 'heating', 1.4862e6) ** 2
+    expectNear(heating / asdOf('dunlin', 'vacuum', 1.4862e6) ** 2, 2 / 3, 0.1)
   })
 })
 
