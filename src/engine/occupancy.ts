@@ -8,7 +8,7 @@ import { energyDecay, type Pole } from './poles.js'
 import type { Anchor } from '../model/points.js'
 
 /**
- * A viscous bath as the white force that it is next to the resonance, 4ħΩ(n(Ω,T)+½)mΓ. Taken literally, the zero point of a viscous
+ * A viscous bath as the white force that it is next to the resonance of its own mode, 4ħΩ(n(Ω,T)+½)mΓ. Taken literally, the zero point of a viscous
  * bath grows with frequency and ⟨p²⟩ diverges; the occupancy of a mode means this white bath.
  */
 function whitened(shape: Shape, mode: Mode): Shape {
@@ -22,9 +22,10 @@ function whitened(shape: Shape, mode: Mode): Shape {
 /** The network whose record is the motion of one mode itself, shaken by everything that enters its equations. */
 function motionOf(network: Network, mode: Mode): Network {
   const still = (node: Injection): Injection => ({ rows: node.rows, direct: complex(0) })
+  const ownerOf = (source: Source): Mode => network.modes.find(m => m.id === source.owner) ?? mode
   const sources: Source[] = network.sources
     .filter(source => source.nodes.some(node => node.rows.length > 0))
-    .map(source => ({ ...source, nodes: source.nodes.map(still), shape: whitened(source.shape, mode) }))
+    .map(source => ({ ...source, nodes: source.nodes.map(still), shape: whitened(source.shape, ownerOf(source)) }))
   const one = complex(1)
   return {
     ...network,
