@@ -26,18 +26,28 @@ afterAll(async () => {
   site?.remove()
 })
 
-const open = async (page: string, window: Window, where = context) =>
-  await visit(where, join(site.folder, page), window)
+const open = async (page: string, window: Window) => await visit(context, join(site.folder, page), window)
 
-/** Opens every page in turn and keeps what `look` finds wrong, under the page's name. */
-async function overAllPages(look: (page: string) => Promise<unknown>): Promise<Record<string, unknown>> {
-  const found: Record<string, unknown> = {}
-  expect(site.pages.length).toBeGreaterThanOrEqual(site.sensors.length + 1)
-  for (const page of site.pages) found[page] = await look(page)
-  return found
+interface Look {
+  readonly complaints: readonly string[]
+  readonly outgoing: readonly string[]
+  readonly missing: readonly string[]
+  /** Pixels by which the page is wider than the window. */
+  readonly overflow: number
+  /** Links to files or places that do not exist. */
+  readonly dead: readonly string[]
 }
 
-const everywhere = (value: unknown) => Object.fromEntries(site.pages.map(page => [page, value]))
+async function look(name: string, window: Window): Promise<Look> {
+  const { page, complaints, outgoing, missing } = await open(name, window)
+  const links = await page.$$eval('a[href]', all => all.map(link => (link as HTMLAnchorElement).href))
+  const anchors = await page.$$eval('[id]', all => all.map(one => one.id))
+  const here = page.url()
+  const wider = await overflow(page)
+  await page.close()
+  const dead = links.filter(link => link.startsWith('file:') && leadsNowhere(link, here, anchors))
+  return { complaints, outgoing, missing, overflow: wider, dead }
+}
 
 describe('the demo site, opened from its folder', () => {
   it('has a front page and a report of every budget', () => {
@@ -47,39 +57,18 @@ describe('the demo site, opened from its folder', () => {
   })
 
   it.each([
-    ['wide', desk],
-    ['dark', dark],
-    ['narrow', phone],
-  ])('opens every page without a complaint, a request or a missing file: %s', async (_name, window) => {
-    const seen = await overAllPages(async name => {
-      const { page, complaints, outgoing, missing } = await open(name, window)
-      await page.close()
-      return { complaints, outgoing, missing }
-    })
-    expect(seen).toEqual(everywhere({ complaints: [], outgoing: [], missing: [] }))
-  })
-
-  it('never scrolls sideways on a telephone', async () => {
-    const seen = await overAllPages(async name => {
-      const { page } = await open(name, phone)
-      const pixels = await overflow(page)
-      await page.close()
-      return pixels
-    })
-    expect(seen).toEqual(everywhere(0))
-  })
-
-  it('leads only to files and places that exist', async () => {
-    const seen = await overAllPages(async name => {
-      const { page } = await open(name, desk)
-      const targets = await page.$$eval('a[href]', all => all.map(link => (link as HTMLAnchorElement).href))
-      const anchors = await page.$$eval('[id]', all => all.map(one => one.id))
-      const here = page.url()
-      await page.close()
-      return targets.filter(target => target.startsWith('file:') && leadsNowhere(target, here, anchors))
-    })
-    expect(seen).toEqual(everywhere([]))
-  })
+    ['on a desk', desk],
+    ['in the dark', dark],
+    ['on a telephone', phone],
+  ])(
+    'opens every page %s: no complaint, request, missing file, dead link or sideways scroll',
+    async (_name, window) => {
+      const seen: Record<string, Look> = {}
+      for (const page of site.pages) seen[page] = await look(page, window)
+      const clean: Look = { complaints: [], outgoing: [], missing: [], overflow: 0, dead: [] }
+      expect(seen).toEqual(Object.fromEntries(site.pages.map(page => [page, clean])))
+    },
+  )
 
   it.each([
     ['wide', desk, 600],
@@ -87,12 +76,11 @@ describe('the demo site, opened from its folder', () => {
   ])('shows the figure of every report: %s', async (_name, window, width) => {
     for (const sensor of site.sensors) {
       const { page } = await open(`${sensor}/draft/index.html`, window)
-      const [largest] = [...(await figures(page))].sort((a, b) => b.width * b.height - a.width * a.height)
-      expect(largest.width, sensor).toBeGreaterThan(width)
-      expect(largest.height, sensor).toBeGreaterThan(150)
-      // The total, a limit and at least two contributions.
-      expect(largest.curves, sensor).toBeGreaterThanOrEqual(4)
-      expect(largest.labels, sensor).toBeGreaterThanOrEqual(6)
+      // The first picture is the answer; it stands above all others.
+      const [figure] = (await figures(page)).filter(one => one.width > width && one.height > 150)
+      // The total, a limit and at least two contributions, with their names and the axes' numbers.
+      expect(figure?.curves, sensor).toBeGreaterThanOrEqual(4)
+      expect(figure?.labels, sensor).toBeGreaterThanOrEqual(10)
       await page.close()
     }
   })

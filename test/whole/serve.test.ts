@@ -5,7 +5,7 @@ import { expect, it, onTestFinished, vi } from 'vitest'
 import { good, misspelt } from './budgets.js'
 import { throwaway } from './folder.js'
 
-const patience = { timeout: 20_000, interval: 50 }
+const patience = { timeout: 60_000, interval: 50 }
 
 it('shows the site, follows changes, survives a bad one and ends when it is told to', async () => {
   const folder = throwaway({ 'budgets/tern/budget.yaml': good })
@@ -28,10 +28,10 @@ it('shows the site, follows changes, survives a bad one and ends when it is told
   expect(err).toBe('')
 
   write(misspelt)
-  await vi.waitFor(() => expect(err).toMatch(/^budgets\/tern\/budget\.yaml:\d+:\d+: .*qualtiy/), patience)
+  await vi.waitFor(() => expect(err).toMatch(/^budgets\/tern\/budget\.yaml:\d+:\d+: .*qualtiy/m), patience)
 
   write(good)
   await vi.waitFor(async () => expect(await report()).toContain('Membrane on a bench'), patience)
   child.kill('SIGINT')
   expect(await ended).toBe(0)
-})
+}, 240_000)

@@ -26,8 +26,7 @@ export async function publishProject(project: Project, names: readonly string[],
     results: outcomes.map(resultOf),
     outputDir: outputOf(project),
   })
-  const front = relative(io.cwd, join(outputDir, 'index.html')).replaceAll('\\', '/')
-  io.out(`${pages} pages; the front page is ${front}\n`)
+  io.out(`${pages} pages; the front page is ${fromHere(join(outputDir, 'index.html'), io)}\n`)
   return worst([reportProblems(project.problems, io), reportOutcomes(outcomes, io)])
 }
 
@@ -38,4 +37,10 @@ function resultOf({ target, assessment, failure, problems }: Outcome): SensorRes
   const place = { file: target.file, line: 1, column: 1 }
   const faults = failure.lines.map(message => ({ severity: 'error', code: 'fault', place, message }) as const)
   return { sensor, assessment, problems: [...problems, ...faults] }
+}
+
+/** As a person would type it: relative where it lies below the working directory. */
+function fromHere(path: string, io: Io): string {
+  const name = relative(io.cwd, path)
+  return name.startsWith('..') ? path : name.replaceAll('\\', '/')
 }

@@ -1,4 +1,4 @@
-import { opening } from '../../report/headlines.js'
+import { terminalHeading } from '../../report/terminal.js'
 import { exitCodes, worst, type ExitCode, type Io } from '../io.js'
 import { assessAll, reportOutcomes, reportProblems, type Outcome } from '../outcome.js'
 import { projectAround, projectOf } from '../project.js'
@@ -38,7 +38,9 @@ function print(outcomes: readonly Outcome[], options: CheckOptions, io: Io): voi
 }
 
 function sentence({ target, assessment }: Outcome): string {
-  return assessment === null ? '' : `${target.name}: ${opening(assessment).sentence}\n`
+  if (assessment === null) return ''
+  const [, best] = terminalHeading(assessment)
+  return `${target.name}: ${best}\n`
 }
 
 /** For machines: what a line says, with every number in SI units. */
