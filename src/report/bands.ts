@@ -1,6 +1,6 @@
 import type { Assessment } from '../model/assessment.js'
 import type { Family } from '../model/evaluation.js'
-import { percentText, rangeText } from './numbers.js'
+import { percentText, rangeDigits, rangeText } from './numbers.js'
 import { lineFamily, lineTitle } from './titles.js'
 
 /** A stretch of the band and the line that is largest in it. */
@@ -14,11 +14,14 @@ export interface BandRow {
 
 /** What limits the sensor in which part of its band. */
 export function bandRows(assessment: Assessment): readonly BandRow[] {
-  return assessment.headlines.dominance.map(({ line, from, to, least, greatest }) => ({
+  const { dominance } = assessment.headlines
+  // One number of digits for the whole table, so that neighbours state their common end alike.
+  const digits = Math.max(...dominance.map(({ from, to }) => rangeDigits(from, to)))
+  return dominance.map(({ line, from, to, least, greatest }) => ({
     line,
     title: lineTitle(assessment, line),
     family: lineFamily(assessment, line),
-    range: rangeText(from, to),
+    range: rangeText(from, to, digits),
     share: shareRange(percentText(least), percentText(greatest)),
   }))
 }

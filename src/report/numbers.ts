@@ -60,9 +60,14 @@ export function percentText(share: number): string {
   return `${share < 0 ? '−' : ''}${text}${space}%`
 }
 
+/** Digits that tell two frequencies apart to a hundredth or so of their distance. */
+export function rangeDigits(from: number, to: number): number {
+  return frequencyDigits(to, to - from)
+}
+
 /** `1.2000 to 1.2413 MHz`, in one unit and with equal decimals where both ends share the unit. */
-export function rangeText(from: number, to: number): string {
-  const [low, high] = distinct(from, to)
+export function rangeText(from: number, to: number, digits = rangeDigits(from, to)): string {
+  const [low, high] = [frequencyText(from, digits), frequencyText(to, digits)]
   const [lowNumber, lowUnit] = low.split(space)
   const [highNumber, highUnit] = high.split(space)
   const between = `${space}to${space}`
@@ -78,14 +83,4 @@ function decimalsOf(number: string): number {
 function padded(number: string, decimals: number): string {
   const missing = decimals - decimalsOf(number)
   return missing === 0 ? number : `${number}${number.includes('.') ? '' : '.'}${'0'.repeat(missing)}`
-}
-
-/** Two frequencies with as many digits as it takes to tell them apart and one more, five at least. */
-function distinct(from: number, to: number): readonly [string, string] {
-  for (let digits = 5; digits < 15; digits++) {
-    if (frequencyText(from, digits) === frequencyText(to, digits) && from !== to) continue
-    const kept = digits === 5 ? 5 : digits + 1
-    return [frequencyText(from, kept), frequencyText(to, kept)]
-  }
-  return [frequencyText(from, 15), frequencyText(to, 15)]
 }

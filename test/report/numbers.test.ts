@@ -38,9 +38,10 @@ describe('texts of numbers', () => {
 
   it.each([
     [1.2e6, 1.3e6, '1.2 to 1.3 MHz'],
-    [1.2e6, 1.24131e6, '1.2000 to 1.2413 MHz'],
+    [1.2e6, 1.24131e6, '1.200 to 1.241 MHz'],
     [900e3, 1.1e6, '900 kHz to 1.1 MHz'],
     [1e6, 1e6 + 0.25, '1.00000000 to 1.00000025 MHz'],
+    [1, 28.087, '1.0 to 28.1 Hz'],
   ])('range %s to %s is %s', (from, to, text) => expect(plain(rangeText(from, to))).toBe(text))
 
   it.each([
