@@ -82,7 +82,7 @@ export class DensityReader {
       )
     const power = this.values.read(exponent?.value, useAs('number'), { path: `${base}.exponent`, range: 'any' })
     const at = this.values.read(reference?.value, useAs('frequency'), { path: `${base}.reference`, range: 'positive' })
-    if (spec === null || spec.density === 'table') return spec
+    if (spec === null || spec.density !== 'level') return spec
     return { ...spec, exponent: power?.slot ?? white, reference: at?.slot ?? null }
   }
 }

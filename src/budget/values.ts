@@ -91,6 +91,8 @@ export class Values {
 
   valueOf(slot: Slot): number {
     if ('constant' in slot) return slot.constant
+    if ('formula' in slot)
+      return slot.formula.value(Float64Array.from(this.roots, root => root.value)) * (slot.scale ?? 1)
     return (this.roots[slot.root]?.value ?? NaN) * (slot.scale ?? 1)
   }
 
@@ -145,6 +147,8 @@ export class Values {
       id,
       value,
       uncertainty,
+      distribution: 'normal',
+      effect: 'statistical',
       dimension,
       text: scalar.text,
       about,

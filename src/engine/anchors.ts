@@ -29,12 +29,33 @@ export function modeAnchors(network: Network, poles: readonly Pole[], band: Band
     const width = widthOf(Math.abs(energyDecay(pole)) / (4 * Math.PI), frequency)
     const moved = Math.abs(frequency - mode.frequency) > 0.1 * Math.min(halfWidth, width)
     if (frequency > 0 && (moved || Math.abs(Math.log(width / halfWidth)) > 0.1)) {
-      list.push({ id: `${mode.id} with light`, nature: 'pole', frequency, halfWidth: width })
+      list.push({ id: withLight(mode.id), nature: 'pole', frequency, halfWidth: width })
     }
     return list
   })
   return ascending(anchors.filter(anchor => inside(anchor, band)))
 }
+
+/**
+ * The same anchors in a network whose parameters have changed a little: a mode is where its parameter says, a pole and a zero are found
+ * again. One that cannot be found stays where it was.
+ */
+export function followAnchors(anchors: readonly Anchor[], network: Network, poles: readonly Pole[]): Anchor[] {
+  const ofModes = polesOfModes(network, poles)
+  return anchors.map(anchor => {
+    if (anchor.nature === 'zero') {
+      const zero = zeroNear(network, anchor.frequency, Math.max(anchor.halfWidth, 1e-9 * anchor.frequency))
+      return { ...anchor, frequency: zero?.frequency ?? anchor.frequency }
+    }
+    const mode = network.modes.find(m => anchor.id === m.id || anchor.id === withLight(m.id))
+    if (mode === undefined) return anchor
+    if (anchor.nature === 'mode') return { ...anchor, frequency: mode.frequency }
+    const pole = ofModes.get(mode.id)
+    return pole === undefined ? anchor : { ...anchor, frequency: pole.omega.re / (2 * Math.PI) }
+  })
+}
+
+const withLight = (mode: string): string => `${mode} with light`
 
 /** Sorted, one for each frequency; where two fall on the same number the narrower stays. */
 export function ascending(anchors: readonly Anchor[]): Anchor[] {

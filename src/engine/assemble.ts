@@ -14,7 +14,7 @@ import type {
 } from '../model/network.js'
 import { EngineFault, Refusal, type Place, type Problem } from '../model/problem.js'
 import { add, complex } from '../physics/complex.js'
-import { Binder, rootValues, type RootValues } from './bind.js'
+import { Binder, rootValues } from './bind.js'
 
 const stages: readonly Stage[] = ['mechanical', 'field', 'chain', 'detector', 'noise']
 
@@ -156,7 +156,7 @@ function measurandInjection(budget: Budget, builder: Builder, sensing: Sensing):
  * Budget → network at given values of its roots. Throws `Refusal` where a kernel refuses its values (no carrier at the
  * detector, losses that do not add up).
  */
-export function assemble(budget: Budget, roots: RootValues = rootValues(budget)): Network {
+export function assemble(budget: Budget, roots: Float64Array = rootValues(budget)): Network {
   const builder = new Builder(budget.readout)
   const all = parts(budget, new Binder(budget, roots))
   for (const stage of stages) {

@@ -1,14 +1,13 @@
 import type { Budget, DensitySpec, Parameters, Slot } from '../model/budget.js'
 import type { Shape } from '../model/network.js'
 
-/** Values of the roots in use: those of the file, or changed ones of a sweep; in the order of `budget.roots`. */
-export type RootValues = ArrayLike<number>
-
+/** Values of the roots as the file states them, in the order of `budget.roots`; a sweep changes a copy. */
 export const rootValues = (budget: Budget): Float64Array => Float64Array.from(budget.roots, root => root.value)
 
 type Given = Parameters[string]
 
-const isSlot = (given: object): given is Slot => 'root' in given || 'constant' in given
+const isSlot = (given: object): given is Slot =>
+  'root' in given || 'constant' in given || ('formula' in given && !('density' in given))
 
 const isDensity = (given: object): given is DensitySpec => 'density' in given && typeof given.density === 'string'
 
@@ -16,11 +15,12 @@ const isDensity = (given: object): given is DensitySpec => 'density' in given &&
 export class Binder {
   constructor(
     readonly budget: Budget,
-    readonly roots: RootValues,
+    readonly roots: Float64Array,
   ) {}
 
   number(slot: Slot): number {
     if ('constant' in slot) return slot.constant
+    if ('formula' in slot) return slot.formula.value(this.roots) * (slot.scale ?? 1)
     return this.roots[slot.root] * (slot.scale ?? 1)
   }
 
@@ -38,6 +38,9 @@ export class Binder {
   }
 
   #shape(density: DensitySpec): Shape {
+    if (density.density === 'formula') {
+      return { form: 'formula', power: density.power, formula: density.formula, roots: this.roots }
+    }
     if (density.density === 'table') return { form: 'table', value: 1, table: this.budget.tables[density.table] }
     const level = this.number(density.level)
     const value = density.power ? level : level * level

@@ -1,5 +1,8 @@
 import type { Table } from '../model/budget.js'
+import type { Shape } from '../model/network.js'
 import type { Points } from '../model/points.js'
+
+type FormulaShape = Extract<Shape, { form: 'formula' }>
 
 /** What depends on the points alone, computed once for each set of points. */
 export class GridArrays {
@@ -38,6 +41,13 @@ export class GridArrays {
       this.#powers.set(exponent, power)
     }
     return power
+  }
+
+  /** A formula at the roots' values, as a power density. */
+  formula({ formula, power, roots }: FormulaShape): Float64Array {
+    const values = new Float64Array(this.length)
+    formula.over(roots, this.frequency, values)
+    return power ? values : values.map(value => value * value)
   }
 
   /** A table, interpolated straight in log–log; constant beyond its ends, which the reader of budgets keeps outside the band. */

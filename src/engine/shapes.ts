@@ -1,5 +1,6 @@
 import type { Shape } from '../model/network.js'
 import { boltzmannConstant, reducedPlanckConstant } from '../physics/constants.js'
+import type { GridArrays } from './grid-arrays.js'
 import { loops, memory } from './loops.js'
 import { constantReal, gridReal, scaleReal, type Real } from './real.js'
 import { inputs, type Block, type Tape } from './tape.js'
@@ -34,7 +35,15 @@ export function shapeReal(tape: Tape, shape: Shape): Real {
       return gridReal(value / reference ** exponent, `power ${exponent}`, grid => grid.power(exponent))
     }
     case 'table':
-      return gridReal(shape.value, `table ${tableNumber(shape.table)}`, grid => grid.table(shape.table))
+      return gridReal(shape.value, `table ${numberOf(shape.table)}`, grid => grid.table(shape.table))
+    case 'formula': {
+      // One array a run: blocks of the same points share it.
+      let last: { grid: GridArrays; values: Float64Array } | null = null
+      return gridReal(1, `formula ${numberOf(shape)}`, grid => {
+        if (last?.grid !== grid) last = { grid, values: grid.formula(shape) }
+        return last.values
+      })
+    }
     case 'viscous bath':
       return scaleReal(bath(tape, shape.temperature), shape.strength)
     case 'structural bath': {
@@ -50,8 +59,8 @@ const bath = (tape: Tape, temperature: number): Real =>
 const numbers = new WeakMap<object, number>()
 let count = 0
 
-/** A number that stands for a table in the keys of a tape. */
-function tableNumber(table: object): number {
+/** A number that stands for a table or a formula in the keys of a tape. */
+function numberOf(table: object): number {
   let number = numbers.get(table)
   if (number === undefined) {
     number = count++

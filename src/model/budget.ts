@@ -8,6 +8,10 @@ export interface Root {
   readonly value: number
   /** Standard uncertainty in the same unit; 0 where none is stated. */
   readonly uncertainty: number
+  /** What the uncertainty is the standard deviation of [JCGM 101:2008, 6.4]. */
+  readonly distribution: Distribution
+  /** Whether repeating the measurement would average it down. */
+  readonly effect: 'statistical' | 'systematic'
   /** Name of the declared dimension it is used as: `mass`, `rate`, `frequency` … */
   readonly dimension: string
   /** The quantity as it stands in the file: `3.1(2) ng`. */
@@ -20,11 +24,79 @@ export interface Root {
   readonly place: Place
 }
 
+export type Distribution = 'normal' | 'rectangular' | 'triangular' | 'lognormal'
+
+/** A parameter that the file derives from others; it has no uncertainty of its own. */
+export interface Derived {
+  readonly id: string
+  /** As it stands in the file: `= sqrt(k/m)/(2*pi)`. */
+  readonly text: string
+  readonly dimension: string
+  readonly formula: Formula
+  readonly about: string | null
+  readonly evidence: string | null
+  readonly place: Place
+}
+
+/** A compiled expression of roots (and of f, where it is a density); values in, a value out, in canonical units. */
+export interface Formula {
+  /** Indices of the roots that it is given, in the order in which it takes them. */
+  readonly roots: readonly number[]
+  /** Its value; NaN is never returned: throws `Refusal` at the expression's place. */
+  value(roots: Float64Array): number
+  /** Its values at frequencies in Hz, into `out`; throws `Refusal` naming the first frequency where it is not finite. */
+  over(roots: Float64Array, frequency: Float64Array, out: Float64Array): void
+}
+
+/** Two roots that share a cause. */
+export interface Correlation {
+  readonly roots: readonly [number, number]
+  readonly coefficient: number
+  readonly place: Place
+}
+
+/** A bound that the budget must meet. */
+export interface Requirement {
+  readonly id: string
+  /** `total`, the id of a line, `margin.<limit>` (of the total, in dB), `occupancy.<mode>`. */
+  readonly of: string
+  /** In Hz; a band means its worst frequency. */
+  readonly where: { readonly at: number } | { readonly from: number; readonly to: number } | null
+  readonly bound: 'below' | 'above'
+  /** Amplitude density of the measurand in SI, dB, or quanta. */
+  readonly value: number
+  /** As it stands in the file. */
+  readonly text: string
+  readonly about: string | null
+  readonly place: Place
+}
+
+/** A named set of overrides inside a budget, resolved to a budget of its own. */
+export interface Variant {
+  readonly id: string
+  readonly title: string
+  readonly about: string | null
+  readonly budget: Budget
+  readonly place: Place
+}
+
+/** One entry of a BibTeX file that the budget cites, as it is printed. */
+export interface Citation {
+  readonly key: string
+  /** Plain text in the house style. */
+  readonly text: string
+  /** DOI or address, or null. */
+  readonly link: string | null
+}
+
 /**
  * A number that a kernel will be given: an index into the roots, or a default that a declaration states. `scale` multiplies
  * the root where one parameter is used both as a frequency (cycles) and as a rate (angular).
  */
-export type Slot = { readonly root: number; readonly scale?: number } | { readonly constant: number }
+export type Slot =
+  | { readonly root: number; readonly scale?: number }
+  | { readonly formula: Formula; readonly scale?: number }
+  | { readonly constant: number }
 
 /**
  * What a component or a contribution of its own was given, in the shape of its declaration's fields:
@@ -46,6 +118,7 @@ export type DensitySpec =
       readonly reference: Slot | null
     }
   | { readonly density: 'table'; readonly table: number }
+  | { readonly density: 'formula'; readonly power: boolean; readonly formula: Formula }
 
 /** Numbers from a file, already in canonical SI units, ascending in the first column. */
 export interface Table {
@@ -114,6 +187,11 @@ export interface Budget {
   /** In Hz, or null: then headlines are given at the best frequency only. */
   readonly reference: number | null
   readonly roots: readonly Root[]
+  readonly derived: readonly Derived[]
+  readonly correlations: readonly Correlation[]
+  readonly requirements: readonly Requirement[]
+  readonly variants: readonly Variant[]
+  readonly citations: readonly Citation[]
   readonly tables: readonly Table[]
   /** In the order of the file. */
   readonly components: readonly ComponentSpec[]

@@ -1,4 +1,4 @@
-import type { Table } from './budget.js'
+import type { Formula, Table } from './budget.js'
 import type { Family } from './evaluation.js'
 import type { Place } from './problem.js'
 
@@ -26,12 +26,13 @@ export type Entry =
 
 /**
  * The frequency dependence of a density, one-sided. constant: value; power: value·(f/reference)^exponent;
- * table: log–log between rows; viscous bath: 4ħω(n+½)·strength with strength = mΓ; structural bath: 4ħ(n+½)·strength with strength = mΩ²φ.
+ * table: log–log between rows; formula: a stated expression of f, squared where it is an amplitude; viscous bath: 4ħω(n+½)·strength with strength = mΓ; structural bath: 4ħ(n+½)·strength with strength = mΩ²φ.
  */
 export type Shape =
   | { readonly form: 'constant'; readonly value: number }
   | { readonly form: 'power'; readonly value: number; readonly exponent: number; readonly reference: number }
   | { readonly form: 'table'; readonly value: number; readonly table: Table }
+  | { readonly form: 'formula'; readonly power: boolean; readonly formula: Formula; readonly roots: Float64Array }
   | { readonly form: 'viscous bath'; readonly strength: number; readonly temperature: number }
   | { readonly form: 'structural bath'; readonly strength: number; readonly temperature: number }
 

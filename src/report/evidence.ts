@@ -3,7 +3,7 @@ import type { Root } from '../model/budget.js'
 import { claimedSources } from './contributions.js'
 import { tableFrequencyText } from './headlines.js'
 import { percentText } from './numbers.js'
-import { givenNumbers, slotRoot } from './slots.js'
+import { givenNumbers, slotRoots } from './slots.js'
 
 /** On what a budget rests. */
 export interface Evidence {
@@ -63,5 +63,5 @@ export function rootsOf(owner: string, budget: Assessment['budget']): readonly R
     budget.components.find(component => component.id === owner)?.parameters ??
     budget.lines.flatMap(line => (line.id === owner && 'kind' in line.claims ? [line.claims.parameters] : []))[0]
   if (parameters === undefined) return []
-  return givenNumbers(parameters).flatMap(({ slot }) => slotRoot(budget, slot) ?? [])
+  return givenNumbers(parameters).flatMap(({ slot }) => slotRoots(budget, slot))
 }

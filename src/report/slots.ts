@@ -1,4 +1,5 @@
 import type { Budget, DensitySpec, Parameters, Root, Slot } from '../model/budget.js'
+import { numberText } from './numbers.js'
 
 type Value = Parameters[string]
 
@@ -14,7 +15,9 @@ function isMap(value: Value): value is ReadonlyMap<string, Parameters | Slot> {
 
 function isSlot(value: Exclude<Value, string>): value is Slot {
   return (
-    ('root' in value && typeof value.root === 'number') || ('constant' in value && typeof value.constant === 'number')
+    ('root' in value && typeof value.root === 'number') ||
+    ('constant' in value && typeof value.constant === 'number') ||
+    ('formula' in value && !('density' in value))
   )
 }
 
@@ -31,13 +34,13 @@ export function givenNumbers(parameters: Parameters): readonly GivenNumber[] {
 function numbersOf(value: Value, path: readonly string[]): readonly GivenNumber[] {
   if (typeof value === 'string') return []
   if (isMap(value)) return [...value].flatMap(([name, inner]) => numbersOf(inner, [...path, name]))
-  if (isSlot(value)) return [{ path, slot: value }]
   if (isDensity(value)) return densityNumbers(value, path)
+  if (isSlot(value)) return [{ path, slot: value }]
   return Object.entries(value).flatMap(([field, inner]) => numbersOf(inner, [...path, field]))
 }
 
 function densityNumbers(spec: DensitySpec, path: readonly string[]): readonly GivenNumber[] {
-  if (spec.density === 'table') return []
+  if (spec.density !== 'level') return []
   const level = { path: [...path, 'level'], slot: spec.level }
   if (spec.reference === null) return [level]
   return [
@@ -49,12 +52,24 @@ function densityNumbers(spec: DensitySpec, path: readonly string[]): readonly Gi
 
 /** The number in a slot, in the canonical unit of the field. */
 export function slotValue(budget: Budget, slot: Slot): number {
-  return 'root' in slot ? budget.roots[slot.root].value * (slot.scale ?? 1) : slot.constant
+  if ('constant' in slot) return slot.constant
+  const scale = slot.scale ?? 1
+  if ('root' in slot) return budget.roots[slot.root].value * scale
+  return slot.formula.value(Float64Array.from(budget.roots, root => root.value)) * scale
 }
 
-/** The root in a slot; null for a default. */
-export function slotRoot(budget: Budget, slot: Slot): Root | null {
-  return 'root' in slot ? budget.roots[slot.root] : null
+/** Every root that a slot's number rests on: one, several below a formula, or none for a default. */
+export function slotRoots(budget: Budget, slot: Slot): readonly Root[] {
+  if ('constant' in slot) return []
+  return 'root' in slot ? [budget.roots[slot.root]] : slot.formula.roots.map(index => budget.roots[index])
+}
+
+/** What the file says in a slot and where a reader finds it; null for a default. */
+export function slotText(budget: Budget, slot: Slot): { readonly text: string; readonly root: string } | null {
+  if ('constant' in slot) return null
+  if ('root' in slot) return { text: budget.roots[slot.root].text, root: budget.roots[slot.root].id }
+  const derived = budget.derived.find(({ formula }) => formula === slot.formula)
+  return { text: derived?.text ?? numberText(slotValue(budget, slot)), root: '' }
 }
 
 /** The slot of a field by its path (`ports`, `front`, `rate`), or null where there is none. */

@@ -1,6 +1,6 @@
 import type { Declaration, Fields } from '../catalogue/declaration.js'
 import type { Budget, Parameters } from '../model/budget.js'
-import { givenNumbers, slotRoot } from './slots.js'
+import { givenNumbers, slotText } from './slots.js'
 import { numberText } from './numbers.js'
 
 /** A symbol of an equation with the value that this budget gives it. */
@@ -28,9 +28,9 @@ export function symbolRows({ declaration, parameters }: SymbolOwner, budget: Bud
   return givenNumbers(parameters).flatMap(({ path, slot }) => {
     const field = symbolField(path, declaration.fields, null)
     if (field === null) return []
-    const root = slotRoot(budget, slot)
-    const value = root?.text ?? field.fallback
-    return [{ tex: field.symbol, meaning: field.meaning, value, root: root?.id ?? '' }]
+    const said = slotText(budget, slot)
+    const value = said?.text ?? field.fallback
+    return [{ tex: field.symbol, meaning: field.meaning, value, root: said?.root ?? '' }]
   })
 }
 
