@@ -66,7 +66,11 @@ function ports(p: CavityCase['parameters']): Map<string, Parameters> {
 function detector(p: CavityCase['parameters'], reads: string): ReturnType<typeof component> {
   const efficiency = slot(p.efficiency)
   if (p.homodyne_angle_deg === null) {
-    return component('detector', 'sideband', { reads, side: p.readout.startsWith('upper') ? 'upper' : 'lower', efficiency })
+    return component('detector', 'sideband', {
+      reads,
+      side: p.readout.startsWith('upper') ? 'upper' : 'lower',
+      efficiency,
+    })
   }
   return component('detector', 'homodyne', { reads, angle: slot((p.homodyne_angle_deg * Math.PI) / 180), efficiency })
 }

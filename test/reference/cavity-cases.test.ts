@@ -1,8 +1,10 @@
 import { describe, expect, test } from 'vitest'
 import { assemble } from '../../src/engine/assemble.js'
+import { prepare } from '../../src/engine/assess.js'
 import { evaluateAt } from '../../src/engine/evaluate.js'
 import { makePoints } from '../../src/engine/points.js'
 import type { Evaluation, Parts, SourceCurve } from '../../src/model/evaluation.js'
+import { Refusal } from '../../src/model/problem.js'
 import { budgetOfCase, cavityCases, type CavityCase } from './cavity-case.js'
 
 /*
@@ -15,7 +17,10 @@ function evaluateCase(working: CavityCase): Evaluation {
   const budget = budgetOfCase(working)
   const frequency = working.parameters.frequency
   const anchors = [{ id: 'mode', nature: 'mode', frequency, halfWidth: frequency / working.parameters.Q / 2 } as const]
-  const points = makePoints(anchors, working.frequencies_hz.map(f => ({ anchor: 0, offset: f - frequency })))
+  const points = makePoints(
+    anchors,
+    working.frequencies_hz.map(f => ({ anchor: 0, offset: f - frequency })),
+  )
   return evaluateAt(budget, assemble(budget), points, { sources: true, limits: true })
 }
 
@@ -67,4 +72,17 @@ describe.each(stable)('$id', working => {
     const sql = evaluation.limits.find(limit => limit.id === 'sql')!
     expect(largestDifference(sql.psd, working.sql_force_psd)).toBeLessThan(1e-8)
   })
+})
+
+test('the unstable working point is refused at its pump, and no stable one is', () => {
+  const refusals = cavityCases.map(working => {
+    try {
+      prepare(budgetOfCase(working))
+      return []
+    } catch (error) {
+      return error instanceof Refusal ? error.problems.map(p => p.code) : [String(error)]
+    }
+  })
+  expect(refusals).toEqual(cavityCases.map(working => (working.stable ? [] : ['unstable'])))
+  expect(refusals.flat().length).toBe(1)
 })
