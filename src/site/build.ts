@@ -1,29 +1,8 @@
-import type { Assessment } from '../model/assessment.js'
-import type { Problem } from '../model/problem.js'
-import { renderSite } from './render.js'
+import type { SiteInput } from './input.js'
 import { publish } from './publish.js'
+import { renderSite } from './render.js'
 
-/** What the site says about itself; everything else comes from the budgets. */
-export interface SiteProject {
-  /** Folder that the budgets' paths are relative to. */
-  readonly root: string
-  readonly title: string
-  readonly subtitle?: string | null
-  /** ISO date (`2026-03-14`) of the commit that is built, or null outside git. */
-  readonly date: string | null
-}
-
-/** One sensor's draft: an assessment, or the problems that stopped it. */
-export interface SensorResult {
-  readonly sensor: string
-  readonly assessment: Assessment | null
-  readonly problems: readonly Problem[]
-}
-
-export interface SiteInput {
-  readonly project: SiteProject
-  readonly results: readonly SensorResult[]
-}
+export type { SensorResult, SiteInput, SiteProject } from './input.js'
 
 /**
  * Renders the whole site and publishes it to `outputDir`, whole or not at all.

@@ -3,7 +3,7 @@ import { formatProblem } from '../budget/format-problem.js'
 import { conventions, type Convention } from '../report/conventions.js'
 import { kindGroups, type KindGroup, type KindView } from '../report/kind-view.js'
 import { reportView, type ReportView } from '../report/view.js'
-import type { SensorResult, SiteInput } from './build.js'
+import type { SensorResult, SiteInput } from './input.js'
 import { reportPictures, type ReportPictures } from './pictures.js'
 
 /** A page's place: its path below the site, and the way back up to the site's folder. */

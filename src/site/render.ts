@@ -1,7 +1,7 @@
 import { join, relative } from 'node:path'
 import { createTypesetter, type Typesetter } from '../report/typeset.js'
 import { assetFiles } from './assets.js'
-import type { SiteInput } from './build.js'
+import type { SiteInput } from './input.js'
 import { configureEleventy, pagesFolder, type EleventyConfig, type EleventyInput } from './eleventy.js'
 import { packageFolder } from './package-folder.js'
 import { sitePages } from './pages.js'

@@ -1,7 +1,7 @@
 import { budgetSchema, formatVersion } from '../budget/schema.js'
 import { curvesCsv } from '../report/curves-csv.js'
 import { curvesJson } from '../report/curves-json.js'
-import type { SiteInput } from './build.js'
+import type { SiteInput } from './input.js'
 import { standaloneFigure } from './pictures.js'
 
 /** The files beside the pages: the schema; curves and figure of every report, at both of its addresses. */

@@ -1,6 +1,6 @@
 import { posix } from 'node:path'
 import { beforeAll, describe, expect, it } from 'vitest'
-import type { SiteInput } from '../../src/site/build.js'
+import type { SiteInput } from '../../src/site/input.js'
 import { renderSite, type SiteFiles } from '../../src/site/render.js'
 import { fixtureAssessment } from '../report/fixture.js'
 
