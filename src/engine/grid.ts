@@ -10,14 +10,20 @@ export const gridTolerance = 1e-3
 /** Curves below this share of the total power are only followed to the same fraction of this floor. */
 export const gridFloor = 1e-6
 
-/** An interval counts as straight when its middle is off by less than this part of the tolerance: the middle is not quite the worst place. */
-const safety = 0.7
+/** An interval counts as straight when its probes are off by less than this part of the tolerance: they are not quite the worst places. */
+const safety = 0.9
+
+/** Where an interval is probed: its middle first, and where a curve with an inflection, which meets its chord near the middle, is farthest. */
+const probed = [0.5, 0.21, 0.79] as const
 
 /** Far more than any budget needs; a curve that never becomes straight stops here. */
 const mostPoints = 50_000
 
-/** Points that the engine starts from, in steps of this size in asinh(offset/half width) around each anchor. */
-const firstStep = 0.5
+/**
+ * Points that the engine starts from, in steps of this size in asinh(offset/half width) around each anchor. An eighth of it is just
+ * small enough for the wings of a resonance, where an amplitude goes as the offset and its chord over a step h is off by h²/8.
+ */
+const firstStep = 0.66
 
 const firstPerDecade = 24
 
@@ -78,16 +84,17 @@ function separation(points: Points, i: number, j: number): number {
     : points.frequency[j] - points.frequency[i]
 }
 
-/** The middle of an interval: in asinh(offset/half width) next to an anchor, in log f elsewhere. */
-function middle(points: Points, i: number): Point {
+/** A part of the way through an interval: in asinh(offset/half width) next to an anchor, in log f without one. */
+function within(points: Points, i: number, part: number): Point {
   const anchor = points.anchor[i]
   if (anchor >= 0 && points.anchor[i + 1] === anchor) {
     const { halfWidth } = points.anchors[anchor]
-    const u = (Math.asinh(points.offset[i] / halfWidth) + Math.asinh(points.offset[i + 1] / halfWidth)) / 2
-    return { anchor, offset: halfWidth * Math.sinh(u) }
+    const [from, to] = [points.offset[i], points.offset[i + 1]].map(offset => Math.asinh(offset / halfWidth))
+    return { anchor, offset: halfWidth * Math.sinh(from + (to - from) * part) }
   }
-  if (anchor < 0) return { anchor, offset: Math.sqrt(points.frequency[i] * points.frequency[i + 1]) }
-  return pointAt(points.anchors, (points.frequency[i] + points.frequency[i + 1]) / 2)
+  const [from, to] = [points.frequency[i], points.frequency[i + 1]]
+  if (anchor < 0) return { anchor, offset: from * (to / from) ** part }
+  return pointAt(points.anchors, from + (to - from) * part)
 }
 
 /** All curves that must be straight between points. */
@@ -96,12 +103,12 @@ function followed(evaluation: Evaluation): Float64Array[] {
   return [total, ...lines.map(line => line.psd), ...limits.map(limit => limit.psd)]
 }
 
-/** log(f_mid/f_left)/log(f_right/f_left) from hertz differences, exact next to a resonance. */
-function fraction(points: Points, i: number, middles: Points, k: number): number {
+/** log(f_probe/f_left)/log(f_right/f_left) from hertz differences, exact next to a resonance. */
+function fraction(points: Points, i: number, probes: Points, k: number): number {
   const left = points.frequency[i]
   const anchor = points.anchor[i]
-  const toMiddle = middles.anchor[k] === anchor ? middles.offset[k] - points.offset[i] : middles.frequency[k] - left
-  return Math.log1p(toMiddle / left) / Math.log1p(separation(points, i, i + 1) / left)
+  const toProbe = probes.anchor[k] === anchor ? probes.offset[k] - points.offset[i] : probes.frequency[k] - left
+  return Math.log1p(toProbe / left) / Math.log1p(separation(points, i, i + 1) / left)
 }
 
 /** What log–log interpolation makes of a curve; straight interpolation where a signed curve changes sign. */
@@ -113,19 +120,21 @@ function interpolate(left: number, right: number, part: number): number {
 
 /**
  * Refines the points until log–log interpolation of the amplitude density of the total, the lines and the limits is within
- * `gridTolerance`, and of curves below `gridFloor` of the total within that part of the floor. Intervals that fail at their middle
- * are halved, a generation at a time.
+ * `gridTolerance`, and of curves below `gridFloor` of the total within that part of the floor. Intervals that fail at their
+ * middle or beside it are halved, a generation at a time.
  */
 export function refine(evaluator: Evaluator, start: Points): Points {
   let points = start
   let curves = followed(evaluator.at(points))
   let open = [...points.frequency.keys()].slice(0, -1)
   while (open.length > 0 && points.frequency.length < mostPoints) {
-    const middles = middlesOf(points, open)
-    const there = followed(evaluator.at(middles))
-    const bent = open.filter((i, k) => !straight({ points, curves, i }, { middles, there, k }))
+    const probes = probed.map(part => probesOf(points, open, part))
+    const there = probes.map(each => followed(evaluator.at(each)))
+    const bent = open.filter((i, k) =>
+      probes.some((each, p) => !straight({ points, curves, i }, { probes: each, there: there[p], k })),
+    )
     if (bent.length === 0) break
-    const grown = insert({ points, curves, open, bent }, { middles, there })
+    const grown = insert({ points, curves, open, bent }, { middles: probes[0], there: there[0] })
     points = grown.points
     curves = grown.curves
     open = grown.open
@@ -133,9 +142,9 @@ export function refine(evaluator: Evaluator, start: Points): Points {
   return points
 }
 
-/** Middles in the order of the intervals, which is that of frequency. */
-function middlesOf(points: Points, open: readonly number[]): Points {
-  const list = open.map(i => middle(points, i))
+/** A point in each interval, in the order of the intervals, which is that of frequency. */
+function probesOf(points: Points, open: readonly number[], part: number): Points {
+  const list = open.map(i => within(points, i, part))
   const frequencyOf = ({ anchor, offset }: Point): number =>
     anchor < 0 ? offset : points.anchors[anchor].frequency + offset
   return {
@@ -148,11 +157,11 @@ function middlesOf(points: Points, open: readonly number[]): Points {
 
 function straight(
   { points, curves, i }: { points: Points; curves: readonly Float64Array[]; i: number },
-  { middles, there, k }: { middles: Points; there: readonly Float64Array[]; k: number },
+  { probes, there, k }: { probes: Points; there: readonly Float64Array[]; k: number },
 ): boolean {
   // Neighbours that double precision cannot halve are as close as can be.
   if (separation(points, i, i + 1) <= 4e-16 * points.frequency[i]) return true
-  const part = fraction(points, i, middles, k)
+  const part = fraction(points, i, probes, k)
   if (!(part > 0 && part < 1)) return true
   const floor = gridFloor * there[0][k]
   return curves.every((curve, c) => {
