@@ -1,4 +1,4 @@
-import type { Loops } from './loops.js'
+import type { Loops } from './array-loops.js'
 import { blockLength } from './simd-module.js'
 
 /**

@@ -1,6 +1,7 @@
 import type { Complex } from '../model/network.js'
 import { EngineFault } from '../model/problem.js'
-import { conjugate, multiply as times, reciprocal } from '../physics/complex.js'
+import { conjugate, multiply as times, norm, reciprocal } from '../physics/complex.js'
+import { addUp } from './add-up.js'
 import {
   addForms,
   isConstant,
@@ -347,16 +348,3 @@ export class Tape {
 }
 
 const addressOf = (real: Real): number => (real.array.kind === 'register' ? real.array.address : -1)
-
-const norm = (a: Complex): number => a.re * a.re + a.im * a.im
-
-/** out = Σ scale·array, four arrays a pass. */
-function addUp(out: number, terms: readonly { address: number; scale: number }[], n: number): void {
-  const [a, b] = terms
-  loops.sum2(out, a.address, b.address, n, a.scale, b.scale)
-  for (let i = 2; i < terms.length; i += 3) {
-    const [p, q, r] = [terms[i], terms[i + 1] ?? terms[i], terms[i + 2] ?? terms[i]]
-    const [second, third] = [i + 1 < terms.length ? q.scale : 0, i + 2 < terms.length ? r.scale : 0]
-    loops.sum4(out, out, p.address, q.address, r.address, n, 1, p.scale, second, third)
-  }
-}

@@ -37,4 +37,7 @@ export const divide = (a: Complex, b: Complex): Complex => multiply(a, reciproca
 
 export const magnitude = (a: Complex): number => Math.hypot(a.re, a.im)
 
+/** |a|². */
+export const norm = (a: Complex): number => a.re * a.re + a.im * a.im
+
 export const phase = (a: Complex): number => Math.atan2(a.im, a.re)
