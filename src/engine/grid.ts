@@ -11,10 +11,13 @@ export const gridTolerance = 1e-3
 export const gridFloor = 1e-6
 
 /** An interval counts as straight when its probes are off by less than this part of the tolerance: they are not quite the worst places. */
-const safety = 0.9
+const safety = 0.85
 
 /** Where an interval is probed: its middle first, and where a curve with an inflection, which meets its chord near the middle, is farthest. */
 const probed = [0.5, 0.21, 0.79] as const
+
+/** A curve that falls by more than this over an interval heads for zero, and its relative error may be large beyond the last probe. */
+const steepest = 4
 
 /** Far more than any budget needs; a curve that never becomes straight stops here. */
 const mostPoints = 50_000
@@ -23,7 +26,7 @@ const mostPoints = 50_000
  * Points that the engine starts from, in steps of this size in asinh(offset/half width) around each anchor. An eighth of it is just
  * small enough for the wings of a resonance, where an amplitude goes as the offset and its chord over a step h is off by h²/8.
  */
-const firstStep = 0.66
+const firstStep = 0.64
 
 const firstPerDecade = 24
 
@@ -165,9 +168,13 @@ function straight(
   if (!(part > 0 && part < 1)) return true
   const floor = gridFloor * there[0][k]
   return curves.every((curve, c) => {
-    const actual = there[c][k]
-    const off = Math.abs(interpolate(curve[i], curve[i + 1], part) - actual)
-    return off <= 2 * gridTolerance * safety * Math.max(Math.abs(actual), floor)
+    const [left, right, actual] = [curve[i], curve[i + 1], there[c][k]]
+    const crosses = left * right < 0
+    const [smaller, larger] = [Math.abs(left), Math.abs(right)].sort((a, b) => a - b)
+    if (!crosses && larger > steepest * Math.max(smaller, floor)) return false
+    // Where a curve passes zero its relative error is largest there and not at the probe: all of the interval is held to the floor.
+    const scale = crosses ? floor : Math.max(Math.abs(actual), floor)
+    return Math.abs(interpolate(left, right, part) - actual) <= 2 * gridTolerance * safety * scale
   })
 }
 
