@@ -38,10 +38,10 @@ export function modeAnchors(network: Network, poles: readonly Pole[], band: Band
 
 /**
  * The same anchors in a network whose parameters have changed a little: a mode is where its parameter says, a pole and a zero are found
- * again. One that cannot be found stays where it was.
+ * again. One that cannot be found stays where it was. Poles are needed only where an anchor is one.
  */
 export function followAnchors(anchors: readonly Anchor[], network: Network, poles: readonly Pole[]): Anchor[] {
-  const ofModes = polesOfModes(network, poles)
+  const ofModes = poles.length === 0 ? new Map<string, Pole>() : polesOfModes(network, poles)
   return anchors.map(anchor => {
     if (anchor.nature === 'zero') {
       const zero = zeroNear(network, anchor.frequency, Math.max(anchor.halfWidth, 1e-9 * anchor.frequency))

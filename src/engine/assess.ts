@@ -8,12 +8,17 @@ import { assemble } from './assemble.js'
 import { refuseBlind } from './blind.js'
 import { Evaluator } from './evaluate.js'
 import { firstPoints, pointAt, refine } from './grid.js'
-import { headlinesOf } from './headlines.js'
+import { bestIndex, headlinesOf } from './headlines.js'
 import { polesOf, type Pole } from './poles.js'
+import { requirementResults } from './requirements.js'
+import { Changes } from './sensitivity.js'
 import { refuseUnstable } from './stability.js'
 import { cavityStates, modeStates } from './states.js'
+import { bandsOf, lineSpreadsAt, rootSharesAt, type Differentiated } from './uncertainty.js'
 
 const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz' } as const
+
+const everything = { sources: true, limits: true } as const
 
 /** A budget at its working point, ready to be evaluated anywhere. */
 export interface Prepared {
@@ -40,7 +45,7 @@ export function evaluateBand({ budget, network, poles }: Prepared): Evaluation {
   const zeros = zeroAnchors(network, first, budget.band)
   const anchors = ascending([...modes, ...zeros])
   const start = zeros.length === 0 ? first.points : firstPoints(anchors, budget.band, knots)
-  return new Evaluator(budget, network, { sources: true, limits: true }).at(refine(curves, start))
+  return new Evaluator(budget, network, everything).at(refine(curves, start))
 }
 
 /** All curves exactly at given frequencies in Hz, in the order given. */
@@ -57,7 +62,7 @@ function evaluateList({ budget, network, poles }: Prepared, frequencies: ArrayLi
     anchor: Int32Array.from(list, p => p.anchor),
     offset: Float64Array.from(list, p => p.offset),
   }
-  return new Evaluator(budget, network, { sources: true, limits: true }).at(points)
+  return new Evaluator(budget, network, everything).at(points)
 }
 
 /**
@@ -92,21 +97,41 @@ function warningsOf({ budget, network }: Prepared): Problem[] {
   return warnings
 }
 
+/** How much is wanted: a report has uncertainties at every point of the band; a glance only those of its headline numbers. */
+export type Depth = 'report' | 'glance'
+
 /** Everything that a report says about one budget. Throws `Refusal` for the input's faults and `EngineFault` for the engine's. */
-export function assess(budget: Budget): Assessment {
+export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   const prepared = prepare(budget)
+  const { network, poles } = prepared
   const evaluation = evaluateBand(prepared)
-  const computed = prepared.network.sensing.light !== null
-  if (computed) checkLimits(evaluation)
-  const reference = budget.reference === null ? null : evaluateList(prepared, [budget.reference])
-  const headlines = headlinesOf(evaluation, reference)
+  if (network.sensing.light !== null) checkLimits(evaluation)
+  const changes = new Changes(budget)
+  const at = (...frequencies: number[]): Differentiated => {
+    const here = evaluateList(prepared, frequencies)
+    return { evaluation: here, slopes: changes.sensitivities(here) }
+  }
+  const best = evaluation.points.frequency[bestIndex(evaluation)]
+  const reference = budget.reference ?? best
+  const spots = at(reference, best)
+  const counted = depth === 'report' || budget.requirements.some(({ of }) => of.startsWith('occupancy.'))
+  const modes = modeStates(budget, network, { poles, changes: counted ? changes : null })
   return {
     budget,
     evaluation,
-    atReference: reference ?? evaluateList(prepared, [headlines.best.frequency]),
-    headlines,
-    modes: modeStates(prepared.network, prepared.poles),
-    cavities: cavityStates(prepared.network),
+    atReference: evaluateList(prepared, [reference]),
+    headlines: headlinesOf(budget, evaluation, spots),
+    bands: depth === 'report' ? bandsOf(budget, evaluation, changes.sensitivities(evaluation)) : null,
+    rootShares: rootSharesAt(budget, spots, 0),
+    lineSpreads: lineSpreadsAt(budget, spots, 0),
+    requirements: requirementResults(budget, { band: evaluation, modes, at }),
+    variants: budget.variants.map(({ id, title, budget: changed }) => ({
+      id,
+      title,
+      assessment: assess(changed, depth),
+    })),
+    modes,
+    cavities: cavityStates(network),
     unit: units[budget.measurand.quantity],
     warnings: warningsOf(prepared),
   }

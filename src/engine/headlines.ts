@@ -1,18 +1,50 @@
-import type { At, Dominance, Headlines } from '../model/assessment.js'
+import type { At, Dominance, Headlines, Spread } from '../model/assessment.js'
+import type { Budget } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
+import type { Sensitivity } from './sensitivity.js'
+import { spreadAt, type Differentiated } from './uncertainty.js'
 
-const decibels = (ratio: number): number => 10 * Math.log10(ratio)
+const perDecibel = 10 / Math.LN10
+
+/** 10 log₁₀(S/L) in dB with its spread; null where there is no limit or no noise. */
+function marginAt(
+  budget: Budget,
+  { evaluation, slopes }: Differentiated,
+  { of, limit, index }: { of: 'total' | 'added'; limit: string; index: number },
+): { value: number; spread: Spread } | null {
+  const which = evaluation.limits.findIndex(({ id }) => id === limit)
+  const psd = evaluation[of][index]
+  if (which < 0 || !(psd > 0)) return null
+  const bound = evaluation.limits[which].psd[index]
+  const slope = (s: Sensitivity): number => perDecibel * (s[of][index] / psd - s.limits[which][index] / bound)
+  return { value: perDecibel * Math.log(psd / bound), spread: spreadAt(budget, slopes, slope) }
+}
+
+/** 10 log₁₀ of the total over a limit, in dB. */
+export function totalMargin(
+  budget: Budget,
+  at: Differentiated,
+  limit: string,
+  index: number,
+): { value: number; spread: Spread } | null {
+  return marginAt(budget, at, { of: 'total', limit, index })
+}
 
 /** Everything said about one point of an evaluation. */
-export function valuesAt(evaluation: Evaluation, index: number): At {
+export function valuesAt(budget: Budget, at: Differentiated, index: number): At {
+  const { evaluation, slopes } = at
   const total = evaluation.total[index]
-  const sql = evaluation.limits.find(limit => limit.id === 'sql')?.psd[index]
-  const margin = (psd: number): number | null => (sql === undefined || !(psd > 0) ? null : decibels(psd / sql))
+  const asd = Math.sqrt(total)
+  const margin = totalMargin(budget, at, 'sql', index)
+  const added = marginAt(budget, at, { of: 'added', limit: 'sql', index })
   return {
     frequency: evaluation.points.frequency[index],
-    asd: Math.sqrt(total),
-    totalMargin: margin(total),
-    addedMargin: margin(evaluation.added[index]),
+    asd,
+    asdSpread: spreadAt(budget, slopes, s => s.total[index] / (2 * asd)),
+    totalMargin: margin?.value ?? null,
+    totalMarginSpread: margin?.spread ?? null,
+    addedMargin: added?.value ?? null,
+    addedMarginSpread: added?.spread ?? null,
     shares: evaluation.lines
       .map(line => ({ line: line.id, share: line.psd[index] / total }))
       .sort((a, b) => b.share - a.share),
@@ -54,14 +86,17 @@ function halfPowerBand({ total, points }: Evaluation, best: number): { from: num
   return { from: edge(-1), to: edge(1) }
 }
 
-/** The numbers that a report begins with; `reference` is an evaluation at the file's reference frequency alone. */
-export function headlinesOf(evaluation: Evaluation, reference: Evaluation | null): Headlines {
-  const { total } = evaluation
-  const best = total.reduce((least, value, i) => (value < total[least] ? i : least), 0)
+/** The numbers that a report begins with; `spots` is an evaluation at two points, the
+ * reference (or the best) and the best. */
+export function headlinesOf(budget: Budget, evaluation: Evaluation, spots: Differentiated): Headlines {
   return {
-    best: valuesAt(evaluation, best),
-    reference: reference === null ? null : valuesAt(reference, 0),
-    halfPowerBand: halfPowerBand(evaluation, best),
+    best: valuesAt(budget, spots, 1),
+    reference: budget.reference === null ? null : valuesAt(budget, spots, 0),
+    halfPowerBand: halfPowerBand(evaluation, bestIndex(evaluation)),
     dominance: dominance(evaluation),
   }
 }
+
+/** Index of the least total. */
+export const bestIndex = ({ total }: Evaluation): number =>
+  total.reduce((least, value, i) => (value < total[least] ? i : least), 0)

@@ -44,11 +44,11 @@ interface Panel {
 
 /**
  * Each panel reaches four times as far from a pole as the one before. Seen from such a panel the pole lies on the Bernstein ellipse of
- * parameter 3, and the rule's error is 3^(−2·16) ≈ 5e-16.
+ * parameter 3, and the rule's error is 3^(−2·12) ≈ 4e-12.
  */
 const growth = 4
 
-const nodesPerPanel = 16
+const nodesPerPanel = 12
 
 /** Poles at positive frequencies as anchors, ascending; one at zero frequency stands for those on the imaginary axis. */
 function poleAnchors(poles: readonly Pole[]): Anchor[] {

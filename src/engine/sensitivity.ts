@@ -1,11 +1,13 @@
 import type { Budget } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
+import type { Network } from '../model/network.js'
 import type { Points } from '../model/points.js'
 import { followAnchors } from './anchors.js'
+import { Arena } from './arena.js'
 import { assemble } from './assemble.js'
 import { rootValues } from './bind.js'
 import { Evaluator } from './evaluate.js'
-import { polesOf } from './poles.js'
+import { polesOf, type Pole } from './poles.js'
 
 /** Derivatives of power densities (unit²/Hz) by one root, in the order of the evaluation's curves. */
 export interface Sensitivity {
@@ -17,57 +19,88 @@ export interface Sensitivity {
   readonly limits: readonly Float64Array[]
 }
 
-/** Relative step of the differences: rounding of an evaluation over it and its fourth power are both below 1e-9. */
+/**
+ * Step of the central differences relative to the root. Their error is its square times the curvature of the third order, and rounding of
+ * an evaluation over it: both near 1e-9 of the derivative.
+ */
 const relativeStep = 3e-5
 
 /** A root that is zero has no scale but its uncertainty. */
 const stepOf = (value: number, uncertainty: number): number =>
-  value === 0 ? uncertainty : relativeStep * Math.abs(value)
+  value === 0 ? 0.01 * uncertainty : relativeStep * Math.abs(value)
 
-/**
- * An evaluation at changed roots, on points that go along with their modes: a point is an offset from its anchor, and the anchor is
- * where the changed parameters put it. So the band of a sharp resonance is that of its depth, not of its place.
- */
-function evaluateChanged(budget: Budget, points: Points, roots: Float64Array, limits: boolean): Evaluation {
-  const network = assemble(budget, roots)
-  const followed = points.anchors.length === 0 ? [] : followAnchors(points.anchors, network, polesOf(network))
-  const frequency = points.frequency.map((f, i) => {
-    const anchor = points.anchor[i]
-    return anchor < 0 ? f : followed[anchor].frequency + points.offset[i]
-  })
-  const moved = { anchors: followed, frequency, anchor: points.anchor, offset: points.offset }
-  return new Evaluator(budget, network, { sources: false, limits }).at(moved)
-}
+/** The network at changed roots; its poles are found when they are asked for. */
+export class Changed {
+  readonly network: Network
+  #poles: readonly Pole[] | null = null
 
-const curvesOf = ({ total, added, lines, limits }: Evaluation): Float64Array[] => [
-  total,
-  added,
-  ...lines.map(line => line.psd),
-  ...limits.map(limit => limit.psd),
-]
-
-/** (4·D(h/2) − D(h))/3 of central differences D: Richardson's extrapolation, of fourth order in h. */
-function derivative(budget: Budget, points: Points, root: number, limits: boolean): Float64Array[] {
-  const centre = rootValues(budget)
-  const step = stepOf(centre[root], budget.roots[root].uncertainty)
-  const at = (change: number): Float64Array[] => {
-    const roots = centre.slice()
-    roots[root] += change
-    return curvesOf(evaluateChanged(budget, points, roots, limits))
+  constructor(budget: Budget, roots: Float64Array) {
+    this.network = assemble(budget, roots)
   }
-  const [wideUp, wideDown, up, down] = [at(step), at(-step), at(step / 2), at(-step / 2)]
-  return wideUp.map((curve, c) =>
-    curve.map((value, i) => (8 * (up[c][i] - down[c][i]) - (value - wideDown[c][i])) / (6 * step)),
-  )
+
+  get poles(): readonly Pole[] {
+    return (this.#poles ??= polesOf(this.network))
+  }
 }
 
-/** Derivatives by every uncertain root on the given points. */
-export function sensitivities(budget: Budget, points: Points, limits: boolean): Sensitivity[] {
-  return budget.roots.flatMap(({ uncertainty }, root) => {
-    if (uncertainty === 0) return []
-    const [total, added, ...rest] = derivative(budget, points, root, limits)
-    const count = rest.length
-    const lines = rest.slice(0, count)
-    return [{ root, total, added, lines, limits: [] }]
-  })
+/** Every uncertain root with the networks a step above and below it, assembled once for all that is differentiated. */
+export class Changes {
+  readonly list: readonly {
+    readonly root: number
+    readonly step: number
+    readonly up: Changed
+    readonly down: Changed
+  }[]
+  readonly #arenas = [new Arena(), new Arena()] as const
+
+  constructor(readonly budget: Budget) {
+    const centre = rootValues(budget)
+    this.list = budget.roots.flatMap(({ value, uncertainty }, root) => {
+      if (uncertainty === 0) return []
+      const step = stepOf(value, uncertainty)
+      const at = (change: number): Changed =>
+        new Changed(
+          budget,
+          centre.map((v, i) => (i === root ? v + change : v)),
+        )
+      return [{ root, step, up: at(step), down: at(-step) }]
+    })
+  }
+
+  /** Derivatives of numbers by each uncertain root. */
+  derivatives(numbers: (changed: Changed) => readonly number[]): { root: number; slopes: number[] }[] {
+    return this.list.map(({ root, step, up, down }) => {
+      const low = numbers(down)
+      return { root, slopes: numbers(up).map((high, i) => (high - low[i]) / (2 * step)) }
+    })
+  }
+
+  /** Derivatives of all curves of an evaluation by each uncertain root. */
+  sensitivities(evaluation: Evaluation): Sensitivity[] {
+    const limits = evaluation.limits.length > 0
+    const lines = evaluation.lines.length
+    return this.list.map(({ root, step, up, down }) => {
+      const high = this.#curves(up, evaluation.points, { limits, arena: this.#arenas[0] })
+      const low = this.#curves(down, evaluation.points, { limits, arena: this.#arenas[1] })
+      const [total, added, ...rest] = high.map((curve, c) => curve.map((value, i) => (value - low[c][i]) / (2 * step)))
+      return { root, total, added, lines: rest.slice(0, lines), limits: rest.slice(lines) }
+    })
+  }
+
+  /**
+   * Curves of a changed network, on points that go along with their modes: a point is an offset from its anchor, and the anchor is where
+   * the changed parameters put it. So the band of a sharp resonance is that of its depth, not of its place.
+   */
+  #curves(changed: Changed, points: Points, { limits, arena }: { limits: boolean; arena: Arena }): Float64Array[] {
+    const moving = points.anchors.some(anchor => anchor.nature === 'pole')
+    const anchors = followAnchors(points.anchors, changed.network, moving ? changed.poles : [])
+    const frequency = points.frequency.map((f, i) => {
+      const anchor = points.anchor[i]
+      return anchor < 0 ? f : anchors[anchor].frequency + points.offset[i]
+    })
+    const moved = { anchors, frequency, anchor: points.anchor, offset: points.offset }
+    const evaluator = new Evaluator(this.budget, changed.network, { sources: false, limits })
+    const { total, added, lines, limits: bounds } = evaluator.at(moved, arena)
+    return [total, added, ...lines.map(line => line.psd), ...bounds.map(limit => limit.psd)]
+  }
 }

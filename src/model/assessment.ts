@@ -1,17 +1,29 @@
-import type { Budget } from './budget.js'
+import type { Budget, Requirement } from './budget.js'
 import type { Evaluation } from './evaluation.js'
 import type { Problem } from './problem.js'
+
+/** Standard uncertainties of a number, by the law of propagation of the GUM (JCGM 100:2008, 5.1 and 5.2), first order. */
+export interface Spread {
+  /** From roots whose effect is statistical, and from those whose effect is systematic; correlations within each. */
+  readonly statistical: number
+  readonly systematic: number
+  /** Of all roots with all correlations. */
+  readonly combined: number
+}
 
 /** A value at one frequency. */
 export interface At {
   /** In Hz. */
   readonly frequency: number
-  /** One-sided amplitude density of the total at the measurand. */
+  /** One-sided amplitude density of the total at the measurand, and its standard uncertainty. */
   readonly asd: number
+  readonly asdSpread: Spread
   /** 10 log₁₀ of total over the standard quantum limit, in dB; null where there is no such limit. */
   readonly totalMargin: number | null
+  readonly totalMarginSpread: Spread | null
   /** The same of the readout's added noise alone. */
   readonly addedMargin: number | null
+  readonly addedMarginSpread: Spread | null
   /** Ids of lines with their share of the total power, largest first; signed lines included. */
   readonly shares: readonly { readonly line: string; readonly share: number }[]
 }
@@ -49,6 +61,7 @@ export interface ModeState {
   readonly thermalOccupancy: number
   /** With the light on; null where it is not computed. */
   readonly finalOccupancy: number | null
+  readonly finalOccupancySpread: Spread | null
   /** In m; null for a free mass. */
   readonly zeroPoint: number | null
   /** 4g²/κΓ; null without a cavity. */
@@ -68,6 +81,33 @@ export interface CavityState {
   readonly ports: readonly { readonly id: string; readonly rate: number; readonly occupancy: number }[]
 }
 
+/** The amplitude density of the total with its standard uncertainties, on the points of the evaluation. */
+export interface Bands {
+  readonly statistical: Float64Array
+  readonly systematic: Float64Array
+  readonly combined: Float64Array
+}
+
+/** What one root adds to the uncertainty of the total at the reference frequency. */
+export interface RootShare {
+  /** Index into the budget's roots. */
+  readonly root: number
+  /** ∂ ln(amplitude density)/∂ ln(root): per cent of the total for one per cent of the root; null for a root that is zero. */
+  readonly elasticity: number | null
+  /** |∂(amplitude density)/∂root|·u(root), in the unit of the amplitude density. */
+  readonly change: number
+}
+
+/** A requirement with the number that it was held against. */
+export interface RequirementResult {
+  readonly requirement: Requirement
+  readonly value: number
+  readonly spread: Spread
+  /** In Hz: where the value was taken, the worst place of a band; null for an occupancy. */
+  readonly frequency: number | null
+  readonly met: boolean
+}
+
 /** All that a report says about one budget. */
 export interface Assessment {
   readonly budget: Budget
@@ -76,6 +116,15 @@ export interface Assessment {
   /** Evaluated at the reference frequency (or the best one), not interpolated. */
   readonly atReference: Evaluation
   readonly headlines: Headlines
+  /** Standard uncertainty of the total's amplitude density on the points of `evaluation`; null where only a glance was asked for. */
+  readonly bands: Bands | null
+  /** At the reference frequency, largest first. */
+  readonly rootShares: readonly RootShare[]
+  /** Standard uncertainty of each line's amplitude density at the reference, in the order of `atReference.lines`. */
+  readonly lineSpreads: readonly Spread[]
+  readonly requirements: readonly RequirementResult[]
+  /** Variants of the budget, each assessed by itself. */
+  readonly variants: readonly { readonly id: string; readonly title: string; readonly assessment: Assessment }[]
   readonly modes: readonly ModeState[]
   readonly cavities: readonly CavityState[]
   /** Unit of the measurand's amplitude density: `N/√Hz`. */

@@ -40,6 +40,8 @@ describe('the example budget', () => {
       id: 'mass',
       value: 3.1e-12,
       uncertainty: 2e-13,
+      distribution: 'normal',
+      effect: 'statistical',
       dimension: 'mass',
       text: '3.1(2) ng',
       about: 'effective mass of the fundamental mode',

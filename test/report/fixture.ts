@@ -276,12 +276,17 @@ function evaluation(points: Points): Evaluation {
   }
 }
 
+const spread = { statistical: 0, systematic: 0, combined: 0 }
+
 function headlineAt(e: Evaluation, i: number): At {
   const limit = e.limits[0].psd[i]
   return {
     frequency: e.points.frequency[i],
     asd: Math.sqrt(e.total[i]),
+    asdSpread: spread,
     totalMargin: 10 * Math.log10(e.total[i] / limit),
+    totalMarginSpread: spread,
+    addedMarginSpread: spread,
     addedMargin: 10 * Math.log10(e.added[i] / limit),
     shares: e.lines
       .map(each => ({ line: each.id, share: each.psd[i] / e.total[i] }))
@@ -318,6 +323,7 @@ const mode: ModeState = {
   effectiveLinewidth: 130,
   thermalOccupancy: 68720,
   finalOccupancy: 26.4,
+  finalOccupancySpread: spread,
   zeroPoint: 1.475e-15,
   cooperativity: 2500,
 }
@@ -345,6 +351,11 @@ export function fixtureAssessment(sensor = 'fixture'): Assessment {
     budget,
     evaluation: whole,
     atReference,
+    bands: null,
+    rootShares: [],
+    lineSpreads: atReference.lines.map(() => spread),
+    requirements: [],
+    variants: [],
     headlines: {
       best: headlineAt(whole, best),
       reference: headlineAt(atReference, 0),
