@@ -27,7 +27,12 @@ export function checkCharacters(text: string): void {
   }
 }
 
-function strangeCharacter(character: string, offset: number): QuantityError {
+/** `place` goes on from `has no place in`, with a remedy. */
+export function strangeCharacter(
+  character: string,
+  offset: number,
+  place = 'a quantity; write it like `3.1(2) ng` or `0.8 aN/√Hz`',
+): QuantityError {
   const code = `U+${(character.codePointAt(0) ?? 0).toString(16).toUpperCase().padStart(4, '0')}`
   const plain = lookAlikes.get(character)
   if (plain !== undefined) {
@@ -38,9 +43,5 @@ function strangeCharacter(character: string, offset: number): QuantityError {
     )
   }
   const shown = /^[\p{L}\p{N}\p{P}\p{S}]$/u.test(character) ? ` (${character})` : ''
-  return new QuantityError(
-    `the character ${code}${shown} has no place in a quantity; write it like \`3.1(2) ng\` or \`0.8 aN/√Hz\``,
-    offset,
-    character.length,
-  )
+  return new QuantityError(`the character ${code}${shown} has no place in ${place}`, offset, character.length)
 }

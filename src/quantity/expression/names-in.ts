@@ -1,0 +1,15 @@
+import { childrenOf, type Expression, type ExpressionNode } from './tree.js'
+
+/** Names that the language itself gives a meaning: π, and what says that a number counts turns or radians. */
+export const ownNames: ReadonlySet<string> = new Set(['pi', 'cycle', 'radian'])
+
+/** All names of an expression once, in the order of their first use; functions, `pi`, `cycle` and `radian` are none. */
+export function namesIn(expression: Expression): string[] {
+  const names = new Set<string>()
+  const visit = (node: ExpressionNode): void => {
+    if (node.type === 'name' && !ownNames.has(node.name)) names.add(node.name)
+    childrenOf(node).forEach(visit)
+  }
+  visit(expression.root)
+  return [...names]
+}
