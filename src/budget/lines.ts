@@ -7,6 +7,7 @@ import { nearest } from './nearest.js'
 import type { Noise } from './noises.js'
 import { quoted } from './quoted.js'
 import { child, type Tree, type TreeEntry, type TreeScalar } from './tree.js'
+import { where } from './where.js'
 
 const parts: readonly PartName[] = ['imprecision', 'back-action', 'heating']
 
@@ -107,7 +108,7 @@ class Ledger {
       const who =
         clash.line === claimed.line
           ? `twice by \`${clash.line}\``
-          : `by \`${clash.line}\` (line ${clash.place.line}) and by \`${claimed.line}\``
+          : `by \`${clash.line}\` (${where(clash.place, claimed.place)}) and by \`${claimed.line}\``
       this.reader.issues.error(
         'claimed-twice',
         claimed.place,

@@ -3,6 +3,7 @@ import { idFault, lineFault } from './names.js'
 import { quoted } from './quoted.js'
 import type { Issues } from './issues.js'
 import { child, type Tree } from './tree.js'
+import { where } from './where.js'
 
 /** Parameters, components and contributions share one namespace, so that an id means one thing on every page. */
 export function checkNames(root: Tree, issues: Issues): void {
@@ -17,7 +18,7 @@ export function checkNames(root: Tree, issues: Issues): void {
         issues.error(
           'name-taken',
           keyPlace,
-          `\`${key}\` is already the name of one of the ${other.section} (line ${other.place.line}); choose another`,
+          `\`${key}\` is already the name of one of the ${other.section} (${where(other.place, keyPlace)}); choose another`,
         )
       taken.set(key, { section, place: keyPlace })
     }

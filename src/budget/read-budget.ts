@@ -1,10 +1,13 @@
 import type { Budget } from '../model/budget.js'
 import type { Problem } from '../model/problem.js'
-import { FileRefusal, type FileSource } from './file-source.js'
+import { ComposeFiles } from './compose-files.js'
+import { compose } from './compose.js'
+import type { FileSource } from './file-source.js'
 import { Issues } from './issues.js'
 import { resolve } from './resolve.js'
+import type { Tree } from './tree.js'
 import { validateShape } from './validate.js'
-import { readYaml } from './yaml.js'
+import { readVariants } from './variant.js'
 
 export interface BudgetRead {
   /** Null where a problem is an error. */
@@ -29,24 +32,15 @@ export interface BudgetAddress {
 export function readBudgetFile(files: FileSource, { sensor, folder, name }: BudgetAddress): BudgetRead {
   const file = folder === '' ? name : `${folder}/${name}`
   const issues = new Issues()
-  const tree = readTree(files, file, issues)
+  const tree = compose(file, new ComposeFiles(files, issues), issues)
   if (tree === null) return { budget: null, problems: issues.sorted() }
-  validateShape(tree, issues)
-  issues.nextStage()
-  const budget = resolve(tree, { sensor, file, data: { files, folder } }, issues)
-  return { budget: issues.failed ? null : budget, problems: issues.sorted() }
-}
-
-function readTree(files: FileSource, file: string, issues: Issues): ReturnType<typeof readYaml>['tree'] {
-  let bytes: Uint8Array
-  try {
-    bytes = files.read(file)
-  } catch (error) {
-    if (!(error instanceof FileRefusal)) throw error
-    issues.error('file', { file, line: 1, column: 1 }, `the file ${error.message}`)
-    return null
+  const read = (whole: Tree, into: Issues): Budget | null => {
+    into.nextStage()
+    validateShape(whole, into)
+    into.nextStage()
+    return resolve(whole, { sensor, file, data: { files, folder } }, into)
   }
-  const { tree, problems } = readYaml(file, bytes)
-  for (const problem of problems) issues.add(problem)
-  return tree
+  const budget = read(tree, issues)
+  const variants = readVariants(tree, read, issues)
+  return { budget: issues.failed || budget === null ? null : { ...budget, variants }, problems: issues.sorted() }
 }

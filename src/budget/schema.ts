@@ -79,10 +79,16 @@ export function budgetSchema(): Schema {
 function rootProperties(): Schema {
   return {
     format: { const: formatVersion, description: 'version of the file format, 1 today' },
-    title: text,
+    title: { ...text, description: 'its name on pages; each budget states its own' },
     summary: { ...longText, description: 'one paragraph for the head of the report' },
     about: { ...longText, description: 'notes on the sensor' },
-    revision: { type: ['string', 'number'], pattern: revisionPattern, description: 'dotted numbers: 2.1' },
+    revision: {
+      type: ['string', 'number'],
+      pattern: revisionPattern,
+      description: 'dotted numbers: 2.1; each budget states its own',
+    },
+    from: { ...short, type: 'string', description: 'path of a budget file that this one builds on' },
+    include: { ...short, type: ['string', 'array'], items: short, maxItems: 20, description: 'paths of shared parts' },
     measurand: reference('measurand'),
     readout: { ...name, description: 'the detector whose record is read' },
     band: { ...short, type: 'string', description: 'where the budget is computed: 1.20 MHz to 1.30 MHz' },
@@ -91,12 +97,17 @@ function rootProperties(): Schema {
     components: { ...userMap(reference('component')), minProperties: 1, description: 'parts of the signal path' },
     contributions: { ...userMap(reference('contribution')), description: 'the lines of the budget' },
     requirements: { ...userMap(reference('requirement')), description: 'bounds that the budget must meet' },
+    variants: {
+      ...userMap(reference('variant')),
+      maxProperties: 8,
+      description: 'named sets of changes, drawn beside it',
+    },
   }
 }
 
 function definitions(): Schema {
   const kinds = [...declarations.values()]
-  const result: Record<string, Schema> = { quantity, table, measurand, requirement, claim }
+  const result: Record<string, Schema> = { quantity, table, measurand, requirement, variant, claim }
   result['component'] = byKind(kinds.filter(kind => kind.role === 'component'))
   result['contribution'] = {
     if: { type: 'object', required: ['kind'] },
@@ -130,6 +141,22 @@ const requirement: Schema = {
     above: short,
   },
   required: ['of'],
+  additionalProperties: false,
+}
+
+const variant: Schema = {
+  type: 'object',
+  properties: {
+    title: { ...text, description: 'its name on pages' },
+    about: { ...longText, description: 'what it asks' },
+    changes: {
+      type: 'object',
+      minProperties: 1,
+      maxProperties: 100,
+      description: 'path and new value: { cavity.pump.power: 3 µW }; `~` takes away',
+    },
+  },
+  required: ['changes'],
   additionalProperties: false,
 }
 

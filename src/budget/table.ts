@@ -6,6 +6,7 @@ import { QuantityError } from '../quantity/error.js'
 import { parseQuantity } from '../quantity/parse.js'
 import { textOf } from './amount.js'
 import { cellsFault, mostRows, readCsv, type CsvFault, type CsvRow } from './csv.js'
+import { folderOf } from './compose-files.js'
 import { FileRefusal, joinInside, type FileSource } from './file-source.js'
 import type { Issues } from './issues.js'
 import { quoted } from './quoted.js'
@@ -48,12 +49,12 @@ export class TableReader {
     const file = textOf(fileTree)
     const columns = this.#columns(child(tree, 'units'), of)
     if (fileTree === undefined || file === null || columns === null) return null
-    const path = joinInside(this.data.folder, file)
+    const path = joinInside(folderOf(fileTree.place.file), file)
     if (path === null) {
       this.issues.error(
         'file',
         fileTree.place,
-        `${quoted(file)} must be a path from the budget’s folder that stays inside the project`,
+        `${quoted(file)} must be a path from the folder of this file that stays inside the project`,
       )
       return null
     }
