@@ -35,9 +35,9 @@ function mergeEntry(old: TreeEntry, entry: TreeEntry, issues: Issues): TreeEntry
 }
 
 /** A bare quantity over an explained one counts as `{ value }`. */
-function quantityOver(below: Tree, { key, keyPlace, value }: TreeEntry): Tree {
+function quantityOver(below: Tree, { keyPlace, value }: TreeEntry): Tree {
   if (value.type !== 'scalar' || value.text === '' || child(below, 'value') === undefined) return value
-  return { type: 'map', place: value.place, entries: new Map([['value', { key, keyPlace, value }]]) }
+  return { type: 'map', place: value.place, entries: new Map([['value', { key: 'value', keyPlace, value }]]) }
 }
 
 function isOtherKind(below: TreeMap, above: TreeMap): boolean {

@@ -16,7 +16,11 @@ export function partOf(tree: TreeMap, issues: Issues): TreeMap | null {
   const before = issues.errors
   for (const { key, keyPlace, value } of tree.entries.values()) {
     if (heads.has(key)) continue
-    if (!sections.has(key)) issues.error('unknown-key', keyPlace, foreign(key))
+    if (belongsToBudget(key)) {
+      issues.error('unknown-key', keyPlace, foreign(key))
+      return null
+    }
+    if (!sections.has(key)) issues.error('unknown-key', keyPlace, unknown(key))
     else if (value.type !== 'map')
       issues.error('type', value.type === 'scalar' ? value.place : keyPlace, `\`${key}\` must be a map of names`)
   }
@@ -24,10 +28,17 @@ export function partOf(tree: TreeMap, issues: Issues): TreeMap | null {
   return { ...tree, entries: new Map([...tree.entries].filter(([key]) => sections.has(key))) }
 }
 
+/** A whole budget is no part; one sentence about its first such key is enough. */
+function belongsToBudget(key: string): boolean {
+  return !sections.has(key) && Object.hasOwn(budgetSchema()['properties'] as object, key)
+}
+
 function foreign(key: string): string {
+  return `${quoted(key)} belongs to a budget, not to a shared part; a budget builds on another one with \`from\``
+}
+
+function unknown(key: string): string {
   const allowed = [...heads, ...sections]
   const known = allowed.map(each => `\`${each}\``).join(', ')
-  if (Object.hasOwn(budgetSchema()['properties'] as object, key))
-    return `${quoted(key)} belongs to a budget, not to a shared part; a budget builds on another one with \`from\``
   return `unknown key ${quoted(key)} in a shared part; allowed are ${known}${suggestion(key, allowed)}`
 }
