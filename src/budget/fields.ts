@@ -89,7 +89,7 @@ class Walk {
   #spread(tree: Tree, group: Group, path: string): Parameter | null {
     const field = group.fields['density']
     if (field?.type !== 'density') return null
-    for (const key of ['density', 'exponent', 'reference', 'table']) this.#note(tree, key, key)
+    for (const key of ['density', 'exponent', 'reference', 'table', 'expression']) this.#note(tree, key, key)
     return this.reader.densities.read(tree, field.of, { path: `${this.owner.id}.${path}`, place: group.place })
   }
 

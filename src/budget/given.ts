@@ -31,7 +31,8 @@ export function isSlot(parameter: Parameter): parameter is Slot {
   return (
     typeof parameter === 'object' &&
     (typeof (parameter as { root?: unknown }).root === 'number' ||
-      typeof (parameter as { constant?: unknown }).constant === 'number')
+      typeof (parameter as { constant?: unknown }).constant === 'number' ||
+      ('formula' in parameter && !('density' in parameter)))
   )
 }
 

@@ -79,8 +79,6 @@ function tellUnknownKey(error: ErrorObject, pointed: Pointed): Told {
   const key = parameterOf(error, 'additionalProperty')
   const entry = pointed.tree.type === 'map' ? pointed.tree.entries.get(key) : undefined
   const place = entry?.keyPlace ?? headPlace(pointed)
-  if (key === 'expression')
-    return { code: 'not-yet', place, message: 'expressions are not part of format 1 yet; give `density` or a `table`' }
   const keys = keysOf(error)
   const message = `unknown key ${quoted(key)} in ${holder(pointed)}; allowed are ${listed(keys)}${suggestion(key, keys)}`
   return { code: 'unknown-key', place, message }

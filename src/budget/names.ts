@@ -1,29 +1,16 @@
+import { constantNames } from '../quantity/expression/constants.js'
+import { functionNames } from '../quantity/expression/functions.js'
+import { ownNames } from '../quantity/expression/names-in.js'
+
 /** What a parameter, component, contribution or port may be called. */
 export const idPattern = '^[a-z][a-z0-9_]{0,59}$'
 const id = new RegExp(idPattern)
 
-/** Names of constants and functions of the expression language. */
+/** Names of constants and functions of the expression language, and words of the file format. */
 const reserved: ReadonlySet<string> = new Set([
-  ...[
-    'pi',
-    'e',
-    'c',
-    'h',
-    'hbar',
-    'i',
-    'inf',
-    'nan',
-    'f',
-    'omega',
-    'k_b',
-    'g_n',
-    'm_u',
-    'm_e',
-    'e_charge',
-    'epsilon_0',
-  ],
-  ...['sqrt', 'exp', 'log', 'ln', 'log10', 'sin', 'cos', 'tan', 'asin', 'acos', 'atan', 'sinh', 'cosh', 'tanh', 'abs'],
-  ...['min', 'max', 'coth', 'pow', 'sinc', 'bessel', 'if', 'to', 'kind', 'of', 'value'],
+  ...[...constantNames, ...functionNames, ...ownNames],
+  ...['f', 'i', 'inf', 'nan', 'k_b', 'omega', 'log', 'pow', 'sinc', 'bessel', 'if', 'to'],
+  ...['kind', 'of', 'value', 'about', 'evidence', 'measured', 'distribution', 'effect'],
   // Words that every JavaScript object answers to.
   ...['constructor', 'prototype'],
 ])

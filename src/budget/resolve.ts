@@ -45,7 +45,7 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
   if (measurand !== null) checkMovedMass(measurand, components, issues)
   const revision = readRevision(child(root, 'revision'), issues)
   warnRequirements(child(root, 'requirements'), issues)
-  reader.values.warnUnused()
+  reader.values.finish()
   if (issues.failed || band === null || measurand === null || readout === null || revision === null) return null
   return {
     sensor: origin.sensor,
@@ -60,8 +60,8 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
     readoutPlace: readout.place,
     band,
     reference,
-    roots: reader.values.roots,
-    derived: [],
+    roots: reader.values.keeper.roots,
+    derived: reader.values.keeper.derived,
     correlations: [],
     requirements: [],
     variants: [],
@@ -81,7 +81,7 @@ interface Frame {
 
 function readerFor(root: Tree, { origin, band, directory }: Frame, issues: Issues): FieldReader {
   const values = new Values(child(root, 'parameters'), issues)
-  const densities = new DensityReader(values, new TableReader(origin.data, band, issues), issues)
+  const densities = new DensityReader(values, new TableReader(origin.data, band, issues), band, issues)
   return new FieldReader(values, densities, directory, issues)
 }
 

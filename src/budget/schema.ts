@@ -1,5 +1,6 @@
 import type { Declaration, DensityField, Exclusive, Field, Fields } from '../catalogue/declaration.js'
 import { declarations } from '../catalogue/declarations.js'
+import { distributions, effects } from './dispersion.js'
 import { idPattern, revisionPattern } from './names.js'
 
 /** A JSON Schema of the draft-07 subset that editors read best. */
@@ -12,25 +13,39 @@ export const formatVersion = 1
 const name = { type: 'string', pattern: idPattern }
 const text = { type: ['string', 'number'], minLength: 1, maxLength: 2000 }
 const longText = { type: ['string', 'number'], minLength: 1, maxLength: 20_000 }
+/** An expression may be longer than a quantity. */
+const value = { type: ['string', 'number'], minLength: 1, maxLength: 1000 }
 const short = { type: ['string', 'number'], minLength: 1, maxLength: 200 }
 const reference = (definition: string): Schema => ({ $ref: `#/definitions/${definition}` })
 
 /** What may stand around a quantity wherever one is allowed. */
 const around = {
-  value: { ...short, description: 'the quantity itself: 3.1(2) ng' },
+  value: { ...value, description: 'the quantity itself, 3.1(2) ng, or an expression: = sqrt(k/m)/(2*pi)' },
   about: { ...text, description: 'what it is' },
-  evidence: { ...text, description: 'what it rests on: a reference, a note, or `assumed`' },
+  evidence: {
+    ...text,
+    description: 'what it rests on: a key of references.bib (one word), a note (several), or `assumed`',
+  },
   measured: {
     type: 'string',
     pattern: '^[0-9]{4}-[0-9]{2}-[0-9]{2}$',
     description: 'date of the measurement: 2026-11-30',
+  },
+  distribution: {
+    enum: distributions,
+    description:
+      'what the uncertainty describes; behind ± stands the half width where it is rectangular or triangular, in brackets always the standard uncertainty',
+  },
+  effect: {
+    enum: effects,
+    description: 'statistical: repeating the measurement would average it down; systematic: it would not',
   },
 }
 
 const quantity: Schema = {
   type: ['string', 'number', 'object'],
   minLength: 1,
-  maxLength: 200,
+  maxLength: 1000,
   properties: around,
   required: ['value'],
   additionalProperties: false,
@@ -52,6 +67,7 @@ const densityKeys = {
   density: { ...reference('quantity'), description: 'level; its unit tells amplitude (N/√Hz) from power (N²/Hz)' },
   exponent: { ...reference('quantity'), description: 'exponent of the power density in frequency' },
   reference: { ...reference('quantity'), description: 'frequency at which the level holds' },
+  expression: { ...value, description: 'the density by the frequency f: = (2 aN/√Hz)*sqrt((1 kHz)/f)' },
   table: reference('table'),
 }
 
@@ -59,7 +75,7 @@ const densityKeys = {
 const lineKeys = {
   title: { ...text, description: 'its name on pages' },
   about: { ...longText, description: 'what it is' },
-  evidence: { ...text, description: 'what it rests on' },
+  evidence: { ...text, description: 'what it rests on: a key of references.bib, a note, or `assumed`' },
 }
 
 /** The schema of a budget file, from the catalogue's declarations alone. */
@@ -93,7 +109,16 @@ function rootProperties(): Schema {
     readout: { ...name, description: 'the detector whose record is read' },
     band: { ...short, type: 'string', description: 'where the budget is computed: 1.20 MHz to 1.30 MHz' },
     reference: { ...reference('quantity'), description: 'frequency at which headlines are given' },
-    parameters: { ...userMap(reference('quantity')), description: 'named values that fields can use' },
+    parameters: {
+      ...userMap(reference('quantity')),
+      description: 'named values that fields can use; `= …` derives one from others',
+    },
+    correlations: {
+      type: 'array',
+      maxItems: 200,
+      items: correlation,
+      description: 'pairs of parameters whose uncertainties share a cause',
+    },
     components: { ...userMap(reference('component')), minProperties: 1, description: 'parts of the signal path' },
     contributions: { ...userMap(reference('contribution')), description: 'the lines of the budget' },
     requirements: { ...userMap(reference('requirement')), description: 'bounds that the budget must meet' },
@@ -134,11 +159,19 @@ const measurand: Schema = {
 const requirement: Schema = {
   type: 'object',
   properties: {
-    of: { ...short, description: '`total`, a line, `margin.<limit>` or `occupancy.<mode>`' },
-    at: { ...short, description: 'a frequency' },
-    over: { ...short, description: 'a stretch of the band: 1.2 MHz to 1.3 MHz' },
-    below: short,
-    above: short,
+    of: { ...short, type: 'string', description: '`total`, a line, `margin.<limit>` or `occupancy.<mode>`' },
+    at: { ...short, description: 'the frequency at which it must hold' },
+    over: {
+      ...short,
+      type: 'string',
+      description: 'a stretch of the band, all of which must meet it: 1.2 MHz to 1.3 MHz',
+    },
+    below: {
+      ...short,
+      description: 'greatest value: an amplitude density, decibels of a margin, or a number of quanta',
+    },
+    above: { ...short, description: 'least value, likewise' },
+    about: { ...text, description: 'why it is required' },
   },
   required: ['of'],
   additionalProperties: false,
@@ -157,6 +190,17 @@ const variant: Schema = {
     },
   },
   required: ['changes'],
+  additionalProperties: false,
+}
+
+const correlation: Schema = {
+  type: 'object',
+  properties: {
+    between: { type: 'array', items: name, minItems: 2, maxItems: 2, description: 'two parameters: [mass, frequency]' },
+    coefficient: { ...short, description: 'correlation coefficient, from -1 to 1' },
+    about: { ...text, description: 'what they share' },
+  },
+  required: ['between', 'coefficient'],
   additionalProperties: false,
 }
 

@@ -1,9 +1,13 @@
-import type { Root, Slot } from '../model/budget.js'
+import type { Slot } from '../model/budget.js'
 import { QuantityError } from '../quantity/error.js'
-import { parseQuantity, type Quantity } from '../quantity/parse.js'
+import type { Quantity } from '../quantity/parse.js'
 import { amountOf, type Amount } from './amount.js'
+import { factorBetween, fit, type Fitted } from './convert.js'
+import { isExpression, parseWritten, type Checked } from './expression.js'
 import type { Issues } from './issues.js'
+import { Keeper } from './keeper.js'
 import { suggestion } from './nearest.js'
+import { ParameterTable, readQuantity, refuseSpread, wordPattern, type Parameter } from './parameters.js'
 import { quoted } from './quoted.js'
 import { rangeFault, type Range } from './range.js'
 import { placeWithin, type Tree, type TreeScalar } from './tree.js'
@@ -16,178 +20,145 @@ export interface Given {
   readonly power: boolean
 }
 
-/** Where a quantity stands: the path that names its root, and what it may be. */
+/** Where a quantity stands: the path that names its root (empty where it becomes none), and what it may be. */
 export interface Spot {
   readonly path: string
   readonly range: Range
 }
 
-interface Parameter {
-  readonly name: string
-  readonly amount: Amount
-  /** Null where its text is no quantity, which has been said. */
-  readonly quantity: Quantity | null
-  used: boolean
-  root: { readonly index: number; readonly converted: Converted } | null
-}
-
-/** The numbers of one budget: named parameters, and quantities written where they are used. */
+/** The numbers of one budget: named parameters, quantities and expressions written where they are used. */
 export class Values {
-  readonly roots: Root[] = []
-  readonly #parameters = new Map<string, Parameter>()
+  readonly parameters: ParameterTable
+  readonly keeper: Keeper
 
   constructor(
     parameters: Tree | undefined,
     readonly issues: Issues,
   ) {
-    if (parameters?.type !== 'map') return
-    for (const { key, value } of parameters.entries.values()) {
-      const amount = amountOf(value)
-      if (amount === null) continue
-      const quantity = this.#parseParameter(amount.scalar)
-      this.#parameters.set(key, { name: key, amount, quantity, used: false, root: null })
-    }
+    this.parameters = new ParameterTable(parameters, issues)
+    this.keeper = new Keeper(this.parameters, issues)
   }
 
   /** Reads what stands in a field; null where it is no such quantity, which has then been said. */
   read(tree: Tree | undefined, use: Use, spot: Spot): Given | null {
     const amount = amountOf(tree)
     if (amount === null || amount.scalar.text === '') return null
-    const given = wordPattern.test(amount.scalar.text) ? this.#named(amount, use) : this.#inline(amount, use, spot.path)
+    const given = this.#given(amount, use, spot.path)
     if (given === null) return null
     const fault = rangeFault(given.value, spot.range)
     if (fault === null) return given
-    this.issues.error('range', amount.scalar.place, `${this.#shown(amount.scalar.text)} ${fault}`)
+    const { scalar } = amount
+    this.issues.error('range', scalar.place, `${this.#shown(scalar.text, given)} ${fault}`)
     return null
   }
 
-  /** A quantity as it stands; a parameter with what stands for it. */
-  #shown(text: string): string {
-    const parameter = this.#parameters.get(text)?.amount.scalar
-    return parameter === undefined
-      ? quoted(text)
-      : `\`${text}\` (${quoted(parameter.text)}, line ${parameter.place.line})`
+  #given(amount: Amount, use: Use, path: string): Given | null {
+    const { text } = amount.scalar
+    if (isExpression(text)) return this.#expression(amount, use, path)
+    return wordPattern.test(text) ? this.#named(amount, use) : this.#inline(amount, use, path)
   }
 
-  /** A quantity that is no root of its own, or a parameter: the reference frequency. */
+  /** A quantity as it stands; a parameter with what stands for it; what an expression comes to. */
+  #shown(text: string, { value }: Given): string {
+    const written = this.parameters.all.get(text)?.amount.scalar
+    const origin = written === undefined ? '' : ` (${quoted(written.text)}, line ${written.place.line})`
+    const derived = isExpression(written?.text ?? text)
+    return `${quoted(text)}${origin}${derived ? ` comes to ${Number(value.toPrecision(4))} in SI units and` : ''}`
+  }
+
+  /** A number that is no root of its own, unless a parameter is: the reference frequency. */
   number(tree: Tree | undefined, use: Use, range: Range): number | null {
-    const before = this.roots.length
-    const given = this.read(tree, use, { path: '', range })
-    const amount = amountOf(tree)
-    if (amount !== null && !wordPattern.test(amount.scalar.text)) this.roots.length = before
-    return given?.value ?? null
+    return this.read(tree, use, { path: '', range })?.value ?? null
   }
 
-  warnUnused(): void {
-    for (const { name, amount, used } of this.#parameters.values()) {
-      if (used) continue
-      this.issues.warning(
-        'unused',
-        amount.scalar.place,
-        `the parameter \`${name}\` is not used; delete it or name it in a field`,
-      )
-    }
+  /** Once every field is read. */
+  finish(): void {
+    this.parameters.warnUnused()
+    this.keeper.finish()
   }
 
   valueOf(slot: Slot): number {
     if ('constant' in slot) return slot.constant
-    if ('formula' in slot)
-      return slot.formula.value(Float64Array.from(this.roots, root => root.value)) * (slot.scale ?? 1)
-    return (this.roots[slot.root]?.value ?? NaN) * (slot.scale ?? 1)
+    if ('formula' in slot) return slot.formula.value(this.keeper.rootValues()) * (slot.scale ?? 1)
+    return (this.keeper.roots[slot.root]?.value ?? NaN) * (slot.scale ?? 1)
   }
 
-  #parseParameter(scalar: TreeScalar): Quantity | null {
-    if (scalar.text === '') return null
-    if (!wordPattern.test(scalar.text)) return this.#parse(scalar)
-    this.issues.error(
-      'not-a-quantity',
-      scalar.place,
-      `${quoted(scalar.text)} is no quantity; a parameter has a number and a unit, such as \`3.1(2) ng\``,
-    )
-    return null
-  }
-
-  #parse(scalar: TreeScalar): Quantity | null {
-    if (expression.test(scalar.text)) {
-      this.issues.error('not-yet', scalar.place, 'expressions are not part of format 1 yet; write the number itself')
-      return null
-    }
-    return this.#attempt(scalar, () => parseQuantity(scalar.text))
-  }
-
-  /** The complaint of the quantity's grammar, at the character that it means. */
+  /** The complaint about a quantity, at the character that it means, or at a name with a remark on what it stands for. */
   #attempt<Result>(scalar: TreeScalar, work: () => Result, remark = ''): Result | null {
     try {
       return work()
     } catch (error) {
       if (!(error instanceof QuantityError)) throw error
-      this.issues.error(
-        'quantity',
-        remark === '' ? placeWithin(scalar, error.offset) : scalar.place,
-        error.message + remark,
-      )
+      const place = remark === '' ? placeWithin(scalar, error.offset) : scalar.place
+      this.issues.error('quantity', place, error.message + remark)
       return null
     }
   }
 
   #inline(amount: Amount, use: Use, path: string): Given | null {
-    const quantity = this.#parse(amount.scalar)
+    const quantity = readQuantity(amount.scalar, this.issues)
     if (quantity === null) return null
     const converted = this.#attempt(amount.scalar, () => use(quantity))
     if (converted === null) return null
-    return { slot: { root: this.#add(path, amount, converted) }, value: converted.value, power: converted.power }
+    const { value, power } = converted
+    if (path === '') return { slot: { constant: value }, value, power }
+    return { slot: { root: this.keeper.addRoot({ id: path, amount, quantity }, converted) }, value, power }
   }
 
-  #add(id: string, amount: Amount, converted: Converted): number {
-    const { about, evidence, measured, scalar } = amount
-    if (measured !== null && !isDate(measured))
-      this.issues.error('date', scalar.place, `\`measured\` says ${quoted(measured)}, which is no day of the calendar`)
-    const { value, uncertainty, dimension } = converted
-    this.roots.push({
-      id,
-      value,
-      uncertainty,
-      distribution: 'normal',
-      effect: 'statistical',
-      dimension,
-      text: scalar.text,
-      about,
-      evidence,
-      measured,
-      place: scalar.place,
-    })
-    return this.roots.length - 1
+  #expression(amount: Amount, use: Use, path: string): Given | null {
+    const checked = this.check(amount, false)
+    const fitted = checked === null ? null : this.fit(checked, use)
+    if (checked === null || fitted === null) return null
+    const formula = this.keeper.formula(checked, fitted.outcome)
+    const value = formula === null ? null : this.keeper.judged(() => formula.value(this.keeper.rootValues()))
+    if (formula === null || value === null) return null
+    if (path !== '') this.keeper.addDerived(path, amount, { formula, dimension: fitted.dimension })
+    return { slot: { formula }, value, power: fitted.power }
+  }
+
+  /** Reads an expression where it stands; null where it is wrong, which has been said. */
+  check(amount: Amount, withFrequency: boolean): Checked | null {
+    refuseSpread(amount, this.issues)
+    const written = parseWritten(amount.scalar, this.issues)
+    return written === null ? null : this.parameters.check(written, withFrequency)
+  }
+
+  /** How the value of an expression becomes that of a field; null where it is of another kind, which has been said. */
+  fit({ kind, scalar }: Checked, use: Use): Fitted | null {
+    return this.#attempt(scalar, () => fit(kind, scalar.text, use))
   }
 
   #named(amount: Amount, use: Use): Given | null {
     const { scalar } = amount
-    const parameter = this.#parameters.get(scalar.text)
+    const parameter = this.parameters.use(scalar.text)
     if (parameter === undefined) {
       this.issues.error('unknown-parameter', scalar.place, this.#unknown(scalar.text))
       return null
     }
-    parameter.used = true
-    if (amount.explained && (amount.about ?? amount.evidence ?? amount.measured) !== null)
-      this.issues.error(
-        'explained-twice',
-        scalar.place,
-        `\`${parameter.name}\` is a parameter: its \`about\`, \`evidence\` and \`measured\` stand in \`parameters\``,
-      )
-    const { quantity } = parameter
-    if (quantity === null) return null
-    const origin = parameter.amount.scalar.place
-    const converted = this.#attempt(
-      scalar,
-      () => use(quantity),
-      ` (parameter \`${parameter.name}\`, line ${origin.line})`,
-    )
-    return converted === null ? null : this.#reuse(parameter, converted, scalar)
+    this.#refuseSecondText(amount, parameter)
+    const { quantity, checked } = parameter
+    const remark = ` (parameter \`${parameter.name}\`, line ${parameter.amount.scalar.place.line})`
+    if (quantity !== null) {
+      const converted = this.#attempt(scalar, () => use(quantity), remark)
+      return converted === null ? null : this.#root({ parameter, quantity, scalar }, converted)
+    }
+    if (checked === null) return null
+    const text = parameter.amount.scalar.text
+    const fitted = this.#attempt(scalar, () => fit(checked.kind, text, use), remark)
+    return fitted === null ? null : this.#formula({ parameter, checked, scalar }, fitted)
+  }
+
+  #refuseSecondText(amount: Amount, { name }: Parameter): void {
+    const { about, evidence, measured, distribution, effect, explained, scalar } = amount
+    if (!explained || (about ?? evidence ?? measured ?? distribution ?? effect) === null) return
+    const message = `\`${name}\` is a parameter: its \`about\`, \`evidence\` and all else stand in \`parameters\``
+    this.issues.error('explained-twice', scalar.place, message)
   }
 
   #unknown(word: string): string {
     if (/^(?:yes|no|on|off|true|false|null|y|n)$/i.test(word))
       return `\`${word}\` is no quantity; write a number and its unit, such as \`3.1(2) ng\``
-    const names = [...this.#parameters.keys()]
+    const names = [...this.parameters.all.keys()]
     const known =
       names.length === 0
         ? 'the file has no `parameters`'
@@ -199,41 +170,48 @@ export class Values {
   }
 
   /** One root a parameter, in the unit of its first use; another use of the same number may count it in the other turn. */
-  #reuse(parameter: Parameter, converted: Converted, scalar: TreeScalar): Given | null {
-    const { value, power } = converted
-    if (parameter.root === null) {
-      parameter.root = { index: this.#add(parameter.name, parameter.amount, converted), converted }
-      return { slot: { root: parameter.root.index }, value, power }
+  #root({ parameter, quantity, scalar }: Named & { readonly quantity: Quantity }, converted: Converted): Given | null {
+    const { name, amount } = parameter
+    const { value, power, dimension } = converted
+    const kept = this.keeper.keptRoots.get(name)
+    if (kept === undefined) {
+      const root = this.keeper.addRoot({ id: name, amount, quantity }, converted)
+      this.keeper.keptRoots.set(name, { ...converted, index: root })
+      return { slot: { root }, value, power }
     }
-    const scale = scaleBetween(parameter.root.converted, converted)
-    if (scale === null) {
-      this.issues.error(
-        'two-uses',
-        scalar.place,
-        `\`${parameter.name}\` is used as ${parameter.root.converted.dimension} elsewhere and as ${converted.dimension} here; make two parameters of it`,
-      )
-      return null
+    const same = kept.value === value && kept.uncertainty === converted.uncertainty
+    const scale = factorBetween(kept.dimension, dimension) ?? (same ? 1 : null)
+    if (scale !== null) return { slot: scaled({ root: kept.index }, scale), value, power }
+    this.keeper.twoUses(name, scalar, [kept.dimension, dimension])
+    return null
+  }
+
+  #formula({ parameter, checked, scalar }: Named & { readonly checked: Checked }, fitted: Fitted): Given | null {
+    const { name, amount } = parameter
+    const { power, dimension, outcome } = fitted
+    const kept = this.keeper.keptFormulas.get(name)
+    const formula = kept?.formula ?? this.keeper.formula(checked, outcome)
+    const base = formula === null ? null : this.keeper.judged(() => formula.value(this.keeper.rootValues()))
+    if (formula === null || base === null) return null
+    if (kept === undefined) {
+      this.keeper.keptFormulas.set(name, { ...fitted, formula })
+      this.keeper.addDerived(name, amount, { formula, dimension })
+      return { slot: { formula }, value: base, power }
     }
-    const root = parameter.root.index
-    return { slot: scale === 1 ? { root } : { root, scale }, value, power }
+    const same = 'factor' in outcome && 'factor' in kept.outcome && outcome.factor === kept.outcome.factor
+    const scale = factorBetween(kept.dimension, dimension) ?? (same ? 1 : null)
+    if (scale !== null) return { slot: scaled({ formula }, scale), value: base * scale, power }
+    this.keeper.twoUses(name, scalar, [kept.dimension, dimension])
+    return null
   }
 }
 
-/** What starts a parameter's name and nothing else. */
-const wordPattern = /^[A-Za-z_][A-Za-z0-9_]*$/
-const expression = /^=|^[A-Za-z_]\w*\s*[*/+(^-]/
-
-/** Factor from the first use's unit to another's; null where the two uses do not mean proportional numbers. */
-function scaleBetween(first: Converted, other: Converted): number | null {
-  if (first.dimension === other.dimension) return 1
-  if (first.dimension === 'frequency' && other.dimension === 'rate') return 2 * Math.PI
-  if (first.dimension === 'rate' && other.dimension === 'frequency') return 1 / (2 * Math.PI)
-  return first.value === other.value && first.uncertainty === other.uncertainty ? 1 : null
+/** A parameter where a field names it. */
+interface Named {
+  readonly parameter: Parameter
+  readonly scalar: TreeScalar
 }
 
-/** Words that the schema has refused for their shape are none of this function's business. */
-function isDate(text: string): boolean {
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return true
-  const time = Date.parse(`${text}T00:00:00Z`)
-  return Number.isFinite(time) && new Date(time).toISOString().startsWith(text)
+function scaled(slot: Exclude<Slot, { readonly constant: number }>, scale: number): Slot {
+  return scale === 1 ? slot : { ...slot, scale }
 }

@@ -118,7 +118,13 @@ export type DensitySpec =
       readonly reference: Slot | null
     }
   | { readonly density: 'table'; readonly table: number }
-  | { readonly density: 'formula'; readonly power: boolean; readonly formula: Formula }
+  | {
+      readonly density: 'formula'
+      readonly power: boolean
+      readonly formula: Formula
+      /** As it stands in the file: `= (2 aN/√Hz)*sqrt((1 kHz)/f)`. */
+      readonly text: string
+    }
 
 /** Numbers from a file, already in canonical SI units, ascending in the first column. */
 export interface Table {

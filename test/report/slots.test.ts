@@ -14,7 +14,7 @@ const parameters: Parameters = {
   law: 'viscous',
   losses: new Map([['gas', { quality: { root: 2, scale: 3 }, law: 'structural' }]]),
   pump: { detuning: { constant: 0 } },
-  density: { density: 'formula', power: true, formula },
+  density: { density: 'formula', power: true, formula, text: '= 2*f' },
 }
 
 describe('numbers among parameters', () => {
