@@ -1,8 +1,10 @@
 import { formatProblem } from '../budget/format-problem.js'
+import type { Depth } from '../engine/assess.js'
 import type { Assessment } from '../model/assessment.js'
 import { Refusal, type Problem } from '../model/problem.js'
 import { failureOf, type Failure } from './failure.js'
 import { exitCodes, worst, type ExitCode, type Io } from './io.js'
+import { shortfalls } from './shortfall.js'
 import type { Target } from './targets.js'
 
 /** What became of one budget; one that is refused stops no other. */
@@ -15,14 +17,14 @@ export interface Outcome {
 }
 
 /** Reads and computes one budget. The engine is loaded here, once the call is known to be right. */
-export async function assessTarget(target: Target): Promise<Outcome> {
+export async function assessTarget(target: Target, depth: Depth): Promise<Outcome> {
   const { assess } = await import('../engine/assess.js')
   let read: readonly Problem[] = []
   try {
     const { budget, problems } = target.read()
     if (budget === null) throw new Refusal(problems)
     read = problems
-    const assessment = assess(budget)
+    const assessment = assess(budget, depth)
     return { target, assessment, failure: null, problems: each([...problems, ...assessment.warnings]) }
   } catch (error) {
     const failure = failureOf(error)
@@ -30,9 +32,9 @@ export async function assessTarget(target: Target): Promise<Outcome> {
   }
 }
 
-export async function assessAll(targets: readonly Target[]): Promise<readonly Outcome[]> {
+export async function assessAll(targets: readonly Target[], depth: Depth): Promise<readonly Outcome[]> {
   const outcomes: Outcome[] = []
-  for (const target of targets) outcomes.push(await assessTarget(target))
+  for (const target of targets) outcomes.push(await assessTarget(target, depth))
   return outcomes
 }
 
@@ -41,14 +43,19 @@ function each(problems: readonly Problem[]): readonly Problem[] {
   return [...new Map(problems.map(problem => [formatProblem(problem), problem])).values()]
 }
 
-/** Errors and warnings of every budget, one line each; the exit code of all. */
+/** Errors, warnings and missed requirements of every budget, one line each; the exit code of all. */
 export function reportOutcomes(outcomes: readonly Outcome[], io: Io): ExitCode {
-  for (const { problems, failure } of outcomes) {
-    reportProblems(problems, io)
+  for (const { problems, failure, assessment } of outcomes) {
+    reportProblems([...problems, ...(assessment === null ? [] : shortfalls(assessment))], io)
     // A fault of the engine has no place in the file.
     if (failure !== null && failure.problems.length === 0) for (const line of failure.lines) io.err(`${line}\n`)
   }
-  return worst(outcomes.map(outcome => outcome.failure?.code ?? exitCodes.fine))
+  return worst(outcomes.map(codeOf))
+}
+
+export function codeOf({ failure, assessment }: Outcome): ExitCode {
+  if (failure !== null) return failure.code
+  return assessment !== null && shortfalls(assessment).length > 0 ? exitCodes.short : exitCodes.fine
 }
 
 export function reportProblems(problems: readonly Problem[], io: Io): ExitCode {

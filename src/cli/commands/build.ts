@@ -19,7 +19,7 @@ export async function build(options: BuildOptions, io: Io): Promise<ExitCode> {
 
 /** What is wrong is printed after the site stands, so that it is what a person sees last. */
 export async function publishProject(project: Project, names: readonly string[], io: Io): Promise<ExitCode> {
-  const outcomes = await assessAll(targetsInside(project, names, io))
+  const outcomes = await assessAll(targetsInside(project, names, io), 'report')
   const { buildSite } = await import('../../site/build.js')
   const { pages, outputDir } = await buildSite({
     project: { root: project.root, title: project.site.title, date: dateOf(project.root) },

@@ -1,6 +1,6 @@
 import { terminalHeading } from '../../report/terminal.js'
-import { exitCodes, worst, type ExitCode, type Io } from '../io.js'
-import { assessAll, reportOutcomes, reportProblems, type Outcome } from '../outcome.js'
+import { worst, type ExitCode, type Io } from '../io.js'
+import { assessAll, codeOf, reportOutcomes, reportProblems, type Outcome } from '../outcome.js'
 import { projectAround, projectOf } from '../project.js'
 import { targetNamed, targetsInside } from '../targets.js'
 
@@ -17,7 +17,7 @@ export async function check(options: CheckOptions, io: Io): Promise<ExitCode> {
 
 async function checkAll(options: CheckOptions, io: Io): Promise<ExitCode> {
   const project = projectOf(options.root, io)
-  const outcomes = await assessAll(targetsInside(project, [], io))
+  const outcomes = await assessAll(targetsInside(project, [], io), 'glance')
   const code = worst([reportProblems(project.problems, io), reportOutcomes(outcomes, io)])
   print(outcomes, options, io)
   return code
@@ -26,7 +26,7 @@ async function checkAll(options: CheckOptions, io: Io): Promise<ExitCode> {
 async function checkNamed(options: CheckOptions, io: Io): Promise<ExitCode> {
   const project = projectAround(options.root, io)
   const targets = options.budgets.map(name => targetNamed(project, name, io))
-  const outcomes = await assessAll([...new Map(targets.map(target => [target.file, target])).values()])
+  const outcomes = await assessAll([...new Map(targets.map(target => [target.file, target])).values()], 'glance')
   const code = reportOutcomes(outcomes, io)
   print(outcomes, options, io)
   return code
@@ -44,13 +44,25 @@ function sentence({ target, assessment }: Outcome): string {
 }
 
 /** For machines: what a line says, with every number in SI units. */
-function finding({ target, assessment, failure, problems }: Outcome): object {
+function finding(outcome: Outcome): object {
+  const { target, assessment, failure, problems } = outcome
   const best = assessment?.headlines.best
   return {
     budget: target.name,
     file: target.file,
-    exitCode: failure?.code ?? exitCodes.fine,
+    exitCode: codeOf(outcome),
     best: best === undefined ? null : { frequency: best.frequency, asd: best.asd, unit: assessment?.unit },
+    requirements: (assessment?.requirements ?? []).map(
+      ({ requirement: { id, of, bound, value: wanted }, value, frequency, met }) => ({
+        id,
+        of,
+        bound,
+        wanted,
+        value,
+        frequency,
+        met,
+      }),
+    ),
     problems: problems.map(({ severity, code, place, message }) => ({ severity, code, ...place, message })),
     fault: failure !== null && failure.problems.length === 0 ? failure.lines.join('\n') : null,
   }

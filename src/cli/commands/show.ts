@@ -21,7 +21,9 @@ const sideBySide = 3
 /** Prints one budget: at its reference frequency or exactly where the call asks, as a table or as data. */
 export async function show(options: ShowOptions, io: Io): Promise<ExitCode> {
   const points = pointsAsked(options, io)
-  const outcome = await assessTarget(targetNamed(projectAround(options.root, io), options.budget, io))
+  const target = targetNamed(projectAround(options.root, io), options.budget, io)
+  // The published file has uncertainties at every point; a table shows none of them.
+  const outcome = await assessTarget(target, options.json ? 'report' : 'glance')
   const { assessment } = outcome
   if (assessment !== null) {
     const asked = points === null ? null : await evaluated(assessment, points)
