@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest'
-import { blockBytes, blockLength, loops, memory, type Loops } from '../../src/engine/loops.js'
+import type { Loops } from '../../src/engine/array-loops.js'
+import { blockBytes, blockLength, loops, memory } from '../../src/engine/loops.js'
 import { plainLoops } from '../../src/engine/plain-loops.js'
 import { seeded } from './promise.js'
 
