@@ -1,6 +1,6 @@
 import { QuantityError } from './error.js'
 
-const allowed = /^[\x20-\x7eµμΩ\u2126Å\u212b°·⋅∙×±−√πᐟ⁄½⁰¹²³⁴-⁹⁺⁻\u00a0\u2000-\u200a\u202f]$/u
+const allowed = /^[\x20-\x7eµμΩ\u2126Å\u212b°·⋅∙×±−√πΦ₀′″ᐟ⁄½⁰¹²³⁴-⁹⁺⁻\u00a0\u2000-\u200a\u202f]$/u
 
 /** Letters and signs of other scripts that look like the right ones, with what they are taken for. */
 const lookAlikes: ReadonlyMap<string, string> = new Map([

@@ -30,7 +30,7 @@ export function formatTex(value: number, unit: string, options: FormatOptions = 
   const shown = show(value, unit, options)
   const power = shown.ten === 0 ? '' : `\\times 10^{${shown.ten}}`
   const tex = unitTex(shown.unit)
-  const between = tex === '' || shown.unit.startsWith('°') ? '' : '\\,'
+  const between = tex === '' || /^(?:°(?!C)|[′″])/.test(shown.unit) ? '' : '\\,'
   return (shown.negative ? '-' : '') + shown.mantissa + power + between + tex
 }
 
@@ -142,7 +142,7 @@ function raised(exponent: number): string {
 
 function join(number: string, unit: string): string {
   if (unit === '' || unit === '1') return number
-  return unit.startsWith('°') ? number + unit : number + space + unit
+  return /^(?:°(?!C)|[′″])/.test(unit) ? number + unit : number + space + unit
 }
 
 function notFinite(value: number): string {

@@ -185,29 +185,38 @@ function peg$parse(input, options) {
   const peg$c8 = '\u221A'
   const peg$c9 = 'sqrt'
   const peg$c10 = '1'
-  const peg$c11 = '\xB0'
-  const peg$c12 = '%'
-  const peg$c13 = '\xBD'
-  const peg$c14 = '^'
-  const peg$c15 = '**'
-  const peg$c16 = '\xB1'
-  const peg$c17 = '+/-'
-  const peg$c18 = '+-'
-  const peg$c19 = '+'
-  const peg$c20 = '\u207A'
-  const peg$c21 = '\u207B'
+  const peg$c11 = 'Phi'
+  const peg$c12 = '_'
+  const peg$c13 = '\u03A6'
+  const peg$c14 = '\u2080'
+  const peg$c15 = '0'
+  const peg$c16 = 'rms'
+  const peg$c17 = 'pk'
+  const peg$c18 = 'pp'
+  const peg$c19 = '\xB0'
+  const peg$c20 = '\xBD'
+  const peg$c21 = '^'
+  const peg$c22 = '**'
+  const peg$c23 = '\xB1'
+  const peg$c24 = '+/-'
+  const peg$c25 = '+-'
+  const peg$c26 = '+'
+  const peg$c27 = '\u207A'
+  const peg$c28 = '\u207B'
 
   const peg$r0 = /^[0-9]/
   const peg$r1 = /^[eE]/
   const peg$r2 = /^[\xB7\u22C5\u2219\xD7]/
-  const peg$r3 = /^[CF]/
-  const peg$r4 = /^[\/\u141F\u2044]/
-  const peg$r5 = /^[\/\u2044]/
-  const peg$r6 = /^[\xD7\xB7\u22C5\u2219]/
-  const peg$r7 = /^[\-\u2212]/
-  const peg$r8 = /^[\u2070\xB9\xB2\xB3\u2074\u2075\u2076\u2077\u2078\u2079]/
-  const peg$r9 = /^[A-Za-z\xB5\u03BC\u03A9\u2126\xC5\u212B]/
-  const peg$r10 = /^[ \xA0\u2000-\u200A\u202F]/
+  const peg$r3 = /^[0\u2080]/
+  const peg$r4 = /^[CF]/
+  const peg$r5 = /^[%\u2032\u2033]/
+  const peg$r6 = /^[\/\u141F\u2044]/
+  const peg$r7 = /^[\/\u2044]/
+  const peg$r8 = /^[\xD7\xB7\u22C5\u2219]/
+  const peg$r9 = /^[\-\u2212]/
+  const peg$r10 = /^[\u2070\xB9\xB2\xB3\u2074\u2075\u2076\u2077\u2078\u2079]/
+  const peg$r11 = /^[A-Za-z\xB5\u03BC\u03A9\u2126\xC5\u212B]/
+  const peg$r12 = /^[ \xA0\u2000-\u200A\u202F]/
 
   const peg$e0 = peg$literalExpectation('\u03C0', false)
   const peg$e1 = peg$literalExpectation('pi', false)
@@ -223,35 +232,44 @@ function peg$parse(input, options) {
   const peg$e11 = peg$literalExpectation('\u221A', false)
   const peg$e12 = peg$literalExpectation('sqrt', false)
   const peg$e13 = peg$literalExpectation('1', false)
-  const peg$e14 = peg$literalExpectation('\xB0', false)
-  const peg$e15 = peg$classExpectation(['C', 'F'], false, false, false)
-  const peg$e16 = peg$literalExpectation('%', false)
-  const peg$e17 = peg$literalExpectation('\xBD', false)
-  const peg$e18 = peg$classExpectation(['/', '\u141F', '\u2044'], false, false, false)
-  const peg$e19 = peg$literalExpectation('^', false)
-  const peg$e20 = peg$literalExpectation('**', false)
-  const peg$e21 = peg$classExpectation(['/', '\u2044'], false, false, false)
-  const peg$e22 = peg$classExpectation(['\xD7', '\xB7', '\u22C5', '\u2219'], false, false, false)
-  const peg$e23 = peg$literalExpectation('\xB1', false)
-  const peg$e24 = peg$literalExpectation('+/-', false)
-  const peg$e25 = peg$literalExpectation('+-', false)
-  const peg$e26 = peg$literalExpectation('+', false)
-  const peg$e27 = peg$classExpectation(['-', '\u2212'], false, false, false)
-  const peg$e28 = peg$literalExpectation('\u207A', false)
-  const peg$e29 = peg$literalExpectation('\u207B', false)
-  const peg$e30 = peg$classExpectation(
+  const peg$e14 = peg$literalExpectation('Phi', false)
+  const peg$e15 = peg$literalExpectation('_', false)
+  const peg$e16 = peg$classExpectation(['0', '\u2080'], false, false, false)
+  const peg$e17 = peg$literalExpectation('\u03A6', false)
+  const peg$e18 = peg$literalExpectation('\u2080', false)
+  const peg$e19 = peg$literalExpectation('0', false)
+  const peg$e20 = peg$literalExpectation('rms', false)
+  const peg$e21 = peg$literalExpectation('pk', false)
+  const peg$e22 = peg$literalExpectation('pp', false)
+  const peg$e23 = peg$literalExpectation('\xB0', false)
+  const peg$e24 = peg$classExpectation(['C', 'F'], false, false, false)
+  const peg$e25 = peg$classExpectation(['%', '\u2032', '\u2033'], false, false, false)
+  const peg$e26 = peg$literalExpectation('\xBD', false)
+  const peg$e27 = peg$classExpectation(['/', '\u141F', '\u2044'], false, false, false)
+  const peg$e28 = peg$literalExpectation('^', false)
+  const peg$e29 = peg$literalExpectation('**', false)
+  const peg$e30 = peg$classExpectation(['/', '\u2044'], false, false, false)
+  const peg$e31 = peg$classExpectation(['\xD7', '\xB7', '\u22C5', '\u2219'], false, false, false)
+  const peg$e32 = peg$literalExpectation('\xB1', false)
+  const peg$e33 = peg$literalExpectation('+/-', false)
+  const peg$e34 = peg$literalExpectation('+-', false)
+  const peg$e35 = peg$literalExpectation('+', false)
+  const peg$e36 = peg$classExpectation(['-', '\u2212'], false, false, false)
+  const peg$e37 = peg$literalExpectation('\u207A', false)
+  const peg$e38 = peg$literalExpectation('\u207B', false)
+  const peg$e39 = peg$classExpectation(
     ['\u2070', '\xB9', '\xB2', '\xB3', '\u2074', '\u2075', '\u2076', '\u2077', '\u2078', '\u2079'],
     false,
     false,
     false,
   )
-  const peg$e31 = peg$classExpectation(
+  const peg$e40 = peg$classExpectation(
     [['A', 'Z'], ['a', 'z'], '\xB5', '\u03BC', '\u03A9', '\u2126', '\xC5', '\u212B'],
     false,
     false,
     false,
   )
-  const peg$e32 = peg$classExpectation([' ', '\xA0', ['\u2000', '\u200A'], '\u202F'], false, false, false)
+  const peg$e41 = peg$classExpectation([' ', '\xA0', ['\u2000', '\u200A'], '\u202F'], false, false, false)
 
   function peg$f0(pi, value) {
     return { pi, ...value }
@@ -1678,17 +1696,239 @@ function peg$parse(input, options) {
   }
 
   function peg$parseSymbol() {
-    let s0, s1, s2, s3
+    let s0, s1, s2, s3, s4, s5, s6, s7, s8
 
     s0 = peg$currPos
-    s1 = []
-    s2 = peg$parseLetter()
-    if (s2 !== peg$FAILED) {
-      while (s2 !== peg$FAILED) {
-        s1.push(s2)
-        s2 = peg$parseLetter()
+    s1 = peg$currPos
+    s2 = []
+    s3 = peg$currPos
+    s4 = peg$currPos
+    peg$silentFails++
+    s5 = peg$currPos
+    if (input.substr(peg$currPos, 3) === peg$c11) {
+      s6 = peg$c11
+      peg$currPos += 3
+    } else {
+      s6 = peg$FAILED
+      if (peg$silentFails === 0) {
+        peg$fail(peg$e14)
+      }
+    }
+    if (s6 !== peg$FAILED) {
+      if (input.charCodeAt(peg$currPos) === 95) {
+        s7 = peg$c12
+        peg$currPos++
+      } else {
+        s7 = peg$FAILED
+        if (peg$silentFails === 0) {
+          peg$fail(peg$e15)
+        }
+      }
+      if (s7 === peg$FAILED) {
+        s7 = null
+      }
+      s8 = input.charAt(peg$currPos)
+      if (peg$r3.test(s8)) {
+        peg$currPos++
+      } else {
+        s8 = peg$FAILED
+        if (peg$silentFails === 0) {
+          peg$fail(peg$e16)
+        }
+      }
+      if (s8 !== peg$FAILED) {
+        s6 = [s6, s7, s8]
+        s5 = s6
+      } else {
+        peg$currPos = s5
+        s5 = peg$FAILED
       }
     } else {
+      peg$currPos = s5
+      s5 = peg$FAILED
+    }
+    peg$silentFails--
+    if (s5 === peg$FAILED) {
+      s4 = undefined
+    } else {
+      peg$currPos = s4
+      s4 = peg$FAILED
+    }
+    if (s4 !== peg$FAILED) {
+      s5 = peg$parseLetter()
+      if (s5 !== peg$FAILED) {
+        s4 = [s4, s5]
+        s3 = s4
+      } else {
+        peg$currPos = s3
+        s3 = peg$FAILED
+      }
+    } else {
+      peg$currPos = s3
+      s3 = peg$FAILED
+    }
+    while (s3 !== peg$FAILED) {
+      s2.push(s3)
+      s3 = peg$currPos
+      s4 = peg$currPos
+      peg$silentFails++
+      s5 = peg$currPos
+      if (input.substr(peg$currPos, 3) === peg$c11) {
+        s6 = peg$c11
+        peg$currPos += 3
+      } else {
+        s6 = peg$FAILED
+        if (peg$silentFails === 0) {
+          peg$fail(peg$e14)
+        }
+      }
+      if (s6 !== peg$FAILED) {
+        if (input.charCodeAt(peg$currPos) === 95) {
+          s7 = peg$c12
+          peg$currPos++
+        } else {
+          s7 = peg$FAILED
+          if (peg$silentFails === 0) {
+            peg$fail(peg$e15)
+          }
+        }
+        if (s7 === peg$FAILED) {
+          s7 = null
+        }
+        s8 = input.charAt(peg$currPos)
+        if (peg$r3.test(s8)) {
+          peg$currPos++
+        } else {
+          s8 = peg$FAILED
+          if (peg$silentFails === 0) {
+            peg$fail(peg$e16)
+          }
+        }
+        if (s8 !== peg$FAILED) {
+          s6 = [s6, s7, s8]
+          s5 = s6
+        } else {
+          peg$currPos = s5
+          s5 = peg$FAILED
+        }
+      } else {
+        peg$currPos = s5
+        s5 = peg$FAILED
+      }
+      peg$silentFails--
+      if (s5 === peg$FAILED) {
+        s4 = undefined
+      } else {
+        peg$currPos = s4
+        s4 = peg$FAILED
+      }
+      if (s4 !== peg$FAILED) {
+        s5 = peg$parseLetter()
+        if (s5 !== peg$FAILED) {
+          s4 = [s4, s5]
+          s3 = s4
+        } else {
+          peg$currPos = s3
+          s3 = peg$FAILED
+        }
+      } else {
+        peg$currPos = s3
+        s3 = peg$FAILED
+      }
+    }
+    if (input.charCodeAt(peg$currPos) === 934) {
+      s3 = peg$c13
+      peg$currPos++
+    } else {
+      s3 = peg$FAILED
+      if (peg$silentFails === 0) {
+        peg$fail(peg$e17)
+      }
+    }
+    if (s3 === peg$FAILED) {
+      if (input.substr(peg$currPos, 3) === peg$c11) {
+        s3 = peg$c11
+        peg$currPos += 3
+      } else {
+        s3 = peg$FAILED
+        if (peg$silentFails === 0) {
+          peg$fail(peg$e14)
+        }
+      }
+    }
+    if (s3 !== peg$FAILED) {
+      if (input.charCodeAt(peg$currPos) === 8320) {
+        s4 = peg$c14
+        peg$currPos++
+      } else {
+        s4 = peg$FAILED
+        if (peg$silentFails === 0) {
+          peg$fail(peg$e18)
+        }
+      }
+      if (s4 === peg$FAILED) {
+        s4 = peg$currPos
+        if (input.charCodeAt(peg$currPos) === 95) {
+          s5 = peg$c12
+          peg$currPos++
+        } else {
+          s5 = peg$FAILED
+          if (peg$silentFails === 0) {
+            peg$fail(peg$e15)
+          }
+        }
+        if (s5 === peg$FAILED) {
+          s5 = null
+        }
+        if (input.charCodeAt(peg$currPos) === 48) {
+          s6 = peg$c15
+          peg$currPos++
+        } else {
+          s6 = peg$FAILED
+          if (peg$silentFails === 0) {
+            peg$fail(peg$e19)
+          }
+        }
+        if (s6 !== peg$FAILED) {
+          s5 = [s5, s6]
+          s4 = s5
+        } else {
+          peg$currPos = s4
+          s4 = peg$FAILED
+        }
+      }
+      if (s4 !== peg$FAILED) {
+        s5 = peg$currPos
+        peg$silentFails++
+        s6 = input.charAt(peg$currPos)
+        if (peg$r0.test(s6)) {
+          peg$currPos++
+        } else {
+          s6 = peg$FAILED
+          if (peg$silentFails === 0) {
+            peg$fail(peg$e5)
+          }
+        }
+        peg$silentFails--
+        if (s6 === peg$FAILED) {
+          s5 = undefined
+        } else {
+          peg$currPos = s5
+          s5 = peg$FAILED
+        }
+        if (s5 !== peg$FAILED) {
+          s2 = [s2, s3, s4, s5]
+          s1 = s2
+        } else {
+          peg$currPos = s1
+          s1 = peg$FAILED
+        }
+      } else {
+        peg$currPos = s1
+        s1 = peg$FAILED
+      }
+    } else {
+      peg$currPos = s1
       s1 = peg$FAILED
     }
     if (s1 !== peg$FAILED) {
@@ -1699,30 +1939,85 @@ function peg$parse(input, options) {
     if (s0 === peg$FAILED) {
       s0 = peg$currPos
       s1 = peg$currPos
-      if (input.charCodeAt(peg$currPos) === 176) {
-        s2 = peg$c11
-        peg$currPos++
+      s2 = []
+      s3 = peg$parseLetter()
+      if (s3 !== peg$FAILED) {
+        while (s3 !== peg$FAILED) {
+          s2.push(s3)
+          s3 = peg$parseLetter()
+        }
       } else {
         s2 = peg$FAILED
-        if (peg$silentFails === 0) {
-          peg$fail(peg$e14)
-        }
       }
       if (s2 !== peg$FAILED) {
-        s3 = input.charAt(peg$currPos)
-        if (peg$r3.test(s3)) {
-          peg$currPos++
+        s3 = []
+        s4 = peg$parseSpace()
+        if (s4 !== peg$FAILED) {
+          while (s4 !== peg$FAILED) {
+            s3.push(s4)
+            s4 = peg$parseSpace()
+          }
         } else {
           s3 = peg$FAILED
-          if (peg$silentFails === 0) {
-            peg$fail(peg$e15)
+        }
+        if (s3 !== peg$FAILED) {
+          if (input.substr(peg$currPos, 3) === peg$c16) {
+            s4 = peg$c16
+            peg$currPos += 3
+          } else {
+            s4 = peg$FAILED
+            if (peg$silentFails === 0) {
+              peg$fail(peg$e20)
+            }
           }
+          if (s4 === peg$FAILED) {
+            if (input.substr(peg$currPos, 2) === peg$c17) {
+              s4 = peg$c17
+              peg$currPos += 2
+            } else {
+              s4 = peg$FAILED
+              if (peg$silentFails === 0) {
+                peg$fail(peg$e21)
+              }
+            }
+            if (s4 === peg$FAILED) {
+              if (input.substr(peg$currPos, 2) === peg$c18) {
+                s4 = peg$c18
+                peg$currPos += 2
+              } else {
+                s4 = peg$FAILED
+                if (peg$silentFails === 0) {
+                  peg$fail(peg$e22)
+                }
+              }
+            }
+          }
+          if (s4 !== peg$FAILED) {
+            s5 = peg$currPos
+            peg$silentFails++
+            s6 = peg$parseLetter()
+            peg$silentFails--
+            if (s6 === peg$FAILED) {
+              s5 = undefined
+            } else {
+              peg$currPos = s5
+              s5 = peg$FAILED
+            }
+            if (s5 !== peg$FAILED) {
+              s2 = [s2, s3, s4, s5]
+              s1 = s2
+            } else {
+              peg$currPos = s1
+              s1 = peg$FAILED
+            }
+          } else {
+            peg$currPos = s1
+            s1 = peg$FAILED
+          }
+        } else {
+          peg$currPos = s1
+          s1 = peg$FAILED
         }
-        if (s3 === peg$FAILED) {
-          s3 = null
-        }
-        s2 = [s2, s3]
-        s1 = s2
       } else {
         peg$currPos = s1
         s1 = peg$FAILED
@@ -1733,13 +2028,68 @@ function peg$parse(input, options) {
         s0 = s1
       }
       if (s0 === peg$FAILED) {
-        if (input.charCodeAt(peg$currPos) === 37) {
-          s0 = peg$c12
-          peg$currPos++
+        s0 = peg$currPos
+        s1 = []
+        s2 = peg$parseLetter()
+        if (s2 !== peg$FAILED) {
+          while (s2 !== peg$FAILED) {
+            s1.push(s2)
+            s2 = peg$parseLetter()
+          }
         } else {
-          s0 = peg$FAILED
-          if (peg$silentFails === 0) {
-            peg$fail(peg$e16)
+          s1 = peg$FAILED
+        }
+        if (s1 !== peg$FAILED) {
+          s0 = input.substring(s0, peg$currPos)
+        } else {
+          s0 = s1
+        }
+        if (s0 === peg$FAILED) {
+          s0 = peg$currPos
+          s1 = peg$currPos
+          if (input.charCodeAt(peg$currPos) === 176) {
+            s2 = peg$c19
+            peg$currPos++
+          } else {
+            s2 = peg$FAILED
+            if (peg$silentFails === 0) {
+              peg$fail(peg$e23)
+            }
+          }
+          if (s2 !== peg$FAILED) {
+            s3 = input.charAt(peg$currPos)
+            if (peg$r4.test(s3)) {
+              peg$currPos++
+            } else {
+              s3 = peg$FAILED
+              if (peg$silentFails === 0) {
+                peg$fail(peg$e24)
+              }
+            }
+            if (s3 === peg$FAILED) {
+              s3 = null
+            }
+            s2 = [s2, s3]
+            s1 = s2
+          } else {
+            peg$currPos = s1
+            s1 = peg$FAILED
+          }
+          if (s1 !== peg$FAILED) {
+            s0 = input.substring(s0, peg$currPos)
+          } else {
+            s0 = s1
+          }
+          if (s0 === peg$FAILED) {
+            s0 = input.charAt(peg$currPos)
+            if (peg$r5.test(s0)) {
+              peg$currPos++
+            } else {
+              s0 = peg$FAILED
+              if (peg$silentFails === 0) {
+                peg$fail(peg$e25)
+              }
+            }
           }
         }
       }
@@ -1868,12 +2218,12 @@ function peg$parse(input, options) {
             s2 = null
           }
           if (input.charCodeAt(peg$currPos) === 189) {
-            s3 = peg$c13
+            s3 = peg$c20
             peg$currPos++
           } else {
             s3 = peg$FAILED
             if (peg$silentFails === 0) {
-              peg$fail(peg$e17)
+              peg$fail(peg$e26)
             }
           }
           if (s3 !== peg$FAILED) {
@@ -1897,12 +2247,12 @@ function peg$parse(input, options) {
           if (s2 !== peg$FAILED) {
             s3 = peg$currPos
             s4 = input.charAt(peg$currPos)
-            if (peg$r4.test(s4)) {
+            if (peg$r6.test(s4)) {
               peg$currPos++
             } else {
               s4 = peg$FAILED
               if (peg$silentFails === 0) {
-                peg$fail(peg$e18)
+                peg$fail(peg$e27)
               }
             }
             if (s4 !== peg$FAILED) {
@@ -2036,22 +2386,22 @@ function peg$parse(input, options) {
     let s0
 
     if (input.charCodeAt(peg$currPos) === 94) {
-      s0 = peg$c14
+      s0 = peg$c21
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e19)
+        peg$fail(peg$e28)
       }
     }
     if (s0 === peg$FAILED) {
-      if (input.substr(peg$currPos, 2) === peg$c15) {
-        s0 = peg$c15
+      if (input.substr(peg$currPos, 2) === peg$c22) {
+        s0 = peg$c22
         peg$currPos += 2
       } else {
         s0 = peg$FAILED
         if (peg$silentFails === 0) {
-          peg$fail(peg$e20)
+          peg$fail(peg$e29)
         }
       }
     }
@@ -2063,12 +2413,12 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r5.test(s0)) {
+    if (peg$r7.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e21)
+        peg$fail(peg$e30)
       }
     }
 
@@ -2079,12 +2429,12 @@ function peg$parse(input, options) {
     let s0, s1, s2, s3
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r6.test(s0)) {
+    if (peg$r8.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e22)
+        peg$fail(peg$e31)
       }
     }
     if (s0 === peg$FAILED) {
@@ -2137,32 +2487,32 @@ function peg$parse(input, options) {
     let s0
 
     if (input.charCodeAt(peg$currPos) === 177) {
-      s0 = peg$c16
+      s0 = peg$c23
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e23)
+        peg$fail(peg$e32)
       }
     }
     if (s0 === peg$FAILED) {
-      if (input.substr(peg$currPos, 3) === peg$c17) {
-        s0 = peg$c17
+      if (input.substr(peg$currPos, 3) === peg$c24) {
+        s0 = peg$c24
         peg$currPos += 3
       } else {
         s0 = peg$FAILED
         if (peg$silentFails === 0) {
-          peg$fail(peg$e24)
+          peg$fail(peg$e33)
         }
       }
       if (s0 === peg$FAILED) {
-        if (input.substr(peg$currPos, 2) === peg$c18) {
-          s0 = peg$c18
+        if (input.substr(peg$currPos, 2) === peg$c25) {
+          s0 = peg$c25
           peg$currPos += 2
         } else {
           s0 = peg$FAILED
           if (peg$silentFails === 0) {
-            peg$fail(peg$e25)
+            peg$fail(peg$e34)
           }
         }
       }
@@ -2176,12 +2526,12 @@ function peg$parse(input, options) {
 
     s0 = peg$currPos
     if (input.charCodeAt(peg$currPos) === 43) {
-      s1 = peg$c19
+      s1 = peg$c26
       peg$currPos++
     } else {
       s1 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e26)
+        peg$fail(peg$e35)
       }
     }
     if (s1 !== peg$FAILED) {
@@ -2192,12 +2542,12 @@ function peg$parse(input, options) {
     if (s0 === peg$FAILED) {
       s0 = peg$currPos
       s1 = input.charAt(peg$currPos)
-      if (peg$r7.test(s1)) {
+      if (peg$r9.test(s1)) {
         peg$currPos++
       } else {
         s1 = peg$FAILED
         if (peg$silentFails === 0) {
-          peg$fail(peg$e27)
+          peg$fail(peg$e36)
         }
       }
       if (s1 !== peg$FAILED) {
@@ -2215,12 +2565,12 @@ function peg$parse(input, options) {
 
     s0 = peg$currPos
     if (input.charCodeAt(peg$currPos) === 8314) {
-      s1 = peg$c20
+      s1 = peg$c27
       peg$currPos++
     } else {
       s1 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e28)
+        peg$fail(peg$e37)
       }
     }
     if (s1 !== peg$FAILED) {
@@ -2231,12 +2581,12 @@ function peg$parse(input, options) {
     if (s0 === peg$FAILED) {
       s0 = peg$currPos
       if (input.charCodeAt(peg$currPos) === 8315) {
-        s1 = peg$c21
+        s1 = peg$c28
         peg$currPos++
       } else {
         s1 = peg$FAILED
         if (peg$silentFails === 0) {
-          peg$fail(peg$e29)
+          peg$fail(peg$e38)
         }
       }
       if (s1 !== peg$FAILED) {
@@ -2256,24 +2606,24 @@ function peg$parse(input, options) {
     s1 = peg$currPos
     s2 = []
     s3 = input.charAt(peg$currPos)
-    if (peg$r8.test(s3)) {
+    if (peg$r10.test(s3)) {
       peg$currPos++
     } else {
       s3 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e30)
+        peg$fail(peg$e39)
       }
     }
     if (s3 !== peg$FAILED) {
       while (s3 !== peg$FAILED) {
         s2.push(s3)
         s3 = input.charAt(peg$currPos)
-        if (peg$r8.test(s3)) {
+        if (peg$r10.test(s3)) {
           peg$currPos++
         } else {
           s3 = peg$FAILED
           if (peg$silentFails === 0) {
-            peg$fail(peg$e30)
+            peg$fail(peg$e39)
           }
         }
       }
@@ -2298,12 +2648,12 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r9.test(s0)) {
+    if (peg$r11.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e31)
+        peg$fail(peg$e40)
       }
     }
 
@@ -2314,12 +2664,12 @@ function peg$parse(input, options) {
     let s0
 
     s0 = input.charAt(peg$currPos)
-    if (peg$r10.test(s0)) {
+    if (peg$r12.test(s0)) {
       peg$currPos++
     } else {
       s0 = peg$FAILED
       if (peg$silentFails === 0) {
-        peg$fail(peg$e32)
+        peg$fail(peg$e41)
       }
     }
 

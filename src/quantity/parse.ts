@@ -1,9 +1,11 @@
 import { checkCharacters } from './characters.js'
-import { scaled, smallestNormal } from './decimal.js'
+import { isCelsius, readCelsius } from './celsius.js'
+import { scaled } from './decimal.js'
 import { dimensionOf, type Dimension } from './dimension.js'
-import { QuantityError } from './error.js'
+import { QuantityError, sliceOf } from './error.js'
 import { GrammarError, parseQuantityTree, parseUnitTree } from './grammar.js'
-import { add, negate, one, type Rational } from './rational.js'
+import { levelUnit, readLevel } from './level.js'
+import { add, negate, one, zero, type Rational } from './rational.js'
 import { checkSlips } from './slips.js'
 import { settleSpread } from './spread.js'
 import type { QuantityNode } from './tree.js'
@@ -22,8 +24,16 @@ export interface Quantity {
   readonly text: string
   /** `aN/√Hz`; empty for a bare number. */
   readonly unitText: string
-  /** What one of the written unit is in the coherent SI unit. */
+  /** What one of the written unit is in the coherent SI unit; of a level, what it is at 0. */
   readonly unitFactor: number
+  /** Radians that it carries: 1 for `90°`, 2 for `rad²/Hz`. */
+  readonly angle: Rational
+  /** The symbol of the level that it was written in: `dBm`, `dBc` of `dBc/Hz`; null elsewhere. */
+  readonly level: string | null
+  /** The value where a difference is meant: 20 for `20 °C`, whose value is 293.15; the value itself elsewhere. */
+  readonly difference: number
+  /** True for the result of an expression, whose unit nobody wrote. */
+  readonly computed?: true
 }
 
 /** A quantity is at most this long, in UTF-16 units. */
@@ -32,13 +42,13 @@ export const longestQuantity = 200
 /**
  * Reads a quantity: `3.1(2) ng`, `5.2 MHz ± 1 %`, `2π × 3 MHz`, `3e-16 m/Hz^(1/2)`.
  * Digits in brackets count in the last digits of the number, or are the uncertainty itself when they hold a point
- * (JCGM 100:2008, 7.2.2). Hz carries one cycle and π carries cycle⁻¹.
+ * (JCGM 100:2008, 7.2.2). Hz carries one cycle and π carries cycle⁻¹. A level becomes what it is the level of:
+ * `-60 dBm` is 1 nW, `-150 dBm/Hz` in W/Hz, `-120 dBV/√Hz` 1 µV/√Hz, `-120 dBc/Hz` and `dB/Hz` 1e-12 1/Hz; a bare `dB`
+ * stays a level. `20 °C` is 293.15 K, and its `difference` 20 K. `V pk` is 1/√2 of `V rms`, which is `V`.
  * Throws a QuantityError that names the piece and what would be right.
  */
 export function parseQuantity(text: string): Quantity {
   checkText(text)
-  const level = readPowerLevel(text)
-  if (level !== null) return level
   return meaningOfQuantity(readTree(text, parseQuantityTree), text)
 }
 
@@ -92,6 +102,24 @@ function unreadable(text: string, offset: number): QuantityError {
 }
 
 function meaningOfQuantity(tree: QuantityNode, text: string): Quantity {
+  const node = tree.unit ?? tree.deviation?.unit ?? null
+  const level = node === null ? null : levelUnit(node, text)
+  if (node !== null && level !== null) {
+    const { symbol, reference, dimension, cycles } = level
+    const { value, uncertainty } = readLevel(tree, level, text)
+    const unit = { dimension, cycles, angle: zero, unitText: sliceOf(node, text), unitFactor: reference }
+    return { value, uncertainty, ...unit, text: text.trim(), level: symbol, difference: value }
+  }
+  if (node !== null && isCelsius(node)) {
+    const unit = { dimension: kelvin, cycles: zero, angle: zero, unitText: sliceOf(node, text), unitFactor: 1 }
+    return { ...readCelsius(tree, text), ...unit, text: text.trim(), level: null }
+  }
+  return linear(tree, text)
+}
+
+const kelvin = dimensionOf({ temperature: 1 })
+
+function linear(tree: QuantityNode, text: string): Quantity {
   const spread = settleSpread(tree, text)
   const unit = spread.unit === null ? unity : meaningOfUnit(spread.unit, text)
   const shift = tree.ten?.power ?? 0
@@ -107,37 +135,15 @@ function meaningOfQuantity(tree: QuantityNode, text: string): Quantity {
     dimension: unit.dimension,
     cycles: tree.pi === null ? unit.cycles : add(unit.cycles, negate(one)),
     text: text.trim(),
-    unitText: spread.unit === null ? '' : text.slice(spread.unit.start, spread.unit.end),
+    unitText: spread.unit === null ? '' : sliceOf(spread.unit, text),
     unitFactor: factorOf(unit),
+    angle: unit.angle,
+    level: null,
+    difference: value,
   }
 }
 
 function checkRange(value: number, uncertainty: number, text: string): void {
   if (Number.isFinite(value) && Number.isFinite(uncertainty)) return
   throw new QuantityError(`\`${text.trim()}\` is beyond the numbers that are read, 1.7e308 in SI units`, 0, text.length)
-}
-
-/** `-60 dBm` is a power: 1 mW · 10^(L/10). */
-function readPowerLevel(text: string): Quantity | null {
-  const found = /^(.*\d\)?)\s*dBm\s*$/su.exec(text)
-  if (found === null) return null
-  const level = meaningOfQuantity(readTree(found[1], parseQuantityTree), found[1])
-  if (level.unitText !== '' || level.cycles.numerator !== 0) return null
-  const value = 1e-3 * 10 ** (level.value / 10)
-  if (!Number.isFinite(value) || value < smallestNormal) {
-    throw new QuantityError(
-      `\`${text.trim()}\` is beyond the numbers that are read; write a power such as \`-60 dBm\``,
-      0,
-      text.length,
-    )
-  }
-  return {
-    ...level,
-    value,
-    uncertainty: ((value * Math.LN10) / 10) * level.uncertainty,
-    dimension: dimensionOf({ mass: 1, length: 2, time: -3 }),
-    text: text.trim(),
-    unitText: 'dBm',
-    unitFactor: 1e-3,
-  }
 }

@@ -8,6 +8,11 @@ interface Slip {
 
 const slips: readonly Slip[] = [
   {
+    pattern: /\d\s*(?:''|['"])/,
+    message: piece =>
+      `\`${piece}\`: minutes and seconds of arc are written \`′\` and \`″\`, or \`arcmin\` and \`arcsec\``,
+  },
+  {
     pattern: /\d+(?:,\d{3}){2,}(?!\d)/,
     message: piece => `\`${piece}\`: digits are not grouped by commas; write \`${piece.replaceAll(',', '')}\``,
   },

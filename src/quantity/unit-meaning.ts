@@ -1,8 +1,9 @@
-import { dimensionless, multiplyDimensions, raiseDimension, type Dimension } from './dimension.js'
+import { dimensionless, dimensionOf, multiplyDimensions, raiseDimension, type Dimension } from './dimension.js'
 import { QuantityError, refusePiece } from './error.js'
 import { readExponent } from './exponent.js'
 import { add, multiply, negate, one, rational, toNumber, toText, zero, type Rational } from './rational.js'
 import type { PowerNode, Span, TermNode, UnitNode } from './tree.js'
+import { isLevelSymbol } from './level-table.js'
 import { suggestUnits } from './suggest.js'
 import { lookUpUnit } from './units.js'
 
@@ -13,9 +14,11 @@ export interface Unit {
   readonly ten: Rational
   readonly dimension: Dimension
   readonly cycles: Rational
+  /** Radians that it carries: 1 for `rad` and `°`, 2 for `rad²/Hz`. */
+  readonly angle: Rational
 }
 
-export const unity: Unit = { factor: 1, ten: zero, dimension: dimensionless, cycles: zero }
+export const unity: Unit = { factor: 1, ten: zero, dimension: dimensionless, cycles: zero, angle: zero }
 
 const half = rational(1, 2)
 
@@ -84,22 +87,34 @@ function meaningOfTerm(node: TermNode, text: string): Unit {
 
 function meaningOfSymbol(symbol: string, span: Span, text: string): Unit {
   const unit = lookUpUnit(symbol)
-  if (unit !== null) return { ...unit, ten: rational(unit.ten) }
-  const place: Span = { start: span.start, end: span.start + symbol.length }
-  if (symbol === '°C' || symbol === '°F') {
-    throw refusePiece(place, text, 'has a zero point of its own; write the temperature in `K`')
+  if (unit !== null) {
+    const { factor, ten, dimension, cycles, angle } = unit
+    return { factor, ten: rational(ten), dimension, cycles, angle }
   }
-  if (symbol === 'dBm')
-    throw refusePiece(place, text, 'stands alone behind its number, such as `-60 dBm`; write other units in `W`')
-  if (symbol === 'sqrt') throw refusePiece(place, text, 'wants brackets; write `sqrt(Hz)` or `√Hz`')
+  // Within a larger unit a degree Celsius is a difference: `3 mV/°C`.
+  if (symbol === '°C') return { ...unity, dimension: kelvin }
+  throw refusePiece({ start: span.start, end: span.start + symbol.length }, text, remedyFor(symbol))
+}
+
+const kelvin = dimensionOf({ temperature: 1 })
+
+/** What to write for a symbol that is none, going on behind it. */
+function remedyFor(symbol: string): string {
+  if (symbol === '°F') return 'has a zero point of its own; write the temperature in `K` or `°C`'
+  if (isLevelSymbol(symbol)) {
+    return `stands first in its unit, right behind its number, such as \`-60 ${symbol}\``
+  }
+  if (symbol === 'sqrt') return 'wants brackets; write `sqrt(Hz)` or `√Hz`'
+  if (symbol === 'e') return 'is no unit, as it would be read as a power of ten; the elementary charge is written `qe`'
+  if (symbol === 'ppt') return 'means 1e-12 to some and 1e-3 to others; write the number itself'
+  const swing = /(?:rms|pk|pp)$/.exec(symbol)?.[0]
+  if (swing !== undefined) {
+    return `is not a known unit; \`${swing}\` stands right behind the unit of an oscillation, such as \`mV ${swing}\` or \`nm ${swing}\``
+  }
   const suggestion = suggestUnits(symbol)
-  throw refusePiece(
-    place,
-    text,
-    suggestion === null
-      ? 'is not a known unit; write SI units, such as `ng` or `aN/√Hz`'
-      : `is not a known unit; write ${suggestion}`,
-  )
+  return suggestion === null
+    ? 'is not a known unit; write SI units, such as `ng` or `aN/√Hz`'
+    : `is not a known unit; write ${suggestion}`
 }
 
 function meaningOfPower(node: PowerNode, text: string): Rational {
@@ -118,6 +133,7 @@ function times(a: Unit, b: Unit): Unit {
     ten: add(a.ten, b.ten),
     dimension: multiplyDimensions(a.dimension, b.dimension),
     cycles: add(a.cycles, b.cycles),
+    angle: add(a.angle, b.angle),
   }
 }
 
@@ -128,5 +144,6 @@ function raise(a: Unit, power: Rational): Unit {
     ten: multiply(a.ten, power),
     dimension: raiseDimension(a.dimension, power),
     cycles: multiply(a.cycles, power),
+    angle: multiply(a.angle, power),
   }
 }

@@ -33,9 +33,18 @@ function power(node: PowerNode | null): string {
 
 /** KaTeX has no upright micro sign: `\mu` is the nearest. The degree sign is a raised ring. */
 function symbolTex(symbol: string): string {
-  if (symbol === '%') return '\\%'
-  if (symbol === 'Å') return '\\text{Å}'
-  if (symbol === '°') return '{}^{\\circ}'
-  const [, micro, letters, ohm] = /^(µ?)(.*?)(Ω?)$/u.exec(symbol) ?? ['', '', symbol, '']
-  return (micro && '\\mu ') + (letters && `\\mathrm{${letters}}`) + (ohm && '\\Omega')
+  const special = specialTex.get(symbol)
+  if (special !== undefined) return special
+  const [, micro, letters, greek] = /^(µ?)(.*?)(Ω?|Φ₀?)$/u.exec(symbol) ?? ['', '', symbol, '']
+  const upright = letters && `\\mathrm{${letters.replace(/\s+/u, '\\,')}}`
+  return (micro && '\\mu ') + upright + (greek === '' ? '' : greek === 'Ω' ? '\\Omega' : '\\Phi_0')
 }
+
+const specialTex: ReadonlyMap<string, string> = new Map([
+  ['%', '\\%'],
+  ['Å', '\\text{Å}'],
+  ['°', '{}^{\\circ}'],
+  ['°C', '{}^{\\circ}\\mathrm{C}'],
+  ['′', "{}'"],
+  ['″', "{}''"],
+])

@@ -1,5 +1,6 @@
-import { dimensionless, dimensionOf, type Dimension } from './dimension.js'
-import { one, zero, type Rational } from './rational.js'
+import type { Dimension } from './dimension.js'
+import type { Rational } from './rational.js'
+import { unitEntries, type UnitEntry } from './unit-table.js'
 
 /** One symbol, prefix included: 1 of it is factor · 10^ten of the coherent SI unit. */
 export interface UnitMeaning {
@@ -11,15 +12,9 @@ export interface UnitMeaning {
   readonly dimension: Dimension
   /** How many cycles it carries: 1 for the hertz alone. */
   readonly cycles: Rational
+  /** How many radians it carries: 1 for angles. */
+  readonly angle: Rational
   /** True where prefixes may stand before the base. */
-  readonly prefixable: boolean
-}
-
-interface Entry {
-  readonly factor: number
-  readonly ten: number
-  readonly dimension: Dimension
-  readonly cycles: Rational
   readonly prefixable: boolean
 }
 
@@ -51,116 +46,54 @@ export const prefixes: ReadonlyMap<string, number> = new Map([
   ['q', -30],
 ])
 
-const si = (dimension: Dimension, factor = 1, ten = 0): Entry => ({
-  factor,
-  ten,
-  dimension,
-  cycles: zero,
-  prefixable: true,
-})
-const fixed = (dimension: Dimension, factor = 1, ten = 0): Entry => ({
-  ...si(dimension, factor, ten),
-  prefixable: false,
-})
-
-const length = dimensionOf({ length: 1 })
-const time = dimensionOf({ time: 1 })
-const rate = dimensionOf({ time: -1 })
-const mass = dimensionOf({ mass: 1 })
-const force = dimensionOf({ mass: 1, length: 1, time: -2 })
-const energy = dimensionOf({ mass: 1, length: 2, time: -2 })
-const pressure = dimensionOf({ mass: 1, length: -1, time: -2 })
-const acceleration = dimensionOf({ length: 1, time: -2 })
-const voltage = dimensionOf({ mass: 1, length: 2, time: -3, current: -1 })
-const resistance = dimensionOf({ mass: 1, length: 2, time: -3, current: -2 })
-const fluxDensity = dimensionOf({ mass: 1, time: -2, current: -1 })
-const dose = dimensionOf({ length: 2, time: -2 })
-
-// Exact by definition (SI Brochure, 9th edition, tables 2, 4 and 8) unless a comment says otherwise.
-const entries: ReadonlyMap<string, Entry> = new Map<string, Entry>([
-  ['m', si(length)],
-  ['g', si(mass, 1, -3)],
-  ['s', si(time)],
-  ['A', si(dimensionOf({ current: 1 }))],
-  ['K', si(dimensionOf({ temperature: 1 }))],
-  ['mol', si(dimensionOf({ amount: 1 }))],
-  ['cd', si(dimensionOf({ intensity: 1 }))],
-  ['rad', si(dimensionless)],
-  ['sr', si(dimensionless)],
-  ['Hz', { ...si(rate), cycles: one }],
-  ['N', si(force)],
-  ['Pa', si(pressure)],
-  ['J', si(energy)],
-  ['W', si(dimensionOf({ mass: 1, length: 2, time: -3 }))],
-  ['C', si(dimensionOf({ current: 1, time: 1 }))],
-  ['V', si(voltage)],
-  ['F', si(dimensionOf({ mass: -1, length: -2, time: 4, current: 2 }))],
-  ['Ω', si(resistance)],
-  ['ohm', si(resistance)],
-  ['S', si(dimensionOf({ mass: -1, length: -2, time: 3, current: 2 }))],
-  ['Wb', si(dimensionOf({ mass: 1, length: 2, time: -2, current: -1 }))],
-  ['T', si(fluxDensity)],
-  ['H', si(dimensionOf({ mass: 1, length: 2, time: -2, current: -2 }))],
-  ['lm', si(dimensionOf({ intensity: 1 }))],
-  ['lx', si(dimensionOf({ intensity: 1, length: -2 }))],
-  ['Bq', si(rate)],
-  ['Gy', si(dose)],
-  ['Sv', si(dose)],
-  ['kat', si(dimensionOf({ amount: 1, time: -1 }))],
-  ['min', fixed(time, 60)],
-  ['h', fixed(time, 3600)],
-  ['d', fixed(time, 86400)],
-  ['L', si(dimensionOf({ length: 3 }), 1, -3)],
-  ['l', si(dimensionOf({ length: 3 }), 1, -3)],
-  ['t', si(mass, 1, 3)],
-  ['eV', si(energy, 1.602176634e-19)],
-  // CODATA 2022: 1.660 539 068 92(52) × 10⁻²⁷ kg.
-  ['u', si(mass, 1.66053906892e-27)],
-  ['Da', si(mass, 1.66053906892e-27)],
-  ['bar', si(pressure, 1, 5)],
-  ['atm', fixed(pressure, 101325)],
-  // One standard atmosphere over 760.
-  ['Torr', si(pressure, 101325 / 760)],
-  ['torr', si(pressure, 101325 / 760)],
-  // Standard gravity, 3rd CGPM (1901); `g` is the gram.
-  ['gn', si(acceleration, 9.80665)],
-  ['Gal', si(acceleration, 1, -2)],
-  ['dyn', si(force, 1, -5)],
-  ['erg', si(energy, 1, -7)],
-  ['G', si(fluxDensity, 1, -4)],
-  ['Å', fixed(length, 1, -10)],
-  ['°', fixed(dimensionless, Math.PI / 180)],
-  ['deg', fixed(dimensionless, Math.PI / 180)],
-  ['arcmin', fixed(dimensionless, Math.PI / 180 / 60)],
-  ['arcsec', fixed(dimensionless, Math.PI / 180 / 3600)],
-  ['%', fixed(dimensionless, 1, -2)],
-  ['ppm', fixed(dimensionless, 1, -6)],
-  ['ppb', fixed(dimensionless, 1, -9)],
-  ['quanta', fixed(dimensionless)],
-  ['photons', fixed(dimensionless)],
-  ['phonons', fixed(dimensionless)],
-  ['dB', fixed(dimensionOf({ level: 1 }))],
-])
-
-/** Makes one spelling of the twin code points: both micro signs, both ohms, both ångströms. */
+/** Makes one spelling of twin code points (both micro signs, ohms, ångströms) and of the flux quantum. */
 export function canonicalSymbol(symbol: string): string {
-  return symbol.replaceAll('\u03bc', '\u00b5').replaceAll('\u2126', '\u03a9').replaceAll('\u212b', '\u00c5')
+  return symbol
+    .replaceAll('\u03bc', '\u00b5')
+    .replaceAll('\u2126', '\u03a9')
+    .replaceAll('\u212b', '\u00c5')
+    .replace(/(?:Φ|Phi)(?:₀|_?0)$/u, 'Φ₀')
 }
+
+/**
+ * Behind the unit of an oscillation, in root mean square: its amplitude is √2 and its whole swing 2√2 times as much,
+ * as instruments mean them, for a sine.
+ */
+const swings: ReadonlyMap<string, number> = new Map([
+  ['rms', 1],
+  ['pk', Math.SQRT1_2],
+  ['pp', Math.SQRT1_2 / 2],
+])
 
 /** The meaning of one unit symbol with or without a prefix; null where there is none. */
 export function lookUpUnit(written: string): UnitMeaning | null {
   const symbol = canonicalSymbol(written)
-  const whole = entries.get(symbol)
-  if (whole !== undefined) return { ...whole, base: symbol, prefix: '' }
+  const swing = /^(.*?)([ \u00a0\u2000-\u200a\u202f]*)(rms|pk|pp)$/u.exec(symbol)
+  if (swing === null) return plainMeaning(symbol)
+  const [, base, space, word] = swing
+  const meaning = plainMeaning(base)
+  const joined = space === '' && !/[VA]$/.test(base)
+  if (meaning === null || joined || !unitEntries.get(meaning.base)?.varies) return plainMeaning(symbol)
+  return { ...meaning, factor: meaning.factor * (swings.get(word) ?? 1), base: meaning.base + space + word }
+}
+
+function plainMeaning(symbol: string): UnitMeaning | null {
+  const whole = unitEntries.get(symbol)
+  if (whole !== undefined) return meaningOf(whole, symbol, '')
   for (const [prefix, power] of prefixes) {
     const base = symbol.slice(prefix.length)
-    const entry = symbol.startsWith(prefix) ? entries.get(base) : undefined
-    if (entry?.prefixable) return { ...entry, base, prefix, ten: entry.ten + power }
+    const entry = symbol.startsWith(prefix) ? unitEntries.get(base) : undefined
+    if (entry?.prefixable) return meaningOf({ ...entry, ten: entry.ten + power }, base, prefix)
   }
   return null
 }
 
+function meaningOf(entry: UnitEntry, base: string, prefix: string): UnitMeaning {
+  const { factor, ten, dimension, cycles, angle, prefixable } = entry
+  return { base, prefix, factor, ten, dimension, cycles, angle, prefixable }
+}
+
 /** All symbols without prefix, and whether one may stand before them. */
 export function unitSymbols(): { readonly symbol: string; readonly prefixable: boolean }[] {
-  return [...entries].map(([symbol, { prefixable }]) => ({ symbol, prefixable }))
+  return [...unitEntries].map(([symbol, { prefixable }]) => ({ symbol, prefixable }))
 }

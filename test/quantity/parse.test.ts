@@ -98,6 +98,46 @@ const readings: readonly (readonly [string, Reading])[] = [
   ['0 dBm', { value: 1e-3, unit: 'm^2 kg s^-3' }],
   ['-60 dBm', { value: 1e-9, unit: 'm^2 kg s^-3' }],
   ['1.7e308', { value: 1.7e308 }],
+  ['-150 dBm/Hz', { value: 1e-18, unit: 'm^2 kg s^-2', cycles: '-1' }],
+  ['-150 dBm Hz⁻¹', { value: 1e-18, unit: 'm^2 kg s^-2', cycles: '-1' }],
+  ['-30 dBW', { value: 1e-3, unit: 'm^2 kg s^-3' }],
+  ['-120 dBV', { value: 1e-6, unit: 'm^2 kg s^-3 A^-1' }],
+  ['-120 dBV/√Hz', { value: 1e-6, unit: 'm^2 kg s^(-5/2) A^-1', cycles: '-1/2' }],
+  ['-120 dBV²/Hz', { value: 1e-12, unit: 'm^4 kg^2 s^-5 A^-2', cycles: '-1' }],
+  ['60 dBµV', { value: 1e-3, unit: 'm^2 kg s^-3 A^-1' }],
+  ['-120 dBc/Hz', { value: 1e-12, unit: 's', cycles: '-1' }],
+  ['-120 dB/Hz', { value: 1e-12, unit: 's', cycles: '-1' }],
+  ['-30 dBc', { value: 1e-3 }],
+  ['0.2 dB/km', { value: 2e-4, unit: 'm^-1 dB' }],
+  ['2 B', { value: 20, unit: 'dB' }],
+  ['1 Np', { value: 20 / Math.LN10, unit: 'dB' }],
+  ['20 °C', { value: 293.15, unit: 'K' }],
+  ['20.0(5) °C', { value: 293.15, uncertainty: 0.5, unit: 'K' }],
+  ['20.0 °C ± 0.5 K', { value: 293.15, uncertainty: 0.5, unit: 'K' }],
+  ['20.0 ± 0.5 °C', { value: 293.15, uncertainty: 0.5, unit: 'K' }],
+  ['(20.0 ± 0.5) °C', { value: 293.15, uncertainty: 0.5, unit: 'K' }],
+  ['-273.15 °C', { value: 0, unit: 'K' }],
+  ['3 mV/°C', { value: 3e-3, unit: 'm^2 kg s^-3 A^-1 K^-1' }],
+  ['1 au', { value: 149597870700, unit: 'm' }],
+  ['2 ha', { value: 2e4, unit: 'm^2' }],
+  ['30′', { value: (30 * Math.PI) / 180 / 60 }],
+  ['30″', { value: (30 * Math.PI) / 180 / 3600 }],
+  ['2 V rms', { value: 2, unit: 'm^2 kg s^-3 A^-1' }],
+  ['2 mVrms', { value: 2e-3, unit: 'm^2 kg s^-3 A^-1' }],
+  ['2 V pk', { value: 2 * Math.SQRT1_2, unit: 'm^2 kg s^-3 A^-1' }],
+  ['2 Vpp', { value: Math.SQRT1_2, unit: 'm^2 kg s^-3 A^-1' }],
+  ['2 nm pk', { value: 2e-9 * Math.SQRT1_2, unit: 'm' }],
+  ['2 Vpk²/Hz', { value: 2 * Math.SQRT1_2 ** 2, unit: 'm^4 kg^2 s^-5 A^-2', cycles: '-1' }],
+  ['2 V rms/√Hz', { value: 2, unit: 'm^2 kg s^(-5/2) A^-1', cycles: '-1/2' }],
+  [
+    '3 µΦ₀/√Hz',
+    { value: (3e-6 * 6.62607015e-34) / (2 * 1.602176634e-19), unit: 'm^2 kg s^(-3/2) A^-1', cycles: '-1/2' },
+  ],
+  ['1 Phi0', { value: 6.62607015e-34 / (2 * 1.602176634e-19), unit: 'm^2 kg s^-2 A^-1' }],
+  ['1 Φ_0', { value: 6.62607015e-34 / (2 * 1.602176634e-19), unit: 'm^2 kg s^-2 A^-1' }],
+  ['10 µqe/√Hz', { value: 10e-6 * 1.602176634e-19, unit: 's^(3/2) A', cycles: '-1/2' }],
+  ['5 counts/s', { value: 5, unit: 's^-1' }],
+  ['3 ppb', { value: 3e-9 }],
 ]
 
 describe('spellings of a quantity', () => {
@@ -116,6 +156,21 @@ test('text, unit and factor stay beside the value', () => {
   expect(quantity.text).toBe('2π × 3.0(1) MHz')
   expect(quantity.unitText).toBe('MHz')
   expect(quantity.unitFactor).toBe(1e6)
+})
+
+test('a level per kilohertz is spread over a thousand hertz', () => {
+  expect(parseQuantity('-120 dBm/kHz').value / parseQuantity('-150 dBm/Hz').value).toBeCloseTo(1, 14)
+})
+
+test('levels, angles and Celsius are remembered', () => {
+  expect(parseQuantity('-120 dBc/Hz').level).toBe('dBc')
+  expect(parseQuantity('3 dB').level).toBeNull()
+  expect(parseQuantity('20 °C').difference).toBe(20)
+  expect(parseQuantity('20 K').difference).toBe(20)
+  expect(toText(parseQuantity('3 µrad²/Hz').angle)).toBe('2')
+  expect(toText(parseQuantity('3 °/√Hz').angle)).toBe('1')
+  expect(parseQuantity('-60 dBm ± 1 dB').uncertainty).toBe(parseQuantity('-60(1) dBm').uncertainty)
+  expect(parseQuantity('(-60 ± 1) dBm').uncertainty).toBe(parseQuantity('-60(1) dBm').uncertainty)
 })
 
 test('the uncertainty of a level in dBm goes with its slope', () => {
