@@ -1,5 +1,6 @@
 import { Command, type OutputConfiguration } from 'commander'
 import { visible } from '../budget/format-problem.js'
+import { starterList } from '../budget/starters.js'
 import { version } from './version.js'
 import type { ExitCode, Io } from './io.js'
 
@@ -28,6 +29,7 @@ export function program(io: Io, done: Done): Command {
   addCheck(root, io, done)
   addShow(root, io, done)
   addServe(root, io, done)
+  addNew(root, io, done)
   return root
 }
 
@@ -113,5 +115,20 @@ function addServe(root: Command, io: Io, done: Done): void {
     .action(async (_options: object, command: Command) => {
       const { serve } = await import('./commands/serve.js')
       done(await serve(command.optsWithGlobals<Global & { port?: string }>(), io))
+    })
+}
+
+function addNew(root: Command, io: Io, done: Done): void {
+  root
+    .command('new')
+    .summary('write the first budget of a new sensor')
+    .description('Writes budgets/<sensor>/budget.yaml: a budget that builds at once, with every value assumed.')
+    .argument('<sensor>', 'name of the new folder below budgets/')
+    .requiredOption('--like <kind>', 'what the sensor is like; one of those below')
+    .addHelpText('after', () => `\n${starterList()}`)
+    .helpOption('--help', 'print this help')
+    .action(async (sensor: string, _options: object, command: Command) => {
+      const { newBudget } = await import('./commands/new.js')
+      done(newBudget({ ...command.optsWithGlobals<Global & { like: string }>(), sensor }, io))
     })
 }
