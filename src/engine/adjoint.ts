@@ -179,8 +179,15 @@ export function adjoint(tape: Tape, network: Network): Adjoint {
   }
 }
 
-/** t = w·b + direct, the transfer of an injection to the record. */
-export function transfer(row: readonly Form[], injection: Injection, withDirect: boolean): Form {
+/**
+ * t = w·b + direct, the transfer of an injection to the record. Where it enters one row, that element of w is written out first, so that
+ * sources which enter the same row through different ports share one array; over several rows it stays a form, in which what cancels cancels.
+ */
+export function transfer(tape: Tape, row: readonly Form[], injection: Injection, withDirect: boolean): Form {
   const start = withDirect ? constantForm(injection.direct) : zeroForm
-  return injection.rows.reduce((sum, { row: r, value }) => addForms(sum, scaleForm(row[r], value)), start)
+  const alone = injection.rows.length === 1
+  return injection.rows.reduce((sum, { row: r, value }) => {
+    const element = alone ? tape.single(row[r]) : row[r]
+    return addForms(sum, scaleForm(element, value))
+  }, start)
 }

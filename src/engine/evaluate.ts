@@ -16,18 +16,29 @@ import { Tape } from './tape.js'
 export interface Wanted {
   readonly sources: boolean
   readonly limits: boolean
+  /** Amplitude densities of the total and of the lines beside the power densities. */
+  readonly amplitudes?: boolean
 }
 
 /** Makes one curve after a run: addresses of registers are turned into arrays in the order in which they were planned. */
 class Harvest {
   readonly addresses: number[] = []
+  readonly planned: (readonly Real[])[] = []
   #next = 0
   #arrays: Float64Array[] = []
 
   constructor(readonly tape: Tape) {}
 
   plan(...terms: Real[]): void {
+    this.planned.push(terms)
     this.addresses.push(this.tape.written(terms))
+  }
+
+  /** Amplitude densities of the total, which was planned first, and of lines that were planned from `first` on. */
+  planRoots(first: number, lines: number): void {
+    for (const terms of [this.planned[0], ...this.planned.slice(first, first + lines)]) {
+      this.addresses.push(this.tape.written([this.tape.root(this.tape.sum(terms))]))
+    }
   }
 
   planParts({ imprecision, backAction, correlation }: RealParts): void {
@@ -61,11 +72,12 @@ export class Evaluator {
   readonly #sources: readonly Source[]
   readonly #lines: readonly LinePlan[]
   readonly #limits: readonly LimitPlan[]
+  readonly #amplitudes: boolean
 
   constructor(budget: Pick<Budget, 'lines'>, network: Network, wanted: Wanted) {
     const tape = new Tape()
     const rows = adjoint(tape, network)
-    const response = transfer(rows.full, network.measurand, true)
+    const response = transfer(tape, rows.full, network.measurand, true)
     const inverseResponse = tape.inverseAbs2(response)
     const all = new Map(network.sources.map(s => [s, new SourceDensities(tape, s, rows, inverseResponse)]))
     this.#harvest = new Harvest(tape)
@@ -80,6 +92,8 @@ export class Evaluator {
     for (const source of this.#sources) this.#planSource(all.get(source)!)
     for (const limit of this.#limits) this.#harvest.plan(limit.psd)
     this.#harvest.plan(tape.abs2(response))
+    this.#amplitudes = wanted.amplitudes === true
+    if (this.#amplitudes) this.#harvest.planRoots(2, this.#lines.length)
   }
 
   #planSource(densities: SourceDensities): void {
@@ -119,6 +133,7 @@ export class Evaluator {
       })),
       limits: this.#limits.map(({ psd: _, ...limit }) => ({ ...limit, psd: h.take() })),
       response: h.take(),
+      ...(this.#amplitudes && { asd: { total: h.take(), lines: this.#lines.map(() => h.take()) } }),
     }
   }
 }

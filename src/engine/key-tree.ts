@@ -3,12 +3,13 @@ export type Key = readonly (string | number)[]
 
 /** Keys without turning numbers into text, which would take longer than a small evaluation. */
 export class KeyTree {
-  readonly #branches = new Map<string | number, KeyTree>()
+  #branches: Map<string | number, KeyTree> | null = null
   address = -1
 
   find(key: Key): KeyTree {
     let node: KeyTree = this
     for (const part of key) {
+      node.#branches ??= new Map()
       let next = node.#branches.get(part)
       if (next === undefined) {
         next = new KeyTree()

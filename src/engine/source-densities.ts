@@ -26,9 +26,9 @@ export class SourceDensities {
     rows: Adjoint,
     private readonly inverseResponse: Real,
   ) {
-    this.#full = source.nodes.map(node => transfer(rows.full, node, true))
-    this.#clamped = source.nodes.map(node => transfer(rows.clamped, node, true))
-    this.#moved = source.nodes.map(node => transfer(rows.moved, node, false))
+    this.#full = source.nodes.map(node => transfer(tape, rows.full, node, true))
+    this.#clamped = source.nodes.map(node => transfer(tape, rows.clamped, node, true))
+    this.#moved = source.nodes.map(node => transfer(tape, rows.moved, node, false))
     this.#shape = shapeReal(tape, source.shape)
   }
 

@@ -19,7 +19,7 @@ import type { GridArrays } from './grid-arrays.js'
 import { KeyTree, type Key } from './key-tree.js'
 import { blockBytes, blockCapacity, blockLength, loops } from './loops.js'
 import { copyIn } from './registers.js'
-import { arrayKey, constantReal, mergeReals, realZero, registerReal, scaleReal, type Real } from './real.js'
+import { arrayKey, constantReal, gridReal, mergeReals, realZero, registerReal, scaleReal, type Real } from './real.js'
 
 /** What a step is given at each block. */
 export interface Block {
@@ -93,7 +93,14 @@ export class Tape {
     return form
   }
 
-  /** The form as one register with a scale in front; one with more terms is written to a register of its own. */
+  /** The form as one register with a scale in front, or a constant. */
+  single(form: Form): Form {
+    if (isConstant(form) || isSingle(form)) return form
+    const { register, scale } = this.#single(form)
+    return scaleForm(registerForm(register), scale)
+  }
+
+  /** The same as a term; a form with more terms is written to a register of its own. */
   #single(form: Form): Term {
     if (isSingle(form)) return form.terms[0]
     const exact = this.#withoutCancellation(form)
@@ -207,9 +214,17 @@ export class Tape {
 
   /** |a|. */
   modulus(a: Form): Real {
-    const square = this.abs2(a)
+    return this.root(this.abs2(a))
+  }
+
+  /** √a of a real, NaN where it is negative. The scale is taken out, so that what differs by a factor alone shares one root. */
+  root(square: Real): Real {
     if (square.array.kind === 'one') return constantReal(Math.sqrt(square.scale))
-    const address = this.#address(square)
+    if (square.array.kind === 'grid') {
+      const { key, of } = square.array
+      return gridReal(Math.sqrt(square.scale), `root ${key}`, grid => grid.root(of(grid)))
+    }
+    const { address } = square.array
     const real = this.real(
       ['root', address],
       out =>

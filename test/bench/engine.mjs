@@ -8,7 +8,7 @@ import { fileURLToPath } from 'node:url'
 
 const at = name => new URL(`../../dist/engine/${name}.js`, import.meta.url).href
 const { assemble } = await import(at('assemble'))
-const { Arena, amplitude } = await import(at('arena'))
+const { Arena } = await import(at('arena'))
 const { Evaluator } = await import(at('evaluate'))
 const { absolutePoints } = await import(at('points'))
 
@@ -105,13 +105,13 @@ const budget = {
 const grid = absolutePoints(
   Float64Array.from({ length: points }, (_, i) => numbers.low * (numbers.high / numbers.low) ** (i / (points - 1))),
 )
-const [curves, roots] = [new Arena(), new Arena()]
+const arena = new Arena()
 
 /** One evaluation from the budget's numbers: the network, its tape, all curves, their amplitude densities. */
 function evaluate() {
-  const evaluation = new Evaluator(budget, assemble(budget), { sources: false, limits: false }).at(grid, curves)
-  roots.reset()
-  return [evaluation.total, ...evaluation.lines.map(l => l.psd)].map(psd => amplitude(psd, roots.take(points)))
+  const wanted = { sources: false, limits: false, amplitudes: true }
+  const { asd } = new Evaluator(budget, assemble(budget), wanted).at(grid, arena)
+  return [asd.total, ...asd.lines]
 }
 
 function timed() {
