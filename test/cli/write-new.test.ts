@@ -20,6 +20,6 @@ describe('a disk that is full', () => {
   ])('leaves %s behind', (_what, files: Record<string, string>, left) => {
     const budgets = join(throwaway(files), 'budgets')
     expect(() => writeNew(budgets, 'tern', 'format: 1\n')).toThrow(full)
-    expect(readdirSync(budgets, { recursive: true }).toSorted()).toEqual(left)
+    expect(readdirSync(budgets, { recursive: true, encoding: 'utf8' }).map(String).sort()).toEqual(left)
   })
 })
