@@ -6,8 +6,8 @@ import { child, type Tree, type TreeEntry, type TreeMap } from './tree.js'
 
 const sections = ['parameters', 'components', 'contributions', 'requirements'] as const
 
-/** Keys of a budget that hold one word or quantity and may be changed. */
-const plainKeys: ReadonlySet<string> = new Set(['readout', 'reference'])
+/** Keys of a budget that hold no map and may be changed. */
+const plainKeys: ReadonlySet<string> = new Set(['readout', 'reference', 'correlations'])
 
 /** Why a key of a budget stays as it is in every variant. */
 const kept: ReadonlyMap<string, string> = new Map([
@@ -71,7 +71,7 @@ function fromRoot({ key, value }: TreeEntry, root: TreeMap): readonly string[] |
   const [first = '', ...rest] = steps
   if (steps.includes('')) return null
   if (sections.some(section => section === first)) return steps
-  if (plainKeys.has(first) && rest.length === 0 && value.type === 'scalar') return steps
+  if (plainKeys.has(first) && rest.length === 0 && value.type !== 'map') return steps
   const section = sections.slice(0, 3).find(each => child(child(root, each), first) !== undefined)
   if (section !== undefined) return [section, ...steps]
   return kept.has(first) ? [first] : null

@@ -41,7 +41,7 @@ describe('a budget that builds on another', () => {
   })
 
   it.each(['2.4e8', '{ value: 2.4e8 }'])('does not rest a new value, %s, on the evidence of the old', value => {
-    const old = '{ value: 2.4e7, about: decay, evidence: ringdown, measured: 2026-03-14 }'
+    const old = '{ value: 2.4e7, about: decay, evidence: ringdown of May, measured: 2026-03-14 }'
     const more = { 'budgets/drum/budget.yaml': small.replace('2.4e7', old) }
     const budget = tern(`${head}components: { drum: { quality: ${value} } }\n`, more)
     const quality = { text: '2.4e8', about: 'decay', evidence: null, measured: null }
