@@ -45,8 +45,8 @@ const texts = {
 /** The limits of a network, referred to the measurand like a displacement of the sensed coordinate. */
 export function planLimits(tape: Tape, network: Network, adjoint: Adjoint, inverseResponse: Real): LimitPlan[] {
   const { sensing } = network
-  const coordinate = transfer(adjoint.full, sensing.injection, true)
   const chi = bareResponse(tape, network)
+  const coordinate = coordinateTransfer(tape, network, adjoint, chi)
   if (isZeroForm(chi) || isZeroForm(coordinate)) return []
   const referred = (displacement: Real): Real =>
     tape.product(displacement, tape.product(tape.abs2(coordinate), inverseResponse))
@@ -62,21 +62,37 @@ export function planLimits(tape: Tape, network: Network, adjoint: Adjoint, inver
   return limits
 }
 
+/**
+ * R_x, what the record makes of a displacement of the sensed coordinate. Where the light is far stiffer than a mode at its resonance, the
+ * motion undoes the displacement, and in clamped + moved all digits cancel: with one cavity it is the clamped transfer over 1 − k_opt χ_s.
+ */
+function coordinateTransfer(tape: Tape, network: Network, adjoint: Adjoint, chi: Form): Form {
+  const { light, injection } = network.sensing
+  if (light === null || network.cavities.length !== 1) return transfer(tape, adjoint.full, injection, true)
+  const stiffness = transfer(tape, adjoint.clampedRow(light), injection, false)
+  return tape.divide(transfer(tape, adjoint.clamped, injection, true), loopForm(tape, stiffness, chi))
+}
+
+/** 1 − k_opt χ_s. */
+function loopForm(tape: Tape, stiffness: Form, chi: Form): Form {
+  return addForms(constantForm({ re: 1, im: 0 }), negateForm(tape.multiply(stiffness, chi)))
+}
+
 /** ħ²|1 − k_opt χ_s|²/S_F^ba as a displacement [Braginsky, Khalili 1992; Tsang et al. 2011]; null without light. */
 function energyBound(tape: Tape, network: Network, adjoint: Adjoint, chi: Form): Real | null {
   const { light, injection } = network.sensing
   if (light === null) return null
   const row = adjoint.clampedRow(light)
-  const stiffness = transfer(row, injection, false)
+  const stiffness = transfer(tape, row, injection, false)
   const force = network.sources
     .filter(source => source.parted && source.nodes.some(node => node.rows.length > 0))
     .flatMap(source => {
-      const t = source.nodes.map(node => transfer(row, node, false))
+      const t = source.nodes.map(node => transfer(tape, row, node, false))
       return [source.vacuum, ...(source.heating === null ? [] : [source.heating])].map(block =>
         quadratic(tape, t, block),
       )
     })
-  const loop = addForms(constantForm({ re: 1, im: 0 }), negateForm(tape.multiply(stiffness, chi)))
+  const loop = loopForm(tape, stiffness, chi)
   const shaken = tape.sum(force)
   if (shaken.scale === 0) return null
   return tape.ratio(tape.product(constantReal(hbar * hbar), tape.abs2(loop)), shaken)
