@@ -52,11 +52,13 @@ const noise = (id: string, kind: string, into: string, given: DensitySpec): Line
   claims: { kind, parameters: { into, density: given }, places: new Map() },
 })
 
-const table = {
+const table: Table = {
   file: 'test',
   place,
   frequency: Float64Array.of(5e2, 2e4, 2.1e4, 1e6, 1e10),
   psd: Float64Array.of(1e-30, 1e-34, 1e-29, 1e-36, 1e-38),
+  averages: null,
+  outside: 'refuse',
 }
 
 /** Budgets that a grid may stumble over, each with the most points it may take. */

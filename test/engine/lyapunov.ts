@@ -1,7 +1,7 @@
-import { all, create, type BigNumber } from 'mathjs'
 import { Matrix } from 'ml-matrix'
 import { reducedPlanckConstant as hbar } from '../../src/physics/constants.js'
 import { occupancy } from '../../src/physics/quanta.js'
+import { bignumber, eliminate } from './forty-digits.js'
 import type { ReadoutOf } from './readout-of.js'
 
 /** Mode and light as dz/dt = A z + noise over (q₁, p₁, q₂, p₂ …, X, Y), quadratures with the vacuum variance ½. */
@@ -53,8 +53,6 @@ export function driftOf({ modes, coupling, ports, quanta, detuning = 0 }: Readou
   return { drift, diffusion }
 }
 
-const { bignumber } = create(all, { number: 'BigNumber', precision: 40 })
-
 /**
  * Covariance P of A P + P Aᵀ = −D, as one linear system for the elements on and above the diagonal in 40 digits: its condition is the
  * ratio of the fastest and the slowest rate squared, which leaves too few of sixteen.
@@ -73,35 +71,13 @@ export function covarianceOf({ drift, diffusion }: Drift): Matrix {
     }
     return [...row, bignumber(-diffusion.get(i, j))]
   })
-  const solution = eliminate(rows)
+  const solution = eliminate(rows).map(row => row[0])
   const covariance = Matrix.zeros(size, size)
   for (const [n, [i, j]] of pairs.entries()) {
     covariance.set(i, j, solution[n].toNumber())
     covariance.set(j, i, solution[n].toNumber())
   }
   return covariance
-}
-
-/** Solves rows with their right-hand side behind them, by elimination with row exchanges. */
-function eliminate(rows: BigNumber[][]): BigNumber[] {
-  const n = rows.length
-  for (let k = 0; k < n; k++) {
-    let best = k
-    for (let i = k + 1; i < n; i++) if (rows[i][k].abs().gt(rows[best][k].abs())) best = i
-    ;[rows[k], rows[best]] = [rows[best], rows[k]]
-    for (let i = k + 1; i < n; i++) {
-      if (rows[i][k].isZero()) continue
-      const factor = rows[i][k].div(rows[k][k])
-      for (let j = k; j <= n; j++) if (!rows[k][j].isZero()) rows[i][j] = rows[i][j].minus(factor.times(rows[k][j]))
-    }
-  }
-  const x: BigNumber[] = []
-  for (let k = n - 1; k >= 0; k--) {
-    let sum = rows[k][n]
-    for (let j = k + 1; j < n; j++) sum = sum.minus(rows[k][j].times(x[j]))
-    x[k] = sum.div(rows[k][k])
-  }
-  return x
 }
 
 /** n_f = (⟨q²⟩ + ⟨p²⟩)/2 − ½ of each mode. */

@@ -16,7 +16,7 @@ const turn = 2 * Math.PI
 
 function statesOf(budget: Budget): ModeState[] {
   const { network, poles } = prepare(budget)
-  return modeStates(network, poles)
+  return modeStates(budget, network, { poles, changes: null })
 }
 
 /** A drum of a picogram in a cavity, all frequencies and rates in Hz. */

@@ -164,6 +164,35 @@ describe('zero-point noise', () => {
   } as const
 })
 
+describe('standard quantum limit of one mode and a force', () => {
+  // Identity 2ħ|χ⁻¹| with the bare χ whatever the light does; 1e-12 is rounding. The last light is 2e8 times as stiff as the mode at its
+  // resonance, which must not cost eight digits.
+  test.each([
+    ['viscous', 0, 1e2],
+    ['structural', -3e6, 1e4],
+    ['viscous', -3e6, 1e9],
+  ] as const)('%s, detuning %s rad/s, %s quanta', (law, detuning, quanta) => {
+    const drum = { ...mode, quality: 1e9, law }
+    const readout = resonant(4e7, { modes: { drum }, detuning, quanta, record: 1 })
+    const width = drum.frequency / drum.quality
+    const offsets = [-0.9e6, -100, -width, 0, width / 2, 1, 5e6]
+    const evaluation = evaluateAtFrequencies(
+      readoutOf(readout),
+      offsets.map(offset => drum.frequency + offset),
+    )
+    for (const [i, psd] of limit(evaluation, 'sql').entries()) {
+      const f = evaluation.points.frequency[i]
+      const offset = evaluation.points.offset[i]
+      const loss = law === 'viscous' ? (f * drum.frequency) / drum.quality : drum.frequency ** 2 / drum.quality
+      const stiffness = drum.mass * turn ** 2 * Math.hypot(offset * (f + drum.frequency), loss)
+      const anchored = evaluation.points.anchors[evaluation.points.anchor[i]].frequency === drum.frequency
+      if (anchored) expect(psd / (2 * hbar * stiffness)).toBeCloseTo(1, 12)
+    }
+    const anchors = new Set([...evaluation.points.anchor].map(a => evaluation.points.anchors[a].id))
+    expect(anchors.has('drum')).toBe(true)
+  })
+})
+
 describe('photon number at the standard quantum limit', () => {
   // Published formula n̄ = κΓ/(16 g₀²) with ω ≪ κ [Clerk et al. 2010]; κ/2π = 1 MHz, Γ/2π = 1 Hz, g₀/2π = 100 Hz: 6.25; check D30.
   test('on resonance imprecision and back-action are equal there', () => {

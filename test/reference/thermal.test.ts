@@ -73,7 +73,7 @@ const nanogram = { mass: 1e-12, frequency: 1e5, quality: 1e4, temperature: 300 }
 
 function state(budget: Budget): ModeState {
   const { network, poles } = prepare(budget)
-  return modeStates(network, poles)[0]
+  return modeStates(budget, network, { poles, changes: null })[0]
 }
 
 const checks: readonly Check[] = [
