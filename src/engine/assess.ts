@@ -56,10 +56,12 @@ export function evaluateAtFrequencies(budget: Budget, frequencies: ArrayLike<num
 function evaluateList({ budget, network, poles }: Prepared, frequencies: ArrayLike<number>): Evaluation {
   const anchors = modeAnchors(network, poles, { low: 0, high: Infinity })
   const list = Array.from(frequencies, frequency => pointAt(anchors, frequency))
+  // Anchors that no point is measured from would be followed for nothing when roots change.
+  const used = [...new Set(list.map(p => p.anchor))].filter(anchor => anchor >= 0)
   const points = {
-    anchors,
+    anchors: used.map(anchor => anchors[anchor]),
     frequency: Float64Array.from(frequencies),
-    anchor: Int32Array.from(list, p => p.anchor),
+    anchor: Int32Array.from(list, p => used.indexOf(p.anchor)),
     offset: Float64Array.from(list, p => p.offset),
   }
   return new Evaluator(budget, network, everything).at(points)
