@@ -1,10 +1,11 @@
 import { baseUnitText, equalDimensions, dimensionOf } from '../quantity/dimension.js'
+import { declaredNames, type DeclaredName } from '../quantity/declared.js'
 import { QuantityError } from '../quantity/error.js'
 import type { ValueKind } from '../quantity/expression/value-kind.js'
 import type { Quantity } from '../quantity/parse.js'
-import { equal, one, rational, zero } from '../quantity/rational.js'
+import { zero } from '../quantity/rational.js'
 import type { Outcome } from './formula.js'
-import { useAs, type Converted, type Use } from './use.js'
+import { useAs, type Use } from './use.js'
 
 const turn = 2 * Math.PI
 
@@ -17,14 +18,18 @@ export function factorBetween(from: string, to: string): number | null {
 }
 
 /**
- * Factor from a root's canonical unit to the coherent SI unit, hertz as cycles, which expressions reckon in; null for a
- * level that is kept as a ratio of powers.
+ * Factor from the canonical unit of one use of a quantity to the coherent SI unit, hertz as cycles, which expressions
+ * reckon in; null where the two are not proportional, as with a level that is used as a ratio of powers.
  */
-export function factorToCoherent({ cycles, dimension }: ValueKind, root: string): number | null {
-  const cyclic = equal(cycles, one)
-  if (root === 'rate' || root === 'rate-per-length') return cyclic ? 1 / turn : 1
-  if (root === 'frequency') return cyclic ? 1 : turn
-  return root === 'power-ratio' && equalDimensions(dimension, level) ? null : 1
+export function factorToCoherent(quantity: Quantity, use: Use): number | null {
+  try {
+    const factor = 1 / use({ ...quantity, value: 1, difference: 1 }).value
+    const back = use(quantity).value * factor
+    return Math.abs(back - quantity.value) <= 1e-12 * Math.abs(quantity.value) ? factor : null
+  } catch (error) {
+    if (!(error instanceof QuantityError)) throw error
+    return null
+  }
 }
 
 const level = dimensionOf({ level: 1 })
@@ -38,38 +43,20 @@ export interface Fitted {
 
 /** Fits an expression's kind to a field. Throws a QuantityError where it is of another kind. */
 export function fit(kind: ValueKind, text: string, use: Use): Fitted {
-  const { value, dimension, power } = useUnit(kind, text, use)
+  const { value, dimension, power } = use(unitOf(kind, text))
   const toRatio = dimension === 'power-ratio' && equalDimensions(kind.dimension, level)
   return { outcome: toRatio ? { level: true } : { factor: value }, dimension, power }
 }
 
-/**
- * A formula such as 4kTmΓ gives a density per hertz without naming one, as Γ is in radians per second: where no cycles are
- * left, those of a density are supposed.
- */
-function useUnit(kind: ValueKind, text: string, use: Use): Converted {
-  const guesses = equal(kind.cycles, zero) ? [zero, rational(-1, 2), rational(-1)] : [kind.cycles]
-  let first: QuantityError | null = null
-  for (const cycles of guesses) {
-    try {
-      return use({ ...unitOf(kind, text), cycles })
-    } catch (error) {
-      if (!(error instanceof QuantityError)) throw error
-      first ??= error
-    }
-  }
-  throw first ?? new QuantityError('this is no quantity', 0, text.length)
-}
-
-/** One coherent unit of a kind, as a quantity that was written like this. */
+/** One coherent unit of an expression's kind. */
 function unitOf({ dimension, cycles }: ValueKind, text: string): Quantity {
-  return { value: 1, uncertainty: 0, dimension, cycles, text, unitText: '', unitFactor: 1 }
+  const value = { value: 1, difference: 1, uncertainty: 0, dimension, cycles, angle: zero, level: null }
+  return { ...value, text, unitText: '', unitFactor: 1, computed: true }
 }
 
-const natural = [
-  ...['mass', 'frequency', 'rate', 'rate-per-length', 'temperature', 'number', 'angle', 'power', 'length'],
-  ...['force', 'acceleration', 'decibel'],
-]
+/** Those that a number without further words is first taken for. */
+const common: readonly DeclaredName[] = ['frequency', 'rate', 'number', 'temperature', 'energy', 'pressure', 'decibel']
+const natural: readonly DeclaredName[] = [...common, ...declaredNames]
 
 /** The declared dimension whose canonical unit a value of this kind has already; its base units where there is none. */
 export function naturalUse(kind: ValueKind): Use {

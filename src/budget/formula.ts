@@ -23,10 +23,12 @@ export type Outcome = { readonly factor: number } | { readonly level: true }
 export class StepwiseFormula implements Formula {
   readonly roots: readonly number[]
 
-  constructor(
-    readonly steps: readonly Step[],
-    readonly outcome: Outcome,
-  ) {
+  readonly #steps: readonly Step[]
+  readonly #outcome: Outcome
+
+  constructor(steps: readonly Step[], outcome: Outcome) {
+    this.#steps = steps
+    this.#outcome = outcome
     const roots = steps.flatMap(step => step.inputs.flatMap(input => ('root' in input ? [input.root] : [])))
     this.roots = [...new Set(roots)].sort((a, b) => a - b)
   }
@@ -55,14 +57,14 @@ export class StepwiseFormula implements Formula {
   }
 
   #settled(value: number): number {
-    return 'level' in this.outcome ? 10 ** (value / 10) : value * this.outcome.factor
+    return 'level' in this.#outcome ? 10 ** (value / 10) : value * this.#outcome.factor
   }
 
   #before(roots: Float64Array): { last: Step; results: Float64Array } {
-    const results = new Float64Array(this.steps.length)
-    const [last] = this.steps.slice(-1)
+    const results = new Float64Array(this.#steps.length)
+    const [last] = this.#steps.slice(-1)
     if (last === undefined) throw new EngineFault('a formula without steps')
-    this.steps.slice(0, -1).forEach((step, index) => {
+    this.#steps.slice(0, -1).forEach((step, index) => {
       results[index] = this.#single(step, results, roots)
     })
     return { last, results }

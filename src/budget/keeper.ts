@@ -10,11 +10,12 @@ import type { Issues } from './issues.js'
 import type { ParameterTable } from './parameters.js'
 import { quoted } from './quoted.js'
 import type { TreeScalar } from './tree.js'
-import type { Converted } from './use.js'
+import type { Converted, Use } from './use.js'
 
 /** A stated parameter as it became a root, in the unit of its first use. */
 export interface KeptRoot extends Converted {
   readonly index: number
+  readonly use: Use
 }
 
 /** A derived parameter in the unit of its first use. */
@@ -97,13 +98,14 @@ export class Keeper {
     if (parameter === undefined || quantity === null) return null
     let kept = this.keptRoots.get(name)
     if (kept === undefined) {
-      const converted = naturalUse(quantity)(quantity)
-      kept = { ...converted, index: this.addRoot({ id: name, amount: parameter.amount, quantity }, converted) }
+      const use = naturalUse(quantity)
+      const converted = use(quantity)
+      kept = { ...converted, use, index: this.addRoot({ id: name, amount: parameter.amount, quantity }, converted) }
       this.keptRoots.set(name, kept)
     }
-    const factor = factorToCoherent(quantity, kept.dimension)
+    const factor = factorToCoherent(quantity, kept.use)
     if (factor !== null) return { root: kept.index, factor }
-    this.twoUses(name, scalar, [kept.dimension, 'decibel'])
+    this.twoUses(name, scalar, [kept.dimension, 'it is written'])
     return null
   }
 

@@ -87,6 +87,7 @@ export class ParameterTable {
 
   /** Checks what is derived behind all that it is derived from. */
   #derive(written: Map<string, Written>): void {
+    for (const { names } of written.values()) for (const name of names) this.#used.add(name)
     for (const name of this.#ordered(written)) {
       const [parameter, expression] = [this.all.get(name), written.get(name)]
       if (parameter === undefined || expression === undefined) continue

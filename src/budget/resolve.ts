@@ -3,6 +3,8 @@ import type { Place } from '../model/problem.js'
 import { textOf } from './amount.js'
 import { readBand, type BandRead } from './band.js'
 import { followChain } from './chain.js'
+import { readCitations } from './citations.js'
+import { readCorrelations } from './correlations.js'
 import { DensityReader } from './density.js'
 import { Directory } from './directory.js'
 import { FieldReader } from './fields.js'
@@ -14,7 +16,7 @@ import { revisionPattern } from './names.js'
 import { checkNames } from './namespace.js'
 import { impliedNoises } from './noises.js'
 import { quoted } from './quoted.js'
-import { warnRequirements } from './requirements.js'
+import { readRequirements } from './requirements.js'
 import { formatVersion } from './schema.js'
 import { TableReader, type DataFolder } from './table.js'
 import { child, type Tree, type TreeMap } from './tree.js'
@@ -44,7 +46,12 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
   checkNetwork(network, reader)
   if (measurand !== null) checkMovedMass(measurand, components, issues)
   const revision = readRevision(child(root, 'revision'), issues)
-  warnRequirements(child(root, 'requirements'), issues)
+  const requirements =
+    measurand === null || band === null
+      ? []
+      : readRequirements(child(root, 'requirements'), { components, lines, measurand, band }, reader.values)
+  const correlations = readCorrelations(entry(root, 'correlations'), reader.values)
+  const citations = readCitations(root, origin.data.files, issues)
   reader.values.finish()
   if (issues.failed || band === null || measurand === null || readout === null || revision === null) return null
   return {
@@ -62,10 +69,10 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
     reference,
     roots: reader.values.keeper.roots,
     derived: reader.values.keeper.derived,
-    correlations: [],
-    requirements: [],
+    correlations,
+    requirements,
     variants: [],
-    citations: [],
+    citations,
     tables: reader.densities.tables.tables,
     components,
     lines,

@@ -140,7 +140,7 @@ export class Values {
     const remark = ` (parameter \`${parameter.name}\`, line ${parameter.amount.scalar.place.line})`
     if (quantity !== null) {
       const converted = this.#attempt(scalar, () => use(quantity), remark)
-      return converted === null ? null : this.#root({ parameter, quantity, scalar }, converted)
+      return converted === null ? null : this.#root({ parameter, quantity, scalar, use }, converted)
     }
     if (checked === null) return null
     const text = parameter.amount.scalar.text
@@ -170,13 +170,16 @@ export class Values {
   }
 
   /** One root a parameter, in the unit of its first use; another use of the same number may count it in the other turn. */
-  #root({ parameter, quantity, scalar }: Named & { readonly quantity: Quantity }, converted: Converted): Given | null {
+  #root(
+    { parameter, quantity, scalar, use }: Named & { readonly quantity: Quantity; readonly use: Use },
+    converted: Converted,
+  ): Given | null {
     const { name, amount } = parameter
     const { value, power, dimension } = converted
     const kept = this.keeper.keptRoots.get(name)
     if (kept === undefined) {
       const root = this.keeper.addRoot({ id: name, amount, quantity }, converted)
-      this.keeper.keptRoots.set(name, { ...converted, index: root })
+      this.keeper.keptRoots.set(name, { ...converted, use, index: root })
       return { slot: { root }, value, power }
     }
     const same = kept.value === value && kept.uncertainty === converted.uncertainty

@@ -10,11 +10,15 @@ export interface SourceText {
 
 export const largestYaml = 256 * 1024
 
-/** The text of a YAML file, or why it is none: too large, not UTF-8, or with characters that nobody can see. */
-export function sourceText(file: string, bytes: Uint8Array): SourceText | Problem {
+/** The text of a file, or why it is none: too large, not UTF-8, or with characters that nobody can see. */
+export function sourceText(file: string, bytes: Uint8Array, largest = largestYaml): SourceText | Problem {
   const start = { file, line: 1, column: 1 }
-  if (bytes.length > largestYaml)
-    return fault('too-large', start, `the file has ${bytes.length} bytes; at most ${largestYaml} (256 kB) are read`)
+  if (bytes.length > largest)
+    return fault(
+      'too-large',
+      start,
+      `the file has ${bytes.length} bytes; at most ${largest} (${Math.round(largest / 1024)} kB) are read`,
+    )
   let text: string
   try {
     text = new TextDecoder('utf-8', { fatal: true }).decode(bytes)
@@ -24,6 +28,10 @@ export function sourceText(file: string, bytes: Uint8Array): SourceText | Proble
   const source = withPlaces(file, text)
   const hidden = hiddenCharacter.exec(text)
   return hidden === null ? source : fault('hidden-character', source.place(hidden.index), hiddenMessage(hidden[0]))
+}
+
+export function isSourceText(source: SourceText | Problem): source is SourceText {
+  return 'text' in source
 }
 
 /**

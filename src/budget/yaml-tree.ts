@@ -121,7 +121,13 @@ class Conversion {
 
   /** `{ value: 3,1 ng }` is the value 3 and a key `1 ng` without a value. */
   #cutByComma(key: string, place: Place, before: Tree | null): boolean {
-    if (before?.type !== 'scalar' || !/\d$/.test(before.text) || !/^\d/.test(key)) return false
+    if (before?.type !== 'scalar') return false
+    if (before.text.startsWith('=') && before.plain) {
+      const message = `a comma ends a value inside { }, so that the expression ${quoted(before.text)} is torn before ${quoted(key)}; put it in quotes`
+      this.issues.error('comma', place, message)
+      return true
+    }
+    if (!/\d$/.test(before.text) || !/^\d/.test(key)) return false
     const meant = `${before.text}.${key}`
     this.issues.error(
       'comma',

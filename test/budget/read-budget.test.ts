@@ -45,7 +45,7 @@ describe('the example budget', () => {
       dimension: 'mass',
       text: '3.1(2) ng',
       about: 'effective mass of the fundamental mode',
-      evidence: 'fem-report',
+      evidence: 'finite-element report',
       measured: null,
       place: { file: 'budget.yaml', line: 9, column: 18 },
     })
@@ -86,8 +86,20 @@ describe('the example budget', () => {
     })
   })
 
-  it('says that requirements are not checked', () => {
-    expect(budget.warnings.map(warning => warning.code)).toEqual(['not-checked'])
+  it('keeps what must be reached', () => {
+    expect(budget.warnings).toEqual([])
+    expect(budget.requirements).toEqual([
+      {
+        id: 'proposal',
+        of: 'total',
+        where: { at: 1.243e6 },
+        bound: 'below',
+        value: 2e-17,
+        text: '20 aN/√Hz',
+        about: null,
+        place: { file: 'budget.yaml', line: 27, column: 3 },
+      },
+    ])
   })
 
   it('knows the place of every stated field', () => {
