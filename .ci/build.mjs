@@ -4,7 +4,7 @@ import { spawnSync } from 'node:child_process'
 import { createHash } from 'node:crypto'
 import { cpSync, existsSync, mkdirSync, readFileSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs'
 import { join, relative } from 'node:path'
-import { fileURLToPath } from 'node:url'
+import { fileURLToPath, pathToFileURL } from 'node:url'
 
 const root = join(fileURLToPath(import.meta.url), '..', '..')
 const stamp = 'made-from'
@@ -57,6 +57,20 @@ function copyOthers(target) {
   }
 }
 
+/**
+ * The schemas for editors, so that the package has them as files.
+ * @param {string} target
+ */
+async function writeSchemas(target) {
+  // Below node_modules/ no package.json of this project says what kind of modules these are.
+  const note = join(target, 'package.json')
+  writeFileSync(note, '{ "type": "module" }')
+  const { schemaFiles } = await import(pathToFileURL(join(target, 'budget', 'editor-schema.js')).href)
+  rmSync(note)
+  mkdirSync(join(target, 'schema'))
+  for (const [name, text] of schemaFiles()) writeFileSync(join(target, 'schema', name), text)
+}
+
 /** @param {string} target */
 function swap(target) {
   const old = `${target}-old`
@@ -66,7 +80,7 @@ function swap(target) {
   rmSync(old, { recursive: true, force: true })
 }
 
-function build() {
+async function build() {
   const digest = digestOfSources()
   if (upToDate(digest)) return
   console.error('Compiling …')
@@ -76,6 +90,7 @@ function build() {
   try {
     if (!compile(target)) process.exit(1)
     copyOthers(target)
+    await writeSchemas(target)
     writeFileSync(join(target, stamp), digest)
     swap(target)
   } finally {
@@ -83,4 +98,4 @@ function build() {
   }
 }
 
-build()
+await build()

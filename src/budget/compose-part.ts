@@ -9,7 +9,8 @@ export const partSections = ['parameters', 'components', 'contributions'] as con
 const sections: ReadonlySet<string> = new Set(partSections)
 
 /** What it may say beside them, of itself alone. */
-const heads: ReadonlySet<string> = new Set(['format', 'title', 'about', 'include'])
+export const partHeads = ['format', 'title', 'about', 'include'] as const
+const heads: ReadonlySet<string> = new Set(partHeads)
 
 /** The sections of a shared part: a cryostat, a laser, an amplifier; null where it is none, which has been said. */
 export function partOf(tree: TreeMap, issues: Issues): TreeMap | null {

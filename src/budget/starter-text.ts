@@ -8,11 +8,14 @@ const widest = 110
 
 /**
  * The first budget of a sensor as a file. What each key means stands above it in the catalogue's words; what else a kind
- * could say stands below as a comment; every value is marked as assumed.
+ * could say stands below as a comment; every value is marked as assumed. `site` is the folder of the built site, which
+ * holds the schema.
  */
-export function starterText(starter: Starter, sensor: string): string {
+export function starterText(starter: Starter, sensor: string, site = 'site'): string {
   const { title, measurand, readout, band, reference } = starter
   const lines = [
+    // Editors with YAML support look for the schema where this line says.
+    `# yaml-language-server: $schema=../../${site}/schema/budget-${formatVersion}.json`,
     ...remark(
       `${title}: a first draft for \`${sensor}\`. Every number is assumed: replace it by your own, with its uncertainty in ` +
         'brackets (3.1(2) ng), and say under `evidence` what it rests on.',

@@ -1,13 +1,13 @@
-import { budgetSchema, formatVersion } from '../budget/schema.js'
+import { schemaFiles } from '../budget/editor-schema.js'
 import { curvesCsv } from '../report/curves-csv.js'
 import { curvesJson } from '../report/curves-json.js'
 import type { SiteInput } from './input.js'
 import { standaloneFigure } from './pictures.js'
 
-/** The files beside the pages: the schema; curves and figure of every report, at both of its addresses. */
+/** The files beside the pages: the schemas; curves and figure of every report, at both of its addresses. */
 export function sideFiles({ results }: SiteInput): ReadonlyMap<string, string> {
   const files = new Map<string, string>()
-  files.set(`schema/budget-${formatVersion}.json`, `${JSON.stringify(budgetSchema(), null, 2)}\n`)
+  for (const [name, text] of schemaFiles()) files.set(`schema/${name}`, text)
   for (const { sensor, assessment } of results) {
     if (assessment === null) continue
     const own = new Map([

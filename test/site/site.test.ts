@@ -48,7 +48,7 @@ describe('the site', () => {
       expect([...pages.keys()]).toContain(path)
     for (const name of ['curves.csv', 'curves.json', 'figure.svg'])
       for (const revision of ['draft', '2.1']) expect([...files.keys()]).toContain(`tern/${revision}/${name}`)
-    expect([...files.keys()]).toContain('schema/budget-1.json')
+    expect([...files.keys()]).toEqual(expect.arrayContaining(['schema/budget-1.json', 'schema/part-1.json']))
     expect([...pages.keys()].filter(path => path.startsWith('whimbrel/'))).toEqual(['whimbrel/draft/index.html'])
   })
 

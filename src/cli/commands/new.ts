@@ -24,7 +24,7 @@ export function newBudget({ root, like, sensor }: NewOptions, io: Io): ExitCode 
   const starter = starterNamed(like)
   const project = projectOf(root, io)
   const budgets = join(project.root, 'budgets')
-  writeNew(budgets, sensor, starterText(starter, sensor))
+  writeNew(budgets, sensor, starterText(starter, sensor, project.site.output))
   const path = relative(io.cwd, join(budgets, sensor, 'budget.yaml')).replaceAll('\\', '/')
   io.out(`${path} is written; every value in it is assumed.\n`)
   io.out(`Next: floorbook check ${sensor}; floorbook show ${sensor}; floorbook serve\n`)
