@@ -4,7 +4,7 @@ import { evaluateAtFrequencies, evaluateBand, prepare } from '../../src/engine/a
 import { Evaluator } from '../../src/engine/evaluate.js'
 import { firstPoints, gridFloor, gridTolerance, pointAt } from '../../src/engine/grid.js'
 import { makePoints } from '../../src/engine/points.js'
-import type { Budget, DensitySpec, LineSpec } from '../../src/model/budget.js'
+import type { Budget, DensitySpec, LineSpec, Table } from '../../src/model/budget.js'
 import { Refusal } from '../../src/model/problem.js'
 import { component, place, slot } from './budget-of.js'
 import { checkPromise } from './promise.js'
