@@ -13,6 +13,9 @@ const perRootHertz = { cycles: half }
 const perHertz = { cycles: rational(-1) }
 
 const known: readonly Known[] = [
+  // Before the time and the energy of the same dimension.
+  { phrase: 'a ratio of powers per hertz', dimension: dimensionOf({ time: 1 }), ...perHertz },
+  { phrase: 'a power per hertz', dimension: dimensionOf({ mass: 1, length: 2, time: -2 }), ...perHertz },
   { phrase: 'a plain number', dimension: dimensionOf({}) },
   { phrase: 'a length', dimension: dimensionOf({ length: 1 }) },
   { phrase: 'an area', dimension: dimensionOf({ length: 2 }) },
@@ -35,6 +38,30 @@ const known: readonly Known[] = [
   { phrase: 'a current', dimension: dimensionOf({ current: 1 }) },
   { phrase: 'a voltage', dimension: dimensionOf({ mass: 1, length: 2, time: -3, current: -1 }) },
   { phrase: 'a resistance', dimension: dimensionOf({ mass: 1, length: 2, time: -3, current: -2 }) },
+  { phrase: 'a charge', dimension: dimensionOf({ current: 1, time: 1 }) },
+  { phrase: 'a conductance', dimension: dimensionOf({ mass: -1, length: -2, time: 3, current: 2 }) },
+  { phrase: 'a capacitance', dimension: dimensionOf({ mass: -1, length: -2, time: 4, current: 2 }) },
+  { phrase: 'an inductance', dimension: dimensionOf({ mass: 1, length: 2, time: -2, current: -2 }) },
+  { phrase: 'a magnetic flux', dimension: dimensionOf({ mass: 1, length: 2, time: -2, current: -1 }) },
+  { phrase: 'a magnetic field', dimension: dimensionOf({ mass: 1, time: -2, current: -1 }) },
+  { phrase: 'a moment of inertia', dimension: dimensionOf({ mass: 1, length: 2 }) },
+  { phrase: 'a viscosity', dimension: dimensionOf({ mass: 1, length: -1, time: -1 }) },
+  {
+    phrase: 'an amplitude density of voltage',
+    dimension: dimensionOf({ mass: 1, length: 2, time: rational(-5, 2), current: -1 }),
+    ...perRootHertz,
+  },
+  {
+    phrase: 'a power density of voltage',
+    dimension: dimensionOf({ mass: 2, length: 4, time: -5, current: -2 }),
+    ...perHertz,
+  },
+  {
+    phrase: 'an amplitude density of current',
+    dimension: dimensionOf({ current: 1, time: rational(1, 2) }),
+    ...perRootHertz,
+  },
+  { phrase: 'a power density of current', dimension: dimensionOf({ current: 2, time: 1 }), ...perHertz },
   { phrase: 'a frequency shift per length', dimension: dimensionOf({ time: -1, length: -1 }) },
   {
     phrase: 'an amplitude density of force',

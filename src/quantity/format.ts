@@ -121,7 +121,7 @@ const usualPrefixes: ReadonlyMap<string, number> = new Map([
 
 /** The first symbol of a unit where a prefix may be chosen for it: it has none yet, or is the kilogram. */
 function firstSymbol(unit: string): FirstSymbol | null {
-  const found = /^([A-Za-zµΩ]+)(²|³|\^[23](?![\d./]))?(?=$|[\s/·⋅*])(.*)$/su.exec(unit)
+  const found = /^([A-Za-zµ]*Φ₀|[A-Za-zµΩ]+)(²|³|\^[23](?![\d./]))?(?=$|[\s/·⋅*])(.*)$/su.exec(unit)
   const meaning = found === null ? null : lookUpUnit(found[1])
   if (found === null || meaning === null || !meaning.prefixable) return null
   if (meaning.prefix !== '' && found[1] !== 'kg') return null

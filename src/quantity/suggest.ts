@@ -39,6 +39,16 @@ const spelledOut: ReadonlyMap<string, string> = new Map([
   ['day', 'd'],
   ['amu', 'u'],
   ['cc', 'cm^3'],
+  ['ae', 'au'],
+  ['mmhg', 'Torr'],
+  ['vrms', 'V rms'],
+  ['vpp', 'V pp'],
+  ['vpk', 'V pk'],
+  ['vp', 'V pk'],
+  ['dbuv', 'dBµV'],
+  ['celsius', '°C'],
+  ['degc', '°C'],
+  ['cts', 'counts'],
 ])
 
 /** The symbol that somebody may have meant, ready to print: `` `kHz` ``, `` `mHz` or `MHz` ``; null where none is near. */

@@ -2,6 +2,8 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { describe, expect, test } from 'vitest'
 import {
   canonicalUnit,
+  declaredNames,
+  densityNames,
   isDeclaredName,
   toDeclared,
   toDensity,
@@ -45,6 +47,26 @@ const accepted: readonly (readonly [string, DeclaredName, number, 'angular' | 'c
   ['20 dB', 'power-ratio', 100, null],
   ['0.72', 'power-ratio', 0.72, null],
   ['72 %', 'power-ratio', 0.72, null],
+  ['-20 dBc', 'power-ratio', 0.01, null],
+  ['20 °C', 'temperature', 293.15, null],
+  ['3 °C', 'temperature-difference', 3, null],
+  ['3 mK', 'temperature-difference', 3e-3, null],
+  ['30 °/s', 'angle-rate', Math.PI / 6, 'angular'],
+  ['2 Hz', 'angle-rate', 2 * turn, 'cyclic'],
+  ['5 counts/s', 'count-rate', 5, null],
+  ['3 V pk', 'voltage', 3 * Math.SQRT1_2, null],
+  ['-20 dBV', 'voltage', 0.1, null],
+  ['2 Φ₀', 'flux', 4.135667696923859e-15, null],
+  ['3 qe', 'charge', 4.806529902e-19, null],
+  ['3 zN m/rad', 'torque', 3e-21, null],
+  ['5e-21', 'strain', 5e-21, null],
+  ['2 g/cm³', 'mass-density', 2000, null],
+  ['3 g cm²', 'moment-of-inertia', 3e-7, null],
+  ['1.1 GPa', 'stress', 1.1e9, null],
+  ['2 MΩ', 'resistance', 2e6, null],
+  ['2 fF', 'capacitance', 2e-15, null],
+  ['2 nH', 'inductance', 2e-9, null],
+  ['2 µS', 'conductance', 2e-6, null],
 ]
 
 describe('quantities used as a declared dimension', () => {
@@ -88,6 +110,12 @@ const refused: readonly (readonly [string, DeclaredName, string])[] = [
     '`3 g` is a mass; an acceleration is wanted, such as `2 m/s²`; `g` is the gram, standard gravity is written `gn`',
   ],
   ['4000 dB', 'power-ratio', '`4000 dB` is beyond the numbers that are read; a ratio such as `20 dB` is wanted'],
+  ['5 counts/s', 'rate', '`5 counts/s` counts events; a rate is wanted, such as `600 kHz`'],
+  ['5 Bq', 'frequency', '`5 Bq` counts events; a frequency is wanted, such as `1.2 MHz`'],
+  ['3 rad/s', 'count-rate', '`3 rad/s` counts angles; a count rate is wanted, such as `200 counts/s`'],
+  ['-20 dBc', 'number', '`-20 dBc` is a ratio of powers; a plain number is wanted, such as `0.72`'],
+  ['3 µrad', 'strain', '`3 µrad` is an angle; a strain is wanted, such as `1e-21`'],
+  ['3 V', 'current', '`3 V` is a voltage; a current is wanted, such as `20 nA`'],
   ['1e308 Hz', 'rate', '`1e308 Hz` is beyond the numbers that are read; a rate such as `600 kHz` is wanted'],
 ]
 
@@ -113,6 +141,31 @@ const densities: readonly (readonly [string, DensityOf, number, boolean])[] = [
   ['3 nm/s²/√Hz', 'acceleration', 3e-9, false],
   ['1 µgn/√Hz', 'acceleration', 9.80665e-6, false],
   ['2 m²/(s⁴ Hz)', 'acceleration', 2, true],
+  ['-120 dBV/√Hz', 'voltage', 1e-6, false],
+  ['-120 dBV²/Hz', 'voltage', 1e-12, true],
+  ['4 nV rms/√Hz', 'voltage', 4e-9, false],
+  ['4 nVpk/√Hz', 'voltage', 4e-9 * Math.SQRT1_2, false],
+  ['3 fA/√Hz', 'current', 3e-15, false],
+  ['10 µqe/√Hz', 'charge', 1.602176634e-24, false],
+  ['2 µΦ₀/√Hz', 'flux', 4.135667696923859e-21, false],
+  ['3 zN m/√Hz', 'torque', 3e-21, false],
+  ['2 µPa/√Hz', 'pressure', 2e-6, false],
+  ['3 fT/√Hz', 'magnetic-field', 3e-15, false],
+  ['3 µK/√Hz', 'temperature', 3e-6, false],
+  ['1e-21 1/√Hz', 'strain', 1e-21, false],
+  ['2 nrad/√Hz', 'angle', 2e-9, false],
+  ['2 °/√Hz', 'angle', Math.PI / 90, false],
+  ['5 µrad/s/√Hz', 'angle-rate', 5e-6, false],
+  ['5 Hz/√Hz', 'angle-rate', 5 * turn, false],
+  ['5 Hz/√Hz', 'frequency', 5, false],
+  ['25 Hz²/Hz', 'frequency', 25, true],
+  ['5 rad/s/√Hz', 'frequency', 5 / turn, false],
+  ['-150 dB/Hz', 'relative-intensity', 1e-15, true],
+  ['-150 dBc/Hz', 'relative-intensity', 1e-15, true],
+  ['1e-8 1/√Hz', 'relative-intensity', 1e-8, false],
+  ['-120 dBc/Hz', 'phase', 2e-12, true],
+  ['4e-12 rad²/Hz', 'phase', 4e-12, true],
+  ['2 µrad/√Hz', 'phase', 2e-6, false],
   ['0.5', 'quanta', 0.5, true],
   ['0.5 quanta', 'quanta', 0.5, true],
 ]
@@ -145,6 +198,32 @@ const refusedDensities: readonly (readonly [string, DensityOf, string])[] = [
     'acceleration',
     '`1 µg/√Hz` is a mass per root hertz; a density of acceleration is wanted, such as `5 µgn/√Hz` or `4e-15 m²/(s⁴ Hz)`; `g` is the gram, standard gravity is written `gn`',
   ],
+  ['10 Hz', 'frequency', '`10 Hz` is a frequency; a density of frequency is wanted, such as `3 Hz/√Hz` or `9 Hz²/Hz`'],
+  [
+    '-120 dB/Hz',
+    'phase',
+    '`-120 dB/Hz` is a ratio of powers; a density of phase is wanted, such as `2 nrad/√Hz` or `-120 dBc/Hz`',
+  ],
+  [
+    '1e-12 1/Hz',
+    'phase',
+    '`1e-12 1/Hz` has no unit of angle; a density of phase is wanted, such as `2 nrad/√Hz` or `-120 dBc/Hz`',
+  ],
+  [
+    '2 nrad/√Hz',
+    'strain',
+    '`2 nrad/√Hz` is a density of angle; a density of strain is wanted, such as `1e-21 1/√Hz` or `1e-42 1/Hz`',
+  ],
+  [
+    '-150 dBm/Hz',
+    'voltage',
+    '`-150 dBm/Hz` is a power per hertz; a density of voltage is wanted, such as `4 nV/√Hz` or `-150 dBV²/Hz`',
+  ],
+  [
+    '2 ng/√Hz',
+    'acceleration',
+    '`2 ng/√Hz` is a mass per root hertz; a density of acceleration is wanted, such as `5 µgn/√Hz` or `4e-15 m²/(s⁴ Hz)`; `g` is the gram, standard gravity is written `gn`',
+  ],
   [
     '2 1/√Hz',
     'quanta',
@@ -168,26 +247,21 @@ test('every dimension that the catalogue declares is known here', () => {
 })
 
 test('the example in every message and every canonical unit is of its own dimension', () => {
-  const names: DeclaredName[] = [
-    'mass',
-    'frequency',
-    'rate',
-    'rate-per-length',
-    'temperature',
-    'number',
-    'angle',
-    'power',
-    'length',
-    'force',
-    'acceleration',
-    'decibel',
-  ]
-  for (const name of names) {
+  for (const name of declaredNames.filter(each => each !== 'power-ratio')) {
     const value = toDeclared(parseQuantity(`3 ${canonicalUnit(name)}`), name).value
-    expect(value).toBe(3)
+    expect(value, name).toBe(3)
     const message = messageOf(() => toDeclared(parseQuantity('3 kg/m⁴'), name))
     const example = /such as `([^`]*)`/.exec(message)?.[1] ?? ''
-    expect(toDeclared(parseQuantity(example), name).value).toBeGreaterThan(0)
+    expect(toDeclared(parseQuantity(example), name).value, name).toBeGreaterThan(0)
+  }
+})
+
+test('the examples in every message about a density are an amplitude and a power', () => {
+  for (const of of densityNames.filter(each => each !== 'quanta')) {
+    const message = messageOf(() => toDensity(parseQuantity('3 kg/m⁴'), of))
+    const [, amplitude, power] = /such as `([^`]*)` or `([^`]*)`/.exec(message) ?? ['', '', '']
+    expect(toDensity(parseQuantity(amplitude), of).power, of).toBe(false)
+    expect(toDensity(parseQuantity(power), of).power, of).toBe(true)
   }
 })
 

@@ -35,13 +35,20 @@ const printed: readonly (readonly [number, string, FormatOptions, string, string
   [4.7e-8, 'm/s²/√Hz', {}, '47.0 nm/s²/√Hz', '47.0\\,\\mathrm{nm}/\\mathrm{s}^{2}/\\sqrt{\\mathrm{Hz}}'],
   [2e4, 's', {}, '2.00 × 10⁴ s', '2.00\\times 10^{4}\\,\\mathrm{s}'],
   [-3.25, 'dB', {}, '−3.25 dB', '-3.25\\,\\mathrm{dB}'],
+  [20, '°C', {}, '20.0 °C', '20.0\\,{}^{\\circ}\\mathrm{C}'],
+  [2e-6, 'Φ₀/√Hz', {}, '2.00 µΦ₀/√Hz', '2.00\\,\\mu \\Phi_0/\\sqrt{\\mathrm{Hz}}'],
+  [3, 'µΦ₀', {}, '3.00 µΦ₀', '3.00\\,\\mu \\Phi_0'],
+  [3, 'V rms', {}, '3.00 V rms', '3.00\\,\\mathrm{V\\,rms}'],
+  [3, '″', {}, '3.00″', "3.00{}''"],
   [5, '%', { digits: 1 }, '5 %', '5\\,\\%'],
 ]
 
 describe('printed quantities', () => {
   test.each(printed)('%d %s', (...row) => {
     const [value, unit, options, text, tex] = row
-    expect(formatQuantity(value, unit, options)).toBe(text.replaceAll(' ', '\u00a0').replace('s\u00a0m', 's m'))
+    expect(formatQuantity(value, unit, options)).toBe(
+      text.replaceAll(' ', '\u00a0').replace('s\u00a0m', 's m').replace('V\u00a0rms', 'V rms'),
+    )
     expect(formatPlain(value, unit, options)).toBe(text.replace('−', '-'))
     expect(formatTex(value, unit, options)).toBe(tex)
     expect(katex.renderToString(tex, { strict: 'error', trust: false })).toContain('katex')

@@ -1,3 +1,5 @@
+import { constantNames } from './constants.js'
+import { functionNames } from './functions.js'
 import { childrenOf, type Expression, type ExpressionNode } from './tree.js'
 
 /** Names that the language itself gives a meaning: π, and what says that a number counts turns or radians. */
@@ -13,3 +15,6 @@ export function namesIn(expression: Expression): string[] {
   visit(expression.root)
   return [...names]
 }
+
+/** What no parameter may be called: names of the language, its functions, the frequency and the constants of nature. */
+export const reservedNames: ReadonlySet<string> = new Set([...ownNames, ...functionNames, 'f', ...constantNames])
