@@ -19,9 +19,9 @@ function fillBath(out: number, { grid, start, n }: Block, temperature: number): 
     return
   }
   for (let i = 0; i < n; i++) {
-    const x = ratio * frequency[start + i]
-    memory[out / 8 + i] =
-      temperature === 0 ? 4 * Math.PI * reducedPlanckConstant * frequency[start + i] : (classical * x) / Math.tanh(x)
+    // 4k_BT·x is 2ħω, which does not underflow with T; at T = 0 the ratio is infinite and its tanh 1.
+    const f = frequency[start + i]
+    memory[out / 8 + i] = (4 * Math.PI * reducedPlanckConstant * f) / Math.tanh(ratio * f)
   }
 }
 
