@@ -12,6 +12,7 @@ import { quoted } from './quoted.js'
 import { rangeFault, type Range } from './range.js'
 import { placeWithin, type Tree, type TreeScalar } from './tree.js'
 import type { Converted, Use } from './use.js'
+import { where } from './where.js'
 
 /** A number that a field was given. */
 export interface Given {
@@ -48,7 +49,7 @@ export class Values {
     const fault = rangeFault(given.value, spot.range)
     if (fault === null) return given
     const { scalar } = amount
-    this.issues.error('range', scalar.place, `${this.#shown(scalar.text, given)} ${fault}`)
+    this.issues.error('range', scalar.place, `${this.#shown(scalar, given)} ${fault}`)
     return null
   }
 
@@ -59,9 +60,9 @@ export class Values {
   }
 
   /** A quantity as it stands; a parameter with what stands for it; what an expression comes to. */
-  #shown(text: string, { value }: Given): string {
+  #shown({ text, place }: TreeScalar, { value }: Given): string {
     const written = this.parameters.all.get(text)?.amount.scalar
-    const origin = written === undefined ? '' : ` (${quoted(written.text)}, line ${written.place.line})`
+    const origin = written === undefined ? '' : ` (${quoted(written.text)}, ${where(written.place, place)})`
     const derived = isExpression(written?.text ?? text)
     return `${quoted(text)}${origin}${derived ? ` comes to ${Number(value.toPrecision(4))} in SI units and` : ''}`
   }
@@ -137,7 +138,7 @@ export class Values {
     }
     this.#refuseSecondText(amount, parameter)
     const { quantity, checked } = parameter
-    const remark = ` (parameter \`${parameter.name}\`, line ${parameter.amount.scalar.place.line})`
+    const remark = ` (parameter \`${parameter.name}\`, ${where(parameter.amount.scalar.place, scalar.place)})`
     if (quantity !== null) {
       const converted = this.#attempt(scalar, () => use(quantity), remark)
       return converted === null ? null : this.#root({ parameter, quantity, scalar, use }, converted)

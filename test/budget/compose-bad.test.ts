@@ -222,6 +222,14 @@ const cases: readonly Case[] = [
     ],
   },
   {
+    name: 'a shared value of the wrong dimension, used elsewhere',
+    text: `${including('../shared/a.yaml')}components: { drum: { temperature: base } }\n`,
+    files: { [shared('a')]: 'format: 1\nparameters:\n  base: 4 W\n' },
+    told: [
+      `[quantity] ${tern}:6:36: \`4 W\` is a power; a temperature is wanted, such as \`4.1 K\` (parameter \`base\`, ${shared('a')}:3)`,
+    ],
+  },
+  {
     name: 'variant: a name that nothing has',
     text: varied('drumm.quality: 1e9'),
     told: [
