@@ -52,15 +52,18 @@ export class DensityReader {
         spot.place,
         'a density is needed here: `density` with its unit, an `expression` or a `table`',
       )
-    if (table !== undefined) return this.#table(tree, table, of)
+    if (table !== undefined) return this.#table(tree, table, { of, spot })
     if (expression !== undefined) return this.#stated(tree, expression, { of, spot })
     return level === undefined ? null : this.#law(tree, level, { of, spot })
   }
 
-  #table(tree: Tree, table: Tree, of: Of): DensitySpec | null {
+  #table(tree: Tree, table: Tree, { of, spot }: Told): DensitySpec | null {
     this.#refuseLaw(tree, 'a `table`')
-    const index = this.tables.read(table, of)
-    return index === null ? null : { density: 'table', table: index }
+    const path = `${spot.path.replace(/\.density$/, '')}.table`
+    const read = this.tables.read(table, { of, path, values: this.values })
+    if (read === null) return null
+    const named = { density: 'table', table: read.table } as const
+    return read.scale === null ? named : { ...named, scale: read.scale }
   }
 
   #refuseLaw(tree: Tree, instead: string): void {

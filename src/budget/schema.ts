@@ -1,5 +1,6 @@
 import type { Declaration, DensityField, Exclusive, Field, Fields } from '../catalogue/declaration.js'
 import { declarations } from '../catalogue/declarations.js'
+import { tableSchema } from './curve-schema.js'
 import { distributions, effects } from './dispersion.js'
 import { idPattern, revisionPattern } from './names.js'
 
@@ -48,18 +49,6 @@ const quantity: Schema = {
   maxLength: 1000,
   properties: around,
   required: ['value'],
-  additionalProperties: false,
-}
-
-const table: Schema = {
-  type: 'object',
-  description: 'a density from a CSV file of two columns, frequency and density',
-  properties: {
-    file: { ...short, type: 'string', description: 'path from the budget’s folder: data/floor.csv' },
-    skip: { type: 'integer', minimum: 0, maximum: 1000, description: 'lines in front of the first row' },
-    units: { type: 'array', items: { ...short }, minItems: 2, maxItems: 2, description: 'of the columns: [Hz, m/√Hz]' },
-  },
-  required: ['file', 'units'],
   additionalProperties: false,
 }
 
@@ -132,7 +121,7 @@ function rootProperties(): Schema {
 
 function definitions(): Schema {
   const kinds = [...declarations.values()]
-  const result: Record<string, Schema> = { quantity, table, measurand, requirement, variant, claim }
+  const result: Record<string, Schema> = { quantity, table: tableSchema, measurand, requirement, variant, claim }
   result['component'] = byKind(kinds.filter(kind => kind.role === 'component'))
   result['contribution'] = {
     if: { type: 'object', required: ['kind'] },

@@ -1,12 +1,17 @@
-import type { DensityField } from '../catalogue/declaration.js'
-import type { Table } from '../model/budget.js'
+import type { Slot, Table } from '../model/budget.js'
 import type { Place } from '../model/problem.js'
-import { toDeclared, toDensity } from '../quantity/declared.js'
+import { toDeclared } from '../quantity/declared.js'
 import { QuantityError } from '../quantity/error.js'
 import { parseQuantity } from '../quantity/parse.js'
 import { textOf } from './amount.js'
-import { cellsFault, mostRows, readCsv, type CsvFault, type CsvRow } from './csv.js'
+import { readBand } from './band.js'
 import { folderOf } from './compose-files.js'
+import { readLayout, type Layout } from './curve-layout.js'
+import { mostRows } from './curve-lines.js'
+import { scalesPower } from './curve-meaning.js'
+import { curveOf, type Curve } from './curve-numbers.js'
+import { readReading, type CurveReading, type CurveSpot } from './curve-reading.js'
+import { readRows, type CurveRows } from './curve-rows.js'
 import { FileRefusal, joinInside, type FileSource } from './file-source.js'
 import type { Issues } from './issues.js'
 import { quoted } from './quoted.js'
@@ -24,17 +29,24 @@ export interface Band {
   readonly high: number
 }
 
-interface Columns {
-  readonly frequency: number
-  readonly density: number
-  readonly power: boolean
+/** A table as a density names it. */
+export interface TableRead {
+  readonly table: number
+  readonly scale: { readonly factor: Slot; readonly power: boolean } | null
 }
 
-/** Reads tables of densities from CSV files. */
+interface Source {
+  readonly path: string
+  /** As the budget writes it. */
+  readonly written: string
+  readonly place: Place
+}
+
+/** Reads tables of densities from files as instruments write them. */
 export class TableReader {
   readonly tables: Table[] = []
-  /** By path and lines skipped: many lines may name one file. */
-  readonly #read = new Map<string, readonly CsvRow[] | CsvFault>()
+  /** By path and layout: many lines may name one file. */
+  readonly #read = new Map<string, CurveRows>()
   #rows = 0
 
   constructor(
@@ -43,63 +55,45 @@ export class TableReader {
     readonly issues: Issues,
   ) {}
 
-  /** Index of the table, or null where it is refused, which has been said. */
-  read(tree: Tree, of: DensityField['of']): number | null {
-    const fileTree = child(tree, 'file')
-    const file = textOf(fileTree)
-    const columns = this.#columns(child(tree, 'units'), of)
-    if (fileTree === undefined || file === null || columns === null) return null
-    const path = joinInside(folderOf(fileTree.place.file), file)
-    if (path === null) {
-      this.issues.error(
-        'file',
-        fileTree.place,
-        `${quoted(file)} must be a path from the folder of this file that stays inside the project`,
-      )
-      return null
-    }
-    const rows = this.#rowsOf(path, child(tree, 'skip'), { written: file, place: fileTree.place })
-    if (rows === null) return null
-    const table = this.#table(rows, columns, { file: path, place: fileTree.place })
-    if (table === null || !this.#covers(table)) return null
-    return this.tables.push(table) - 1
+  /** Null where the table is refused, which has been said. */
+  read(tree: Tree, spot: CurveSpot): TableRead | null {
+    const source = this.#source(child(tree, 'file'))
+    const layout = readLayout(tree, this.issues)
+    const frequency = this.#frequency(child(tree, 'units'))
+    const reading = readReading(tree, spot)
+    const keepTree = child(tree, 'keep')
+    const keep = keepTree === undefined ? null : readBand(keepTree, this.issues)
+    if (source === null || layout === null || frequency === null || reading === null) return null
+    if (keepTree !== undefined && keep === null) return null
+    const sorted = textOf(child(tree, 'order')) === 'any'
+    const rows = this.#rowsOf(source, layout)
+    const curve = rows === null ? null : this.#curve(source, curveOf(rows, { frequency, reading, keep, sorted }))
+    if (curve === null) return null
+    const table = { file: source.path, place: source.place, ...curve, ...statedOf(tree) }
+    if (!this.#covers(table)) return null
+    return { table: this.tables.push(table) - 1, scale: scaleOf(reading, spot) }
   }
 
-  #rowsOf(path: string, skipTree: Tree | undefined, from: { written: string; place: Place }): readonly CsvRow[] | null {
-    const skip = Number(textOf(skipTree) ?? 0)
-    const key = `${skip} ${path}`
-    const known = this.#read.get(key)
-    const text = known === undefined ? this.#text(path, from.written, from.place) : ''
-    if (text === null) return null
-    const rows = known ?? readCsv(text, Number.isInteger(skip) ? skip : 0)
-    this.#read.set(key, rows)
-    if ('message' in rows) {
-      this.issues.error('table', { file: path, line: rows.line, column: 1 }, rows.message)
-      return null
-    }
-    this.#rows += rows.length
-    if (this.#rows <= mostRows) return rows
+  /** A path is meant from the folder of the file in which it stands. */
+  #source(tree: Tree | undefined): Source | null {
+    const written = textOf(tree)
+    if (tree === undefined || written === null) return null
+    const path = joinInside(folderOf(tree.place.file), written)
+    if (path !== null) return { path, written, place: tree.place }
     this.issues.error(
-      'table',
-      from.place,
-      `the tables of one budget have at most ${mostRows} rows in all; thin them out`,
+      'file',
+      tree.place,
+      `${quoted(written)} must be a path from the folder of this file that stays inside the project`,
     )
     return null
   }
 
-  #columns(units: Tree | undefined, of: DensityField['of']): Columns | null {
-    if (units?.type !== 'list' || units.items.length !== 2) return null
-    const frequency = this.#unit(units.items[0], text => toDeclared(parseQuantity(`1 ${text}`), 'frequency').value)
-    const density = this.#unit(units.items[1], text => toDensity(parseQuantity(text === '1' ? '1' : `1 ${text}`), of))
-    if (frequency === null || density === null) return null
-    return { frequency, density: density.value, power: density.power }
-  }
-
-  #unit<Result>(tree: Tree | undefined, meaning: (text: string) => Result): Result | null {
+  #frequency(units: Tree | undefined): number | null {
+    const tree = units?.type === 'list' ? units.items[0] : undefined
     const text = textOf(tree)
     if (tree?.type !== 'scalar' || text === null) return null
     try {
-      return meaning(text)
+      return toDeclared(parseQuantity(`1 ${text}`), 'frequency').value
     } catch (error) {
       if (!(error instanceof QuantityError)) throw error
       this.issues.error('quantity', placeWithin(tree, Math.max(0, error.offset - 2)), error.message)
@@ -107,9 +101,33 @@ export class TableReader {
     }
   }
 
-  #text(path: string, written: string, place: Place): string | null {
+  #rowsOf(source: Source, layout: Layout): CurveRows['rows'] | null {
+    const key = JSON.stringify([
+      source.path,
+      { ...layout, columns: layout.columns?.map(({ word, number }) => [word, number]) },
+    ])
+    const known = this.#read.get(key)
+    const text = known === undefined ? this.#text(source) : ''
+    if (text === null) return null
+    const { rows, faults, mapping } = known ?? readRows(text, layout)
+    // A fault of the mapping is not kept: it is said at each table that makes it.
+    if (mapping === null) this.#read.set(key, { rows, faults, mapping })
+    else this.issues.error('table-layout', mapping.place, mapping.message)
+    this.#tell(source, faults)
+    if (mapping !== null || faults.length > 0) return null
+    this.#rows += rows.length
+    if (this.#rows <= mostRows) return rows
+    this.issues.error(
+      'table',
+      source.place,
+      `the tables of one budget have at most ${mostRows} rows in all; thin them out`,
+    )
+    return null
+  }
+
+  #text({ path, written, place }: Source): string | null {
     try {
-      return new TextDecoder('utf-8', { fatal: true }).decode(this.data.files.read(path))
+      return new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(this.data.files.read(path))
     } catch (error) {
       const reason =
         error instanceof FileRefusal ? error.message : error instanceof TypeError ? 'is not UTF-8 text' : null
@@ -119,55 +137,43 @@ export class TableReader {
     }
   }
 
-  #table(rows: readonly CsvRow[], columns: Columns, from: { file: string; place: Place }): Table | null {
-    if (rows.length < 2) {
-      const count = rows.length === 1 ? 'one row' : 'no rows'
-      this.issues.error('table', from.place, `${quoted(from.file)} has ${count}; a table needs two`)
-      return null
-    }
-    const frequency = new Float64Array(rows.length)
-    const psd = new Float64Array(rows.length)
-    let faults = 0
-    for (const [index, row] of rows.entries()) {
-      const fault = cellsFault(row, index === 0) ?? fill(row, columns, { frequency, psd, index })
-      if (fault === null) continue
-      this.issues.error('table', { file: from.file, line: row.line, column: 1 }, fault)
-      if (++faults >= 5) return null
-    }
-    return faults > 0 ? null : { ...from, frequency, psd }
+  #tell({ path }: Source, faults: CurveRows['faults']): void {
+    for (const { line, column, message } of faults) this.issues.error('table', { file: path, line, column }, message)
   }
 
-  #covers(table: Table): boolean {
-    const first = table.frequency[0] ?? NaN
-    const last = table.frequency[table.frequency.length - 1] ?? NaN
-    if (this.band === null || (first <= this.band.low && last >= this.band.high)) return true
+  #curve(source: Source, curve: ReturnType<typeof curveOf>): Curve | null {
+    if (!('psd' in curve)) {
+      this.#tell(source, curve)
+      return null
+    }
+    if (curve.psd.length >= 2) return curve
+    const count = curve.psd.length === 1 ? 'one row' : 'no rows'
+    this.issues.error('table', source.place, `${quoted(source.path)} has ${count} to read; a table needs two`)
+    return null
+  }
+
+  #covers({ file, place, frequency, outside }: Table): boolean {
+    const first = frequency[0] ?? NaN
+    const last = frequency[frequency.length - 1] ?? NaN
+    if (outside !== 'refuse' || this.band === null || (first <= this.band.low && last >= this.band.high)) return true
     this.issues.error(
       'table-band',
-      table.place,
-      `${quoted(table.file)} goes from ${first} Hz to ${last} Hz, but the band from ${this.band.low} Hz to ${this.band.high} Hz; a table is never extrapolated: add rows or narrow the band`,
+      place,
+      `${quoted(file)} goes from ${first} Hz to ${last} Hz, but the band from ${this.band.low} Hz to ${this.band.high} Hz; narrow the band, or say how the table goes on: \`outside: constant\` or \`outside: slope\``,
     )
     return false
   }
 }
 
-interface Target {
-  readonly frequency: Float64Array
-  readonly psd: Float64Array
-  readonly index: number
+function statedOf(tree: Tree): Pick<Table, 'averages' | 'outside'> {
+  const averages = Number(textOf(child(tree, 'averages')) ?? NaN)
+  const outside = textOf(child(tree, 'outside'))
+  return {
+    averages: Number.isInteger(averages) && averages > 0 ? averages : null,
+    outside: outside === 'constant' || outside === 'slope' ? outside : 'refuse',
+  }
 }
 
-function fill({ cells }: CsvRow, columns: Columns, { frequency, psd, index }: Target): string | null {
-  const [frequencyText = '', densityText = ''] = cells
-  const f = Number(frequencyText) * columns.frequency
-  const level = Number(densityText) * columns.density
-  const power = columns.power ? level : level * level
-  if (!(f > 0 && Number.isFinite(f))) return `the frequency ${quoted(frequencyText)} must be greater than 0 and finite`
-  if (!(level > 0 && power > 0 && Number.isFinite(power)))
-    return `the density ${quoted(densityText)} must be greater than 0 and finite`
-  const before = index === 0 ? 0 : (frequency[index - 1] ?? 0)
-  frequency[index] = f
-  psd[index] = power
-  if (f === before) return `the frequency ${quoted(frequencyText)} stands in two rows; keep one`
-  if (f < before) return `the frequency ${quoted(frequencyText)} is below the row before it; sort the rows`
-  return null
+function scaleOf({ scale }: CurveReading, { of }: CurveSpot): TableRead['scale'] {
+  return scale === null ? null : { factor: scale, power: scalesPower(of) }
 }

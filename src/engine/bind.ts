@@ -37,11 +37,19 @@ export class Binder {
     return this.parameters(given as Parameters)
   }
 
+  #scaleOf({ scale }: Extract<DensitySpec, { density: 'table' }>): number {
+    if (scale === undefined) return 1
+    const factor = this.number(scale.factor)
+    return scale.power ? factor : factor * factor
+  }
+
   #shape(density: DensitySpec): Shape {
     if (density.density === 'formula') {
       return { form: 'formula', power: density.power, formula: density.formula, roots: this.roots }
     }
-    if (density.density === 'table') return { form: 'table', value: 1, table: this.budget.tables[density.table] }
+    if (density.density === 'table') {
+      return { form: 'table', value: this.#scaleOf(density), table: this.budget.tables[density.table] }
+    }
     const level = this.number(density.level)
     const value = density.power ? level : level * level
     const exponent = this.number(density.exponent)

@@ -14,6 +14,7 @@ export class GridArrays {
   /** f, for whole-array powers. */
   #logarithm: Float64Array | null = null
   readonly #powers = new Map<number, Float64Array>()
+  readonly #roots = new WeakMap<Float64Array, Float64Array>()
   readonly #tables = new Map<Table, Float64Array>()
 
   constructor(points: Points) {
@@ -50,7 +51,17 @@ export class GridArrays {
     return power ? values : values.map(value => value * value)
   }
 
-  /** A table, interpolated straight in log–log; constant beyond its ends, which the reader of budgets keeps outside the band. */
+  /** √ of an array of this grid. */
+  root(array: Float64Array): Float64Array {
+    let root = this.#roots.get(array)
+    if (root === undefined) {
+      root = array.map(Math.sqrt)
+      this.#roots.set(array, root)
+    }
+    return root
+  }
+
+  /** A table, interpolated straight in log–log; beyond its ends straight on where it says so, otherwise constant. */
   table(table: Table): Float64Array {
     let values = this.#tables.get(table)
     if (values === undefined) {
@@ -65,12 +76,13 @@ function interpolateLogLog(table: Table, logs: Float64Array): Float64Array {
   const x = table.frequency.map(Math.log)
   const y = table.psd.map(Math.log)
   const last = x.length - 1
+  const endless = table.outside === 'slope'
   let k = 0
   return logs.map(l => {
-    if (l <= x[0]) return table.psd[0]
-    if (l >= x[last]) return table.psd[last]
+    if (l <= x[0] && !endless) return table.psd[0]
+    if (l >= x[last] && !endless) return table.psd[last]
     while (k > 0 && l < x[k]) k--
-    while (l > x[k + 1]) k++
+    while (k < last - 1 && l > x[k + 1]) k++
     return Math.exp(y[k] + ((y[k + 1] - y[k]) * (l - x[k])) / (x[k + 1] - x[k]))
   })
 }

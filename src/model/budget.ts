@@ -117,7 +117,12 @@ export type DensitySpec =
       readonly exponent: Slot
       readonly reference: Slot | null
     }
-  | { readonly density: 'table'; readonly table: number }
+  | {
+      readonly density: 'table'
+      readonly table: number
+      /** What multiplies the table: its square, or with `power` itself, times `psd` is in canonical SI units. */
+      readonly scale?: { readonly factor: Slot; readonly power: boolean }
+    }
   | {
       readonly density: 'formula'
       readonly power: boolean
@@ -126,14 +131,18 @@ export type DensitySpec =
       readonly text: string
     }
 
-/** Numbers from a file, already in canonical SI units, ascending in the first column. */
+/** Numbers from a file, ascending in the first column. */
 export interface Table {
   readonly file: string
   readonly place: Place
   /** In Hz, strictly ascending, > 0. */
   readonly frequency: Float64Array
-  /** One-sided power density in canonical SI units, > 0. */
+  /** One-sided power density, > 0, in canonical SI units unless its density has a scale that makes it so. */
   readonly psd: Float64Array
+  /** Independent spectra that were averaged: the power has the relative standard uncertainty 1/√n; null where unsaid. */
+  readonly averages: number | null
+  /** How it goes on outside: not at all (it then covers the band), at its last value, or straight on in log–log. */
+  readonly outside: 'refuse' | 'constant' | 'slope'
 }
 
 export interface ComponentSpec {

@@ -13,19 +13,11 @@ function told(csv: string): string[] {
 
 describe('a hostile CSV file', () => {
   it.each([
-    ['one line of 32 MB', '1'.repeat(32 * million - 1), 'x.csv:1:1: this line is longer than 1000 characters'],
-    [
-      '32 million commas',
-      ','.repeat(32 * million - 1),
-      'x.csv:1:1: this row has more than 10 cells; frequency and density are two',
-    ],
+    ['one line of 32 MB', '1'.repeat(32 * million - 1), 'x.csv:1:1: this line is longer than 2000 characters'],
+    ['32 million commas', ','.repeat(32 * million - 1), 'x.csv:1:1: this line is longer than 2000 characters'],
     ['32 million empty lines', '\n'.repeat(32 * million - 1), 'x.csv:200001:1: the file has more than 200000 lines'],
     ['32 MB of quotation marks', '"\n'.repeat(16 * million - 1), 'x.csv:200001:1: the file has more than 200000 lines'],
-    [
-      'a quotation mark that stays open',
-      '1.1,"2\n1.4,3\n',
-      'x.csv:2:1: this line is no CSV: a quotation mark is not closed, or stands inside a cell',
-    ],
+    ['a quotation mark that stays open', '1.1,"2\n1.4,3\n', 'x.csv:1:5: a quotation mark is not closed in its line'],
     [
       '150,000 rows',
       '1.1,2\n'.repeat(150_000),
@@ -51,7 +43,7 @@ describe('a hostile CSV file', () => {
     ['digits of another script', '٣'],
     ['a hidden character', '2\u202e'],
   ])('a cell that is %s is refused at its row', (_name, cell) => {
-    expect(told(`1.1,2\n1.2,${cell}\n1.4,3\n`)).toEqual([expect.stringMatching(/^x\.csv:2:1: /)])
+    expect(told(`1.1,2\n1.2,${cell}\n1.4,3\n`)).toEqual([expect.stringMatching(/^x\.csv:2:5: /)])
   })
 
   it('is read once, however many lines name it', () => {

@@ -77,7 +77,7 @@ describe('files of a project', () => {
       ['data/link.csv', 'is a link, and links are not followed'],
       ['out/secret.csv', 'is reached through a link, and links are not followed'],
       ['data/pipe.csv', 'is not a regular file'],
-      ['../../../secret.csv', 'must be a path from the budget’s folder that stays inside the project'],
+      ['../../../secret.csv', 'must be a path from the folder of this file that stays inside the project'],
     ] as const) {
       writeFileSync(join(root, 'budgets/tern/budget.yaml'), small + noise(file))
       const project = findProject({ cwd: root })
