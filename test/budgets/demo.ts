@@ -1,6 +1,7 @@
 import { fileURLToPath } from 'node:url'
 import { NodeFiles } from '../../src/budget/node-files.js'
 import { formatProblem } from '../../src/budget/format-problem.js'
+import { openProject } from '../../src/budget/project.js'
 import { readBudget } from '../../src/budget/read-budget.js'
 import { assess, evaluateAtFrequencies } from '../../src/engine/assess.js'
 import type { Assessment } from '../../src/model/assessment.js'
@@ -9,11 +10,7 @@ import type { Budget } from '../../src/model/budget.js'
 export const files = new NodeFiles(fileURLToPath(new URL('../../', import.meta.url)))
 
 /** Folders of `budgets/` that hold a sensor. */
-export const sensors: readonly string[] = files
-  .list('budgets')
-  .filter(entry => entry.nature === 'folder')
-  .map(entry => entry.name)
-  .sort()
+export const sensors: readonly string[] = openProject('', files).sensors
 
 export function demoBudget(sensor: string): Budget {
   const { budget, problems } = readBudget({ files }, sensor)

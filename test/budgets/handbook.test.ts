@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { asdOf, demo, largestAt } from './demo.js'
+import { evaluateAtFrequencies } from '../../src/engine/assess.js'
+import { asdOf, demo, demoBudget, largestAt } from './demo.js'
 
 /**
  * What the summaries of the demo budgets say, and estimates by hand from published formulas, with the budgets' numbers
@@ -53,6 +54,14 @@ describe('avocet, a membrane in an optical cavity', () => {
     const response = (f: number) => 1 / (kappa ** 2 / 4 + (turn * f) ** 2)
     const S = (hbar * G) ** 2 * n * kappa * (response(-0.32e6 + 1.243e6) + response(-0.32e6 - 1.243e6))
     expectNear(asdOf('avocet', 'back_action', 1.243e6), Math.sqrt(S))
+  })
+
+  it('would have, colder and with less loss, the bath of that film alone', () => {
+    const [cold] = demoBudget('avocet').variants
+    const line = cold && evaluateAtFrequencies(cold.budget, [1.243e6]).lines.find(({ id }) => id === 'intrinsic')
+    // 335 quanta: the half quantum of the zero-point motion counts for a part in a thousand.
+    expectNear(Math.sqrt(line?.psd[0] ?? NaN), Math.sqrt((4 * k * 20e-3 * mass * turn * f0) / 2.4e9))
+    expect(cold?.budget.lines.map(({ id }) => id)).not.toContain('gas')
   })
 
   it('is limited as its summary says', () => {
