@@ -1,4 +1,5 @@
 import { QuantityError } from '../error.js'
+import { ownValues } from './names-in.js'
 import { codeOf } from './operations.js'
 import { childrenOf, type Expression, type ExpressionNode } from './tree.js'
 
@@ -35,12 +36,6 @@ interface Place {
   readonly block: boolean
   readonly register: number
 }
-
-const constants: ReadonlyMap<string, number> = new Map([
-  ['pi', Math.PI],
-  ['cycle', 1],
-  ['radian', 1],
-])
 
 class Compiler {
   readonly #values: ReadonlyMap<string, number>
@@ -79,7 +74,7 @@ class Compiler {
 
   /** Registers of numbers come first, so that their count is known before an operation is placed. */
   #collect(node: ExpressionNode): void {
-    const value = node.type === 'literal' ? node.value : node.type === 'name' ? constants.get(node.name) : undefined
+    const value = node.type === 'literal' ? node.value : node.type === 'name' ? ownValues.get(node.name) : undefined
     if (value !== undefined && !this.#registerOfNumber.has(value)) {
       this.#registerOfNumber.set(value, this.order.length + this.#numbers.length)
       this.#numbers.push(value)
@@ -111,7 +106,7 @@ class Compiler {
 
   #named(node: ExpressionNode & { readonly name: string }): Place {
     const { name, start, end } = node
-    const own = constants.get(name)
+    const own = ownValues.get(name)
     if (own !== undefined) return this.#number(own)
     if (name === 'f') return { block: true, register: 0 }
     const register = this.#values.get(name)

@@ -2,8 +2,14 @@ import { constantNames } from './constants.js'
 import { functionNames } from './functions.js'
 import { childrenOf, type Expression, type ExpressionNode } from './tree.js'
 
-/** Names that the language itself gives a meaning: π, and what says that a number counts turns or radians. */
-export const ownNames: ReadonlySet<string> = new Set(['pi', 'cycle', 'radian'])
+/** Names that the language itself gives a value: π, and what says that a number counts turns or radians. */
+export const ownValues: ReadonlyMap<string, number> = new Map([
+  ['pi', Math.PI],
+  ['cycle', 1],
+  ['radian', 1],
+])
+
+export const ownNames: ReadonlySet<string> = new Set(ownValues.keys())
 
 /** All names of an expression once, in the order of their first use; functions, `pi`, `cycle` and `radian` are none. */
 export function namesIn(expression: Expression): string[] {

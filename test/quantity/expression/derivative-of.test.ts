@@ -3,7 +3,7 @@ import { evaluate as mathEvaluate, derivative as mathDerivative } from 'mathjs'
 import { describe, expect, test } from 'vitest'
 import { derivativeOf } from '../../../src/quantity/expression/derivative-of.js'
 import { compileExpression } from '../../../src/quantity/expression/compile-expression.js'
-import { evaluateExpression } from '../../../src/quantity/expression/fault-of.js'
+import { evaluateExpression } from '../../../src/quantity/expression/evaluate-expression.js'
 import { parseExpression } from '../../../src/quantity/expression/parse-expression.js'
 
 const at = (x: number) => (name: string) => (name === 'x' ? x : name === 'a' ? 0.7 : NaN)
