@@ -167,6 +167,7 @@ export const declaration = {
   symbols: {
     a: 'field in the cavity in the frame of the pump',
     a_j: 'noise that enters through port $j$',
+    x: 'motion of the sensed coordinate',
     '\\bar a': 'mean field, $\\sqrt{\\bar n}$, real',
     '\\kappa': 'total energy decay rate, $\\sum_j\\kappa_j$',
     '\\chi_c': 'response of the field',
