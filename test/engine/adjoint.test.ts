@@ -1,4 +1,5 @@
 import fc from 'fast-check'
+import type { BigNumber } from 'mathjs'
 import { expect, test } from 'vitest'
 import { adjoint, transfer } from '../../src/engine/adjoint.js'
 import { assemble } from '../../src/engine/assemble.js'
@@ -57,10 +58,8 @@ const pointsOf = (network: Network): Points => {
   )
 }
 
-type Big = ReturnType<typeof bignumber>
-
 /** An element at an anchor and an offset in Hz, with the 2π of double precision taken as exact. */
-function entryAt(entry: Entry, anchor: number, offset: number): [Big, Big] {
+function entryAt(entry: Entry, anchor: number, offset: number): [BigNumber, BigNumber] {
   const turn = bignumber(2 * Math.PI)
   if (entry.form === 'constant') return [bignumber(entry.value.re), bignumber(entry.value.im)]
   const omega = turn.times(bignumber(anchor).plus(offset))
