@@ -1,5 +1,5 @@
 import type { Budget, Variant } from '../model/budget.js'
-import type { Problem } from '../model/problem.js'
+import { ofVariant, type Problem } from '../model/problem.js'
 import { textOf } from './amount.js'
 import { Issues } from './issues.js'
 import { child, type Tree, type TreeEntry, type TreeMap } from './tree.js'
@@ -22,8 +22,7 @@ export function readVariants(root: Tree, read: ReadTree, issues: Issues): Varian
     const own = new Issues()
     const variant = readVariant(entry, plain, tree => read(tree, own), own)
     for (const problem of own.sorted())
-      if (problem.severity === 'error' && !known.has(sentence(problem)))
-        issues.add({ ...problem, message: `variant \`${entry.key.slice(0, 60)}\`: ${problem.message}` })
+      if (problem.severity === 'error' && !known.has(sentence(problem))) issues.add(ofVariant(entry.key, problem))
     return variant === null ? [] : [variant]
   })
 }

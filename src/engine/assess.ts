@@ -1,8 +1,8 @@
 import type { Assessment } from '../model/assessment.js'
-import type { Budget } from '../model/budget.js'
+import type { Budget, Variant } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
 import type { Network } from '../model/network.js'
-import { EngineFault, type Problem } from '../model/problem.js'
+import { EngineFault, ofVariant, Refusal, type Problem } from '../model/problem.js'
 import { ascending, modeAnchors, zeroAnchors } from './anchors.js'
 import { assemble } from './assemble.js'
 import { refuseBlind } from './blind.js'
@@ -127,14 +127,20 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
     rootShares: rootSharesAt(budget, spots, 0),
     lineSpreads: lineSpreadsAt(budget, spots, 0),
     requirements: requirementResults(budget, { band: evaluation, modes, at }),
-    variants: budget.variants.map(({ id, title, budget: changed }) => ({
-      id,
-      title,
-      assessment: assess(changed, depth),
-    })),
+    variants: budget.variants.map(variant => assessVariant(variant, depth)),
     modes,
     cavities: cavityStates(network),
     unit: units[budget.measurand.quantity],
     warnings: warningsOf(prepared),
+  }
+}
+
+/** A refusal names the variant: its place may lie in what the budget itself says, and is fine there. */
+function assessVariant({ id, title, budget }: Variant, depth: Depth): Assessment['variants'][number] {
+  try {
+    return { id, title, assessment: assess(budget, depth) }
+  } catch (error) {
+    if (!(error instanceof Refusal)) throw error
+    throw new Refusal(error.problems.map(problem => ofVariant(id, problem)))
   }
 }

@@ -18,6 +18,11 @@ export interface Problem {
   readonly message: string
 }
 
+/** The same, said of a variant of a budget. */
+export function ofVariant(id: string, problem: Problem): Problem {
+  return { ...problem, message: `variant \`${id.slice(0, 60)}\`: ${problem.message}` }
+}
+
 /** Thrown where an input is refused; carries every problem found so far, in the order of the file. */
 export class Refusal extends Error {
   constructor(readonly problems: readonly Problem[]) {

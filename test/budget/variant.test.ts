@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { Variant } from '../../src/model/budget.js'
+import { formatProblem } from '../../src/budget/format-problem.js'
+import { Refusal } from '../../src/model/problem.js'
 import { assess } from '../../src/engine/assess.js'
 import { head, root, tern } from './composed.js'
 import { good, small } from './read.js'
@@ -41,6 +43,18 @@ describe('a variant', () => {
     expect(
       thermal({ ...budget, ...reference }) / thermal({ ...(changed?.budget ?? budget), ...reference }),
     ).toBeCloseTo(10, 3)
+  })
+
+  it('is named where its working point is refused', () => {
+    const budget = good(`${small}variants: { blue: { changes: { cavity.pump.detuning: 1.2 MHz } } }\n`)
+    const refused = (): unknown => {
+      try {
+        return assess(budget)
+      } catch (error) {
+        return error instanceof Refusal ? error.problems.map(formatProblem) : error
+      }
+    }
+    expect(refused()).toEqual([expect.stringMatching(/^budget\.yaml:\d+:\d+: variant `blue`: .*unstable/)])
   })
 
   it.each([
