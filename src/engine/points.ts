@@ -7,7 +7,7 @@ export interface Point {
   readonly offset: number
 }
 
-/** Points ascending in frequency from a list in any order; equal ones are kept once. */
+/** Points ascending in frequency from a list in any order, equal ones as often as they stand in it. */
 export function makePoints(anchors: readonly Anchor[], list: readonly Point[]): Points {
   const frequencyOf = ({ anchor, offset }: Point): number => (anchor < 0 ? offset : anchors[anchor].frequency + offset)
   const sorted = [...list].sort(
