@@ -43,10 +43,16 @@ function each(problems: readonly Problem[]): readonly Problem[] {
   return [...new Map(problems.map(problem => [formatProblem(problem), problem])).values()]
 }
 
-/** Errors, warnings and missed requirements of every budget, one line each; the exit code of all. */
+/**
+ * Errors, warnings and missed requirements of every budget, one line each; the exit code of all. What is wrong in a file
+ * that several budgets share is said once.
+ */
 export function reportOutcomes(outcomes: readonly Outcome[], io: Io): ExitCode {
+  const said = new Set<string>()
   for (const { problems, failure, assessment } of outcomes) {
-    reportProblems([...problems, ...(assessment === null ? [] : shortfalls(assessment))], io)
+    const news = problems.filter(problem => !said.has(formatProblem(problem)))
+    for (const problem of news) said.add(formatProblem(problem))
+    reportProblems([...news, ...(assessment === null ? [] : shortfalls(assessment))], io)
     // A fault of the engine has no place in the file.
     if (failure !== null && failure.problems.length === 0) for (const line of failure.lines) io.err(`${line}\n`)
   }
