@@ -44,7 +44,7 @@ describe('a project whose budgets share files', () => {
     const { code, out, err } = floorbook(project(laser.replace('value: 282 THz', 'value: 282 THzz')), 'check')
     expect({ code, out }).toEqual({ code: 2, out: '' })
     expect(err.split('\n')).toHaveLength(2)
-    expect(err).toMatch(/^budgets\/shared\/laser\.yaml:4:19: [^\n]*`THzz`[^\n]*\n$/)
+    expect(err).toMatch(/^budgets\/shared\/laser\.yaml:4:23: [^\n]*`THzz`[^\n]*\n$/)
   })
 
   it('is built, with pages for sensors alone', () => {
