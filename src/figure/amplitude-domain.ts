@@ -1,6 +1,7 @@
 import { bisectCenter, quantileSorted } from 'd3-array'
 import type { FigureInput } from './input.js'
 import { indicesBetween } from './indices-between.js'
+import { offsetPoints } from './offset-points.js'
 
 /** The total's least value over this is the lowest amplitude shown, however small the contributions are. */
 const BELOW_TOTAL = 60
@@ -24,6 +25,8 @@ export interface Shown {
   readonly x: Float64Array
   readonly kind: 'linear' | 'log'
   readonly domain: readonly [number, number]
+  /** Frequency at which the axis reads zero, in Hz. */
+  readonly origin: number
 }
 
 /**
@@ -34,16 +37,33 @@ export function amplitudeDomain(input: FigureInput, shown: Shown): [number, numb
   const total = extent(input.total, shown)
   if (total === null) return [0.1, 10]
   const columns = columnIndices(shown)
+  const variants = variantExtents(input, shown)
+  const lowest = Math.min(total[0], ...variants.map(variant => variant.least))
   const lows = [
     ...input.limits.filter(limit => limit.prominent).map(limit => quantile(limit.psd, columns, LIMIT_PART)),
     ...input.lines.map(line => quantile(line.psd, columns, LINE_PART)),
   ]
-  const least = Math.max(Math.min(total[0], ...lows), total[0] / BELOW_TOTAL)
-  const crest = quantile(input.total, columns, 1 - PEAK_PART) * PEAK_ABOVE
-  const most = Math.min(total[1], crest, least * LONGEST)
+  const least = Math.max(Math.min(lowest, ...lows), lowest / BELOW_TOTAL)
+  const highest = Math.min(total[1], crestOf(input.total, columns))
+  const most = Math.min(Math.max(highest, ...variants.map(variant => variant.most)), least * LONGEST)
   const pad = Math.max(PAD_FACTOR, (most / least) ** PAD_DECADES)
   // A name may stand above the total.
   return widened(least / pad, most * pad * pad)
+}
+
+/** As high as a curve is followed. */
+function crestOf(psd: Float64Array, columns: readonly number[]): number {
+  return quantile(psd, columns, 1 - PEAK_PART) * PEAK_ABOVE
+}
+
+/** Totals of the variants are shown like the total itself, each on its own points. */
+function variantExtents({ variants }: FigureInput, shown: Shown): { least: number; most: number }[] {
+  return variants.flatMap(({ points, total }) => {
+    const own = { ...shown, x: offsetPoints(points, shown.origin) }
+    const range = extent(total, own)
+    if (range === null) return []
+    return [{ least: range[0], most: Math.min(range[1], crestOf(total, columnIndices(own))) }]
+  })
 }
 
 function widened(low: number, high: number): [number, number] {

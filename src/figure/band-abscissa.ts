@@ -1,6 +1,7 @@
 import { axisOrigin } from './axis-plan.js'
 import type { FigureInput } from './input.js'
 import { frequencyName } from './prefix.js'
+import { offsetPoints } from './offset-points.js'
 import { frequencyKind } from './scales.js'
 
 /** What a figure shows along its horizontal axis. */
@@ -23,7 +24,7 @@ export function bandAbscissa(view: FigureInput): Abscissa {
   const origin = kind === 'log' ? 0 : axisOrigin(low, high, middle)
   return {
     kind,
-    x: origin === 0 ? view.points.frequency : view.points.frequency.map(f => f - origin),
+    x: offsetPoints(view.points, origin),
     domain: [low - origin, high - origin],
     origin,
     name: origin === 0 ? 'Frequency' : `Frequency − ${frequencyName(origin)}`,

@@ -14,8 +14,8 @@ const LINES = 2
 const NARROWEST = 44
 
 /** The width of the margin that labels need at the right of a frame. */
-export function labelMargin(titles: readonly string[], size: number): number {
-  const widths = titles.map(title => textSize(wrapText(title, size, WIDEST, LINES), size).width)
+export function labelMargin(titles: readonly string[], size: number, wider = 1): number {
+  const widths = titles.map(title => textSize(wrapText(title, size, WIDEST, LINES), size).width * wider)
   return MARGIN_BEFORE + MARGIN_AFTER + Math.max(NARROWEST, ...widths)
 }
 

@@ -1,8 +1,9 @@
-import type { FigureInput } from './input.js'
+import type { FigureInput, FigureVariant } from './input.js'
+import { offsetPoints } from './offset-points.js'
 import type { Box, Ink, PathMark, Polyline } from './scene.js'
 import type { AxisScale } from './scales.js'
 import { curvePath, type CurvePath } from './curve-path.js'
-import { dashOf, negativeDash } from './dashes.js'
+import { dashOf, negativeDash, variantDash } from './dashes.js'
 
 /** A curve as it is drawn and labelled. */
 export interface Curve {
@@ -19,6 +20,8 @@ export interface Curve {
 
 /** Where curves are drawn: abscissae of the evaluation's points, scales and frame. */
 export interface Window {
+  /** Frequency at which the axis reads zero, in Hz. */
+  readonly origin: number
   readonly x: Float64Array
   readonly xScale: AxisScale
   readonly yScale: AxisScale
@@ -26,10 +29,11 @@ export interface Window {
 }
 
 const TOTAL_WEIGHT = 1e6
+const VARIANT_WEIGHT = 1e4
 const STANDARD_WEIGHT = 1e5
 const LIMIT_WEIGHT = 1e-3
 
-/** Every curve of the input in the order of drawing: limits, lines (smallest share first), total. */
+/** Every curve of the input in the order of drawing: limits, lines (smallest share first), totals of variants, total. */
 export function drawCurves(input: FigureInput, window: Window): Curve[] {
   const limits = input.limits.map(({ id, title, prominent, psd }) =>
     draw({ id: `limit-${id}`, title, psd }, POSITIVE, limitStyle(prominent), window),
@@ -48,7 +52,20 @@ export function drawCurves(input: FigureInput, window: Window): Curve[] {
   })
   lines.sort((a, b) => a.weight - b.weight)
   const total = { id: 'total', title: 'Total', psd: input.total }
-  return [...limits, ...lines, draw(total, POSITIVE, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window)]
+  const variants = input.variants.map((variant, index) => drawVariant(variant, index, window))
+  return [
+    ...limits,
+    ...lines,
+    ...variants,
+    draw(total, POSITIVE, { ink: { as: 'total' }, weight: TOTAL_WEIGHT }, window),
+  ]
+}
+
+/** The first variant is named first. */
+function drawVariant({ id, title, points, total }: FigureVariant, index: number, window: Window): Curve {
+  const curve = { id: `variant-${id}`, title, psd: total }
+  const style: Style = { ink: { as: 'variant' }, weight: VARIANT_WEIGHT - index, dash: variantDash(index) }
+  return draw(curve, POSITIVE, style, { ...window, x: offsetPoints(points, window.origin) })
 }
 
 type Style = Pick<Curve, 'ink' | 'dash' | 'weight'>

@@ -25,6 +25,14 @@ const SEQUENCES: { readonly [F in Family]: readonly Dash[] } = {
   ],
   stray: [[12, 3, 2, 3, 2, 3], [2, 3.5], [6, 3], SOLID],
 }
+/** Of the variants' totals, in their order: long strokes, as no contribution has them. */
+const VARIANTS: readonly (readonly number[])[] = [
+  [16, 3],
+  [16, 3, 3, 3],
+  [16, 3, 3, 3, 3, 3],
+  [16, 6],
+  [22, 3, 8, 3],
+]
 /** Where a signed density is negative. */
 const NEGATIVE: readonly number[] = [1.5, 3]
 
@@ -32,6 +40,11 @@ const NEGATIVE: readonly number[] = [1.5, 3]
 export function dashOf(family: Family, tone: number): readonly number[] | undefined {
   const sequence = SEQUENCES[family]
   return sequence[tone % sequence.length] ?? undefined
+}
+
+/** Dash of the `index`-th variant's total. */
+export function variantDash(index: number): readonly number[] {
+  return VARIANTS[index % VARIANTS.length]
 }
 
 export function negativeDash(): readonly number[] {

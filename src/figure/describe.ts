@@ -28,7 +28,9 @@ export function describe(input: FigureInput, span: Span): string {
     `Amplitude density of ${input.quantity} ${span.range}.`,
     totalSentence(input, span),
     ...largestSentences(input, span),
+    spreadSentence(input, span),
     limitSentence(input, span),
+    variantSentence(input),
     `Curves: total; ${[...input.lines, ...input.limits].map(curve => curve.title).join('; ')}.`,
   ]
   return sentences.filter(s => s !== '').join(' ')
@@ -77,9 +79,25 @@ function largestStretches({ lines }: FigureInput, shown: readonly number[]): Str
   return stretches
 }
 
-function limitSentence({ limits, total }: FigureInput, { shown, at }: Span): string {
+/** What the surface around the total is, with the least and the greatest of it. */
+function spreadSentence({ total, uncertainty }: FigureInput, { shown }: Span): string {
+  if (uncertainty === null) return ''
+  const parts = shown.map(k => uncertainty[k] / Math.sqrt(total[k])).filter(part => Number.isFinite(part))
+  if (parts.length === 0) return ''
+  const say = (part: number) => `${Number((100 * part).toPrecision(2))}`
+  const [least, most] = [say(parts.reduce((a, b) => Math.min(a, b))), say(parts.reduce((a, b) => Math.max(a, b)))]
+  const range = least === most ? `${least} %` : `${least} to ${most} %`
+  return `The surface around the total reaches one standard uncertainty to each side, ${range} of the total.`
+}
+
+function variantSentence({ variants }: FigureInput): string {
+  if (variants.length === 0) return ''
+  return `Beside it stand the totals of ${variants.length === 1 ? 'a variant' : 'variants'}: ${variants.map(each => each.title).join('; ')}.`
+}
+
+function limitSentence({ limits, total, comparable }: FigureInput, { shown, at }: Span): string {
   const limit = limits.find(l => l.prominent)
-  if (limit === undefined) return ''
+  if (limit === undefined || !comparable) return ''
   const valid = shown.filter(k => total[k] > 0 && limit.psd[k] > 0 && Number.isFinite(total[k] / limit.psd[k]))
   if (valid.length === 0) return ''
   const ratio = (k: number) => total[k] / limit.psd[k]

@@ -44,6 +44,8 @@ const RULES = `.figure {
 .figure-fill { fill: var(--figure-own, currentColor); stroke: none; }
 .figure-text { fill: var(--figure-own, currentColor); stroke: none; }
 .figure-total { --figure-own: var(--figure-ink); stroke-width: 2.6px; }
+.figure-spread { --figure-own: var(--figure-ink); opacity: 0.17; }
+.figure-variant { --figure-own: var(--figure-ink); stroke-width: 1.3px; }
 .figure-limit { --figure-own: var(--figure-limit); stroke-width: 2px; }
 .figure-bound { --figure-own: var(--figure-limit); stroke-width: 1px; }
 .figure-line { stroke-width: 1.5px; }
@@ -54,6 +56,6 @@ const RULES = `.figure {
 .figure-best { --figure-own: var(--figure-ink); stroke-width: 1.4px; }
 .figure-share { opacity: 0.65; }
 .figure-beyond { --figure-own: var(--figure-beyond); }
-.figure-text.figure-axis, .figure-text.figure-tick, .figure-text.figure-total, .figure-text.figure-best { --figure-own: var(--figure-ink); }
+.figure-text.figure-axis, .figure-text.figure-tick, .figure-text.figure-total, .figure-text.figure-variant, .figure-text.figure-best { --figure-own: var(--figure-ink); }
 .figure-label.figure-total { font-weight: 700; }
 .figure-label.figure-text { paint-order: stroke; stroke: var(--figure-paper); stroke-width: 3px; stroke-linejoin: round; }`

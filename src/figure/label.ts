@@ -11,7 +11,7 @@ export interface Label {
 }
 
 /** Bold text is wider by about this factor. */
-const BOLD = 1.1
+export const BOLD = 1.1
 
 export function makeLabel(curve: Curve, size: number, widest: number, most: number): Label {
   const lines = wrapText(curve.title, size, widest, most)

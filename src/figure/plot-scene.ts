@@ -7,11 +7,13 @@ import { compactLabels, labelMargin, wideLabels } from './curve-labels.js'
 import { type Curve, curveMark, drawCurves, type Window } from './curves.js'
 import type { FigureInput } from './input.js'
 import { keyRows } from './key-rows.js'
+import { BOLD } from './label.js'
 import { makeFrame } from './make-frame.js'
 import { Occupancy } from './occupancy.js'
 import { bestMarks, referenceMarks } from './point-marks.js'
 import { axisScale } from './scales.js'
 import type { Box, Mark, Scene, Size } from './scene.js'
+import { isSpreadSeen, spreadMark } from './spread-mark.js'
 import { isCompact, typeSizes, type TypeSizes } from './type-sizes.js'
 
 export interface Plot {
@@ -37,7 +39,8 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
   const compact = isCompact(size.width)
   const { window, curves, axes } = layOut(view, size, plot)
   const { frame } = window
-  const shown = curves.filter(compact ? isWorthSpace : curve => isNamed(curve, plot.nameHidden ?? true))
+  const named = compact || !isSpreadSeen(view, window) ? curves : curves.map(withSpreadNamed)
+  const shown = named.filter(compact ? isWorthSpace : curve => isNamed(curve, plot.nameHidden ?? true))
   const occupancy = occupied(frame, shown)
   addReference(view, window, plot.abscissa, occupancy)
   const points = pointMarks(view, window, plot.abscissa, { occupancy, type })
@@ -46,6 +49,7 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
     : { marks: wideLabels(shown, frame, occupancy, type.label), height: 0 }
   const standard = shown.find(curve => curve.ink.as === 'limit')
   const beyond = standard === undefined ? null : beyondMark(standard, window)
+  const spread = spreadMark(view, window)
   return {
     width: size.width,
     height: Math.ceil(size.height + names.height),
@@ -54,6 +58,7 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
     marks: [
       ...(beyond === null ? [] : [beyond]),
       ...axes,
+      ...(spread === null ? [] : [spread]),
       ...points.behind,
       ...shown.filter(curve => curve.pieces.length > 0).map(curveMark),
       ...names.marks,
@@ -65,24 +70,37 @@ export function plotScene(view: FigureInput, size: Size, plot: Plot): Scene {
 function layOut(view: FigureInput, size: Size, { abscissa }: Plot) {
   const type = typeSizes(size.width)
   const compact = isCompact(size.width)
-  const { kind, domain, x } = abscissa
-  const amplitudes = amplitudeDomain(view, { x, kind, domain })
+  const { kind, domain, x, origin } = abscissa
+  const amplitudes = amplitudeDomain(view, { x, kind, domain, origin })
   const name = view.quantity.charAt(0).toUpperCase() + view.quantity.slice(1)
   const yPlan = logAxis(name, view.unit, amplitudes, MOST_LABELS_UP)
   const xPlan = (kind === 'log' ? logAxis : linearAxis)(abscissa.name, 'Hz', domain, compact ? 5 : 9)
-  const frame = makeFrame(size, { x: xPlan, y: yPlan }, type.note * 2.4, labelMargin(longNames(view), type.label))
+  const frame = makeFrame(size, { x: xPlan, y: yPlan }, type.note * 2.4, nameMargin(view, type.label))
   const xScale = axisScale(kind, domain, [frame.left, frame.right])
   const yScale = axisScale('log', amplitudes, [frame.bottom, frame.top])
-  const window: Window = { x, xScale, yScale, frame }
+  const window: Window = { x, origin, xScale, yScale, frame }
   const axes = axisMarks(frame, { plan: xPlan, scale: xScale }, { plan: yPlan, scale: yScale }, type)
   return { window, curves: drawCurves(view, window), axes }
 }
 
+/** The name of the total is bold. */
+function nameMargin(view: FigureInput, size: number): number {
+  const total = view.uncertainty === null ? 'Total' : TOTAL_WITH_SPREAD
+  return Math.max(labelMargin(longNames(view), size), labelMargin([total, `${total} ↓`], size, BOLD))
+}
+
 /** Every name in every form: with a sign, and with the arrow of a curve that has left the frame. */
-function longNames({ lines, limits }: FigureInput): string[] {
-  const titles = [...lines, ...limits].map(curve => curve.title)
+function longNames({ lines, limits, variants }: FigureInput): string[] {
+  const titles = [...lines, ...limits, ...variants].map(curve => curve.title)
   const signed = lines.filter(line => line.signed).map(line => `− ${line.title}`)
   return [...titles, ...signed].flatMap(title => [title, `${title} ↓`])
+}
+
+const TOTAL_WITH_SPREAD = 'Total (shaded: ± standard uncertainty)'
+
+/** The name of the total says what its band is. */
+function withSpreadNamed(curve: Curve): Curve {
+  return curve.ink.as === 'total' ? { ...curve, title: TOTAL_WITH_SPREAD } : curve
 }
 
 /** Limits that are not in the frame have no name beside it. */
@@ -126,7 +144,7 @@ function pointMarks(
   const inside = x >= frame.left && x <= frame.right && y >= frame.top && y <= frame.bottom
   return {
     behind,
-    front: inside ? bestMarks(best.asd, { x, y }, occupancy, { unit, type, taken: textsIn(behind) }) : [],
+    front: inside ? bestMarks(best, { x, y }, occupancy, { unit, type, taken: textsIn(behind) }) : [],
   }
 }
 

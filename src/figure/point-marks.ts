@@ -1,5 +1,5 @@
 import type { Occupancy } from './occupancy.js'
-import { frequencyName, withUnit } from './prefix.js'
+import { frequencyName, withUncertainty } from './prefix.js'
 import type { AxisScale } from './scales.js'
 import type { Box, Mark } from './scene.js'
 import { overlaps, textMark } from './text-box.js'
@@ -33,9 +33,14 @@ export function referenceMarks(
  * A ring at the least total and its value beside it; where there is no room, above the frame behind a ring of the same
  * look. `look.taken` are boxes above the frame that are not free.
  */
-export function bestMarks(asd: number, at: Spot, occupancy: Occupancy, look: BestLook): Mark[] {
+export function bestMarks(
+  { asd, uncertainty }: { readonly asd: number; readonly uncertainty: number },
+  at: Spot,
+  occupancy: Occupancy,
+  look: BestLook,
+): Mark[] {
   const { type, unit } = look
-  const lines = [`best ${withUnit(asd, unit)}`]
+  const lines = [`best ${withUncertainty(asd, unit, uncertainty)}`]
   for (const [dx, dy, anchor] of AROUND) {
     const place = { x: at.x + dx, y: at.y + dy + type.note * 0.35, anchor }
     const text = textMark({ ink: INK, role: 'note', ...place, lines }, type.note)

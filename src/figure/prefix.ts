@@ -33,6 +33,14 @@ export function withUnit(value: number, unit: string, digits = 3): string {
   return formatQuantity(value, unit, { digits })
 }
 
+/** An uncertainty below this part of its value would only bring digits that nobody can use. */
+export const LEAST_TOLD = 1e-5
+
+/** The same with a standard uncertainty where there is one: `8.3(2) aN/√Hz`. */
+export function withUncertainty(value: number, unit: string, uncertainty: number): string {
+  return formatQuantity(value, unit, { uncertainty: uncertainty >= LEAST_TOLD * Math.abs(value) ? uncertainty : 0 })
+}
+
 /** A frequency as it is spoken of: no more digits than it needs, at most ten. */
 export function frequencyName(frequency: number): string {
   const { unit, factor } = fitPrefix(frequency, 'Hz')

@@ -30,7 +30,11 @@ export type Polyline = readonly number[]
 
 /** How ink looks; each word becomes classes of the style sheet. */
 export type Ink =
-  | { readonly as: 'total' | 'limit' | 'bound' | 'axis' | 'tick' | 'grid' | 'leader' | 'reference' | 'best' | 'beyond' }
+  | {
+      readonly as:
+        | ('total' | 'spread' | 'variant' | 'limit' | 'bound')
+        | ('axis' | 'tick' | 'grid' | 'leader' | 'reference' | 'best' | 'beyond')
+    }
   | { readonly as: 'line' | 'share'; readonly family: import('../model/evaluation.js').Family; readonly tone: number }
 
 export type Mark = PathMark | TextMark | RingMark

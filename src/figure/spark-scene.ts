@@ -17,14 +17,23 @@ const FONT = COMPACT.label
 
 /** The total and the standard quantum limit over the band, small and without axes, named at their right ends. */
 export function sparkScene(view: FigureInput, size: Size): Scene {
-  const few: FigureInput = { ...view, lines: [], limits: view.limits.filter(limit => limit.prominent) }
+  const few: FigureInput = {
+    ...view,
+    uncertainty: null,
+    variants: [],
+    lines: [],
+    limits: view.limits.filter(limit => limit.prominent && view.comparable),
+  }
   const frame: Box = { left: 4, top: 6, right: size.width - 40, bottom: size.height - 6 }
   const { low, high } = view.band
   const kind = frequencyKind(view.band)
   const x = view.points.frequency
   const xScale = axisScale(kind, [low, high], [frame.left, frame.right])
-  const yScale = axisScale('log', amplitudeDomain(few, { x, kind, domain: [low, high] }), [frame.bottom, frame.top])
-  const window: Window = { x, xScale, yScale, frame }
+  const yScale = axisScale('log', amplitudeDomain(few, { x, kind, domain: [low, high], origin: 0 }), [
+    frame.bottom,
+    frame.top,
+  ])
+  const window: Window = { x, origin: 0, xScale, yScale, frame }
   const curves = drawCurves(few, window).filter(curve => curve.pieces.length > 0)
   return {
     ...size,

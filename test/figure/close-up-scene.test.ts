@@ -1,11 +1,25 @@
 import { describe, expect, it } from 'vitest'
-import { closeUpScene, offsetsFrom } from '../../src/figure/close-up-scene.js'
+import { closeUpScene } from '../../src/figure/close-up-scene.js'
+import { offsetPoints } from '../../src/figure/offset-points.js'
 import { renderSvg } from '../../src/figure/svg.js'
+import type { FigureInput } from '../../src/figure/input.js'
 import { MEMBRANE, membraneInput } from './membrane.js'
 import { withPole } from './membrane-anchored.js'
 import { curveOf, expectPathsSound, expectTextsApart, labelsOf, textsOf } from './scene-checks.js'
 
 const SIZE = { width: 900, height: 420 }
+
+/** A total with a peak as narrow as the mode: there is nothing to see farther away. */
+function peaked(input: FigureInput): FigureInput {
+  const { halfWidth } = input.points.anchors[0]
+  return { ...input, total: input.points.offset.map(offset => 1e-30 / (1 + (offset / halfWidth) ** 2)) }
+}
+
+/** Ends of the window in Hz, as the description says them. */
+function rangeOf(description: string): number[] {
+  const [, ...ends] = /from (−?[\d.]+)\u00a0Hz to (−?[\d.]+)\u00a0Hz\./.exec(description) ?? []
+  return ends.map(end => Number(end.replace('−', '-')))
+}
 
 function xTitle(scene: ReturnType<typeof closeUpScene>): string {
   return textsOf(scene)
@@ -15,7 +29,7 @@ function xTitle(scene: ReturnType<typeof closeUpScene>): string {
 
 describe('close-up', () => {
   it('reads offsets from the mode in a fitting unit', () => {
-    const input = membraneInput()
+    const input = peaked(membraneInput())
     expect(xTitle(closeUpScene(input, input.points.anchors[0], SIZE))).toBe('Offset from 1.243 MHz (mHz)')
     const broad = membraneInput({ ...MEMBRANE, quality: 1e4 })
     expect(xTitle(closeUpScene(broad, broad.points.anchors[0], SIZE))).toBe('Offset from 1.243 MHz (kHz)')
@@ -36,12 +50,29 @@ describe('close-up', () => {
 
   it('takes no notice of a pole that is far away', () => {
     const { input, mode } = withPole(MEMBRANE, 4000, 25)
-    expect(xTitle(closeUpScene(input, mode, SIZE))).toBe('Offset from 1.243 MHz (mHz)')
+    expect(xTitle(closeUpScene(peaked(input), mode, SIZE))).toBe('Offset from 1.243 MHz (mHz)')
+  })
+
+  it('shows the band in which the sensor is good where the mode is far narrower and the light leaves it alone', () => {
+    const input = membraneInput()
+    const scene = closeUpScene(input, input.points.anchors[0], SIZE)
+    expect(xTitle(scene)).toBe('Offset from 1.243 MHz (Hz)')
+    // The total's power doubles some 190 Hz away; the window reaches half a width beyond.
+    const [low, high] = rangeOf(scene.description)
+    expect(low).toBeGreaterThan(-420)
+    expect(low).toBeLessThan(-300)
+    expect(high).toBeGreaterThan(300)
+    expect(high).toBeLessThan(420)
+  })
+
+  it('stays at the width of the pole where the light has broadened it', () => {
+    const { input, mode } = withPole(MEMBRANE, 0, 4)
+    expect(rangeOf(closeUpScene(input, mode, SIZE).description)).toEqual([-96, 96])
   })
 
   it('keeps the shape of a resonance of quality 10¹²: offsets are not differences of rounded frequencies', () => {
     const sharp = membraneInput({ ...MEMBRANE, quality: 1e12 })
-    const offsets = offsetsFrom(sharp, sharp.points.anchors[0])
+    const offsets = offsetPoints(sharp.points, sharp.points.anchors[0].frequency)
     expect(offsets).toEqual(sharp.points.offset)
     const halfWidth = sharp.points.anchors[0].halfWidth
     const total = sharp.points.offset.map(offset => 1e-30 / (1 + (offset / halfWidth) ** 2))
@@ -63,7 +94,7 @@ describe('close-up', () => {
       offset: Float64Array.of(-3, 2, 1.3e6),
       frequency: Float64Array.of(1242997, 1243042, 1.3e6),
     }
-    expect([...offsetsFrom({ ...input, points }, mode)]).toEqual([-3, 42, 57000])
+    expect([...offsetPoints(points, mode.frequency)]).toEqual([-3, 42, 57000])
   })
 
   it('stays inside the band', () => {
@@ -77,8 +108,8 @@ describe('close-up', () => {
   })
 
   it.each([SIZE, { width: 390, height: 340 }])('names only what is in the frame, apart from each other (%j)', size => {
-    const input = membraneInput()
-    const scene = closeUpScene(input, input.points.anchors[0], size)
+    const { input, mode } = withPole(MEMBRANE, 0, 0.02)
+    const scene = closeUpScene(input, mode, size)
     expect(labelsOf(scene).join()).not.toContain('↓')
     expect(labelsOf(scene)).not.toContain('shot noise')
     expectTextsApart(scene, 'close-up')
@@ -87,7 +118,7 @@ describe('close-up', () => {
   })
 
   it('describes the resonance by offsets', () => {
-    const input = membraneInput()
+    const input = peaked(membraneInput())
     const { description } = closeUpScene(input, input.points.anchors[0], SIZE)
     expect(description.replaceAll('\u00a0', ' ')).toContain(
       'against the offset from 1.243 MHz, from −149 mHz to 149 mHz.',

@@ -146,7 +146,10 @@ export function membraneInput(membrane: Membrane = MEMBRANE): FigureInput {
     unit: 'N/√Hz',
     band: { low: membrane.low, high: membrane.high },
     ...curvesOf(evaluation),
+    uncertainty: null,
+    variants: [],
+    comparable: true,
     reference: membrane.frequency,
-    best: { frequency: points.frequency[best], asd: Math.sqrt(total[best]) },
+    best: { frequency: points.frequency[best], asd: Math.sqrt(total[best]), uncertainty: 0 },
   }
 }

@@ -1,5 +1,5 @@
 import { FAMILIES } from '../../src/figure/palette.js'
-import type { FigureInput, FigureLimit, FigureLine } from '../../src/figure/input.js'
+import type { FigureInput, FigureLimit, FigureLine, FigureVariant } from '../../src/figure/input.js'
 import type { Points } from '../../src/model/points.js'
 
 /** Numbers from 0 to 1 that follow from a seed (Mulberry32). */
@@ -58,7 +58,19 @@ export function randomBudget(seed: number): FigureInput {
     }
   })
   const total = frequency.map((_, k) => lines.reduce((sum, l) => sum + (l.psd[k] > 0 ? l.psd[k] : 0), 0))
-  return { ...frame(frequency, low, high), unit: pick(UNITS), total, lines, limits, ...marks(random, frequency, total) }
+  const variants = randomVariants(random, total, frequency)
+  const doubt = random() < 0.5 ? null : total.map(psd => Math.sqrt(psd) * 10 ** (random() * 3 - 2.5))
+  return {
+    ...frame(frequency, low, high),
+    uncertainty: doubt,
+    variants,
+    comparable: random() < 0.8,
+    unit: pick(UNITS),
+    total,
+    lines,
+    limits,
+    ...marks(random, frequency, total),
+  }
 }
 
 function frame(frequency: Float64Array, low: number, high: number) {
@@ -75,7 +87,10 @@ function marks(random: () => number, frequency: Float64Array, total: Float64Arra
   const best = total.reduce((a, v, k) => (v > 0 && (a < 0 || v < total[a]) ? k : a), -1)
   return {
     reference: random() < 0.7 ? frequency[Math.floor(random() * frequency.length)] : null,
-    best: best < 0 ? null : { frequency: frequency[best], asd: Math.sqrt(total[best]) },
+    best:
+      best < 0
+        ? null
+        : { frequency: frequency[best], asd: Math.sqrt(total[best]), uncertainty: random() * Math.sqrt(total[best]) },
   }
 }
 
@@ -91,5 +106,19 @@ function randomShape(random: () => number, frequency: Float64Array, scale: numbe
     if (Math.abs(k - hole) < 12) return missing
     const peak = 10 ** (depth / (1 + ((f - centre) / width) ** 2))
     return level * (f / frequency[0]) ** slope * peak
+  })
+}
+
+/** Totals beside the total, some far from it, on fewer points. */
+function randomVariants(random: () => number, total: Float64Array, frequency: Float64Array): FigureVariant[] {
+  return Array.from({ length: Math.floor(random() * 4) }, (_, k) => {
+    const factor = 10 ** (random() * 6 - 3)
+    const kept = frequency.filter((_f, n) => n % 2 === 0)
+    return {
+      id: `variant_${k}`,
+      title: k === 0 ? 'cold: quality ten times higher, at 20 mK' : `variant ${k}`,
+      total: total.filter((_v, n) => n % 2 === 0).map(v => v * factor),
+      points: { anchors: [], frequency: kept, anchor: new Int32Array(kept.length).fill(-1), offset: kept },
+    }
   })
 }
