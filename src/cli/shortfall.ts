@@ -1,7 +1,8 @@
 import type { Assessment, RequirementResult } from '../model/assessment.js'
 import type { Problem } from '../model/problem.js'
 import { occupancyText } from '../report/headlines.js'
-import { decibelText, densityText, frequencyText } from '../report/numbers.js'
+import { decibelText } from '../report/margins.js'
+import { densityText, frequencyText } from '../report/numbers.js'
 
 /** The requirements that a budget misses, each at its place in the file with what was found and what is wanted. */
 export function shortfalls({ requirements, unit }: Assessment): readonly Problem[] {

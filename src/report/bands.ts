@@ -1,6 +1,7 @@
 import type { Assessment } from '../model/assessment.js'
 import type { Family } from '../model/evaluation.js'
-import { percentText, rangeDigits, rangeText } from './numbers.js'
+import { spokenRange } from './landmarks.js'
+import { percentText, rangeDigits } from './numbers.js'
 import { lineFamily, lineTitle } from './titles.js'
 
 /** A stretch of the band and the line that is largest in it. */
@@ -21,7 +22,7 @@ export function bandRows(assessment: Assessment): readonly BandRow[] {
     line,
     title: lineTitle(assessment, line),
     family: lineFamily(assessment, line),
-    range: rangeText(from, to, digits),
+    range: spokenRange(assessment, { from, to }, digits),
     share: shareRange(percentText(least), percentText(greatest)),
   }))
 }

@@ -3,7 +3,7 @@ import type { Assessment } from '../model/assessment.js'
 import type { Parameters } from '../model/budget.js'
 import type { Family, LineCurve, SourceCurve } from '../model/evaluation.js'
 import { declarationOf } from './catalogue.js'
-import { claimedSources, signedDensity } from './contributions.js'
+import { claimedSources, lineValue } from './contributions.js'
 import { formatTex } from '../quantity/format.js'
 import { percentText } from './numbers.js'
 import { wordAt } from './slots.js'
@@ -55,7 +55,7 @@ interface Owner {
 
 /** `shown` keeps, over the cards, which line's card lists the symbols of an owner. */
 function equationCard(line: LineCurve, assessment: Assessment, shown: Map<string, string>): EquationCard {
-  const { budget, atReference, unit } = assessment
+  const { budget, atReference } = assessment
   const spec = budget.lines.find(each => each.id === line.id)
   const owners = ownersOf(line, assessment)
   const fresh = owners.filter(owner => !shown.has(owner.id))
@@ -67,7 +67,7 @@ function equationCard(line: LineCurve, assessment: Assessment, shown: Map<string
     title: line.title,
     family: line.family,
     signed: line.signed,
-    value: signedDensity(line.psd[0], unit),
+    value: lineValue(line, assessment),
     share: percentText(line.psd[0] / atReference.total[0]),
     about: spec?.about ?? '',
     evidence: spec?.evidence ?? '',

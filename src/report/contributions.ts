@@ -34,16 +34,32 @@ export function contributionRows(assessment: Assessment): readonly ContributionR
       title: line.title,
       family: line.family,
       familyTitle: familyTitles[line.family],
-      value: signedDensity(line.psd[0], assessment.unit),
+      value: lineValue(line, assessment),
       share: percentText(line.psd[0] / at.total[0]),
       enters: entersText(line, at),
       signed: line.signed,
     }))
 }
 
-/** The root of a power density; a negative one is marked, since it lowers the total. */
-export function signedDensity(psd: number, unit: string): string {
-  return psd < 0 ? `−${densityText(Math.sqrt(-psd), unit)}` : densityText(Math.sqrt(psd), unit)
+/** A line's amplitude density at the reference frequency with its standard uncertainty. */
+export function lineValue(line: LineCurve, { atReference, lineSpreads, unit }: Assessment): string {
+  const index = atReference.lines.findIndex(each => each.id === line.id)
+  return pointValue(line, atReference, { unit, index: 0, uncertainty: lineSpreads[index]?.combined ?? 0 })
+}
+
+/** A signed line below this share of the total's power is told as negligible: near its zero it has any size. */
+const leastSigned = 1e-6
+
+/** The root of a line's power density at a point; a negative one is marked, since it lowers the total. */
+export function pointValue(
+  { psd, signed }: LineCurve,
+  { total }: Evaluation,
+  { unit, index, uncertainty = 0 }: { unit: string; index: number; uncertainty?: number },
+): string {
+  const density = psd[index]
+  if (signed && Math.abs(density) < leastSigned * total[index]) return 'negligible'
+  const text = densityText(Math.sqrt(Math.abs(density)), unit, uncertainty)
+  return density < 0 ? `−${text}` : text
 }
 
 /** `fundamental (bath)`, `cavity (front, back)`: owners and channels of the sources that a line claims. */

@@ -1,4 +1,4 @@
-import type { Assessment } from '../model/assessment.js'
+import type { Assessment, Bands } from '../model/assessment.js'
 import type { Points } from '../model/points.js'
 
 interface Column {
@@ -8,11 +8,12 @@ interface Column {
 
 /**
  * All curves on the engine's own points as CSV (RFC 4180, `\n` at line ends): frequency, the anchor's name and the offset
- * from it, then one-sided amplitude densities in SI of the total, the added noise, every line, source and limit. A signed
+ * from it, then one-sided amplitude densities in SI of the total, its standard uncertainty (combined, and its statistical
+ * and systematic part) where it was computed, the added noise, every line, source and limit. A signed
  * line is given as its power density, since it has no root where it is negative. Numbers have the fewest digits that read
  * back to the same double.
  */
-export function curvesCsv({ evaluation, unit }: Assessment): string {
+export function curvesCsv({ evaluation, bands, unit }: Assessment): string {
   const { points, total, added, lines, sources, limits } = evaluation
   const powerUnit = powerUnitOf(unit)
   const amplitude = (name: string, psd: Float64Array): Column => ({
@@ -22,6 +23,7 @@ export function curvesCsv({ evaluation, unit }: Assessment): string {
   const columns: readonly Column[] = [
     ...pointColumns(points),
     amplitude('total', total),
+    ...(bands === null ? [] : bandColumns(bands, unit)),
     amplitude('added', added),
     ...lines.map(line =>
       line.signed
@@ -34,6 +36,18 @@ export function curvesCsv({ evaluation, unit }: Assessment): string {
   const rows = [columns.map(column => textCell(column.title)).join(',')]
   for (let i = 0; i < points.frequency.length; i++) rows.push(columns.map(column => column.cell(i)).join(','))
   return `${rows.join('\n')}\n`
+}
+
+function bandColumns({ combined, statistical, systematic }: Bands, unit: string): readonly Column[] {
+  const column = (name: string, values: Float64Array): Column => ({
+    title: `total ${name} (${unit})`,
+    cell: index => numberCell(values[index]),
+  })
+  return [
+    column('standard uncertainty', combined),
+    column('statistical uncertainty', statistical),
+    column('systematic uncertainty', systematic),
+  ]
 }
 
 /** Rounding can leave a source that vanishes a hair below zero; more than that is refused with its number. */

@@ -1,4 +1,5 @@
-import type { Assessment } from '../model/assessment.js'
+import type { Assessment, Bands, RequirementResult } from '../model/assessment.js'
+import type { Budget } from '../model/budget.js'
 import type { Evaluation, Parts } from '../model/evaluation.js'
 import { powerUnitOf } from './curves-csv.js'
 import { engineVersion } from './engine-version.js'
@@ -25,10 +26,74 @@ export function curvesData(assessment: Assessment): object {
     modes: assessment.modes,
     cavities: assessment.cavities,
     roots: budget.roots.map(root => ({ ...root, place: placeText(root.place) })),
+    derived: derivedData(budget),
+    correlations: budget.correlations.map(({ roots, coefficient, place }) => ({
+      roots: roots.map(index => budget.roots[index].id),
+      coefficient,
+      place: placeText(place),
+    })),
+    citations: budget.citations,
+    root_shares: assessment.rootShares.map(({ root, elasticity, change }) => ({
+      root: budget.roots[root].id,
+      elasticity,
+      change,
+    })),
+    requirements: assessment.requirements.map(requirementData),
+    variants: variantsData(assessment),
     warnings: assessment.warnings.map(({ code, message, place }) => ({ code, message, place: placeText(place) })),
-    curves: evaluationData(evaluation),
-    at_reference: evaluationData(atReference),
+    curves: { ...evaluationData(evaluation), standard_uncertainty: bandsData(assessment.bands) },
+    at_reference: { ...evaluationData(atReference), line_spreads: lineSpreadsData(assessment) },
   }
+}
+
+/** Of the total's amplitude density, on the points of the curves. */
+function bandsData(bands: Bands | null): object | null {
+  if (bands === null) return null
+  const { combined, statistical, systematic } = bands
+  return { combined: [...combined], statistical: [...statistical], systematic: [...systematic] }
+}
+
+function lineSpreadsData({ atReference, lineSpreads }: Assessment): object {
+  return lineSpreads.map((spread, k) => ({ line: atReference.lines[k].id, ...spread }))
+}
+
+function derivedData({ roots, derived }: Budget): object {
+  const values = Float64Array.from(roots, root => root.value)
+  return derived.map(({ id, text, dimension, formula, about, evidence, place }) => ({
+    ...{ id, text, dimension, about, evidence },
+    value: formula.value(values),
+    roots: formula.roots.map(index => roots[index].id),
+    place: placeText(place),
+  }))
+}
+
+/** A requirement whose number does not exist here has null for it. */
+export function requirementData({ requirement, value, spread, frequency, met }: RequirementResult): object {
+  const { id, of, where, bound, value: wanted, text, about, place } = requirement
+  const exists = Number.isFinite(value)
+  return {
+    ...{ id, of, where, bound, wanted, text, about },
+    value: exists ? value : null,
+    spread: exists ? spread : null,
+    frequency,
+    met,
+    place: placeText(place),
+  }
+}
+
+function variantsData({ variants }: Assessment): object {
+  return variants.map(({ id, title, assessment: { headlines, modes, requirements, evaluation, bands } }) => ({
+    ...{ id, title, headlines, modes },
+    requirements: requirements.map(requirementData),
+    curves: {
+      anchors: evaluation.points.anchors,
+      frequency: [...evaluation.points.frequency],
+      anchor: [...evaluation.points.anchor],
+      offset: [...evaluation.points.offset],
+      total: [...evaluation.total],
+      standard_uncertainty: bandsData(bands),
+    },
+  }))
 }
 
 /** The same as text: one line a member of the outer object, shortest round-trip digits. */

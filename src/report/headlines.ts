@@ -1,5 +1,7 @@
-import type { Assessment, At } from '../model/assessment.js'
-import { frequencyDigits, densityText, frequencyText, marginText, percentText, rangeText } from './numbers.js'
+import type { Assessment, At, Spread } from '../model/assessment.js'
+import { spokenFrequency, spokenRange } from './landmarks.js'
+import { hasBackAction, marginText, noMarginReason } from './margins.js'
+import { densityText, frequencyText, partsText, percentText } from './numbers.js'
 import { inSentence, lineTitle, listText } from './titles.js'
 
 /** A number that a report opens with. */
@@ -21,15 +23,16 @@ export interface Opening {
 /** How good the sensor is, where, how far from the quantum limit, and what sets it. */
 export function opening(assessment: Assessment): Opening {
   const { best } = assessment.headlines
-  const value = densityText(best.asd, assessment.unit)
-  const margin = best.totalMargin === null ? '' : `, ${limitText(best.totalMargin)}`
+  const value = densityText(best.asd, assessment.unit, best.asdSpread.combined)
+  const margin = best.totalMargin === null || !hasBackAction(assessment) ? '' : `, ${limitText(best.totalMargin, best)}`
   const rest = `at ${bestFrequencyText(assessment)}${margin}, set by ${setBy(assessment, best)}.`
   return { value, rest, sentence: `Best ${value} ${rest}` }
 }
 
 /** The best frequency to a hundredth or so of the band in which the sensor is good. */
-export function bestFrequencyText({ headlines: { best, halfPowerBand } }: Assessment): string {
-  return frequencyText(best.frequency, frequencyDigits(best.frequency, halfPowerBand.to - halfPowerBand.from))
+export function bestFrequencyText(assessment: Assessment): string {
+  const { best, halfPowerBand } = assessment.headlines
+  return spokenFrequency(assessment, best.frequency, halfPowerBand.to - halfPowerBand.from)
 }
 
 /** Where tables and cards are evaluated: the file's reference frequency, else the best one. */
@@ -38,8 +41,8 @@ export function tableFrequencyText(assessment: Assessment): string {
   return reference === null ? bestFrequencyText(assessment) : frequencyText(reference.frequency, 12)
 }
 
-function limitText(margin: number): string {
-  const text = marginText(margin)
+function limitText(margin: number, { totalMarginSpread }: At): string {
+  const text = marginText(margin, totalMarginSpread?.combined)
   return text === 'at' ? 'at the standard quantum limit' : `${text} the standard quantum limit`
 }
 
@@ -64,41 +67,46 @@ function roundPercent(share: number): string {
 export function headlineNumbers(assessment: Assessment): readonly Headline[] {
   const { headlines } = assessment
   return [
-    bestHeadline(assessment),
+    densityHeadline(assessment, headlines.best, {
+      id: 'best',
+      label: 'Best sensitivity',
+      note: `at ${bestFrequencyText(assessment)}`,
+    }),
     ...(headlines.reference === null ? [] : [referenceHeadline(assessment, headlines.reference)]),
-    ...marginHeadlines(headlines.reference ?? headlines.best, tableFrequencyText(assessment)),
+    ...marginHeadlines(assessment, headlines.reference ?? headlines.best),
     largestHeadline(assessment, headlines.reference ?? headlines.best),
     {
       id: 'band',
       label: 'Half-power band',
       value: frequencyText(headlines.halfPowerBand.to - headlines.halfPowerBand.from, 3),
-      note: `total power at most twice the best, ${rangeText(headlines.halfPowerBand.from, headlines.halfPowerBand.to)}`,
+      note: `total power at most twice the best, ${spokenRange(assessment, headlines.halfPowerBand)}`,
     },
     ...occupancyHeadlines(assessment),
   ]
 }
 
-function bestHeadline(assessment: Assessment): Headline {
-  const value = densityText(assessment.headlines.best.asd, assessment.unit)
-  return { id: 'best', label: 'Best sensitivity', value, note: `at ${bestFrequencyText(assessment)}` }
-}
-
 function referenceHeadline(assessment: Assessment, reference: At): Headline {
-  return {
-    id: 'reference',
-    label: 'At the reference frequency',
-    value: densityText(reference.asd, assessment.unit),
-    note: `at ${tableFrequencyText(assessment)}`,
-  }
+  const note = `at ${tableFrequencyText(assessment)}`
+  return densityHeadline(assessment, reference, { id: 'reference', label: 'At the reference frequency', note })
 }
 
-function marginHeadlines(at: At, frequency: string): readonly Headline[] {
-  const where = `the standard quantum limit, as a ratio of powers, at ${frequency}`
-  const margin = (id: string, label: string, value: number | null): readonly Headline[] =>
-    value === null ? [] : [{ id, label, value: marginHeadline(value), note: where }]
+function densityHeadline({ unit }: Assessment, { asd, asdSpread }: At, words: Omit<Headline, 'value'>): Headline {
+  const value = densityText(asd, unit, asdSpread.combined)
+  return { ...words, value, note: joined(words.note, partsText(asd, unit, asdSpread)) }
+}
+
+function marginHeadlines(assessment: Assessment, at: At): readonly Headline[] {
+  if (at.totalMargin !== null && !hasBackAction(assessment))
+    return [{ id: 'margins', label: 'Margins to quantum limits', value: 'left out', note: noMarginReason }]
+  const where = `the standard quantum limit, as a ratio of powers, at ${tableFrequencyText(assessment)}`
+  const margin = (words: Pick<Headline, 'id' | 'label'>, value: number | null, spread: Spread | null): Headline[] => {
+    if (value === null) return []
+    const note = joined(where, spread === null ? '' : partsText(value, 'dB', spread))
+    return [{ ...words, value: marginHeadline(value, spread), note }]
+  }
   return [
-    ...margin('total-margin', 'Margin of the total', at.totalMargin),
-    ...margin('added-margin', 'Margin of the added noise', at.addedMargin),
+    ...margin({ id: 'total-margin', label: 'Margin of the total' }, at.totalMargin, at.totalMarginSpread),
+    ...margin({ id: 'added-margin', label: 'Margin of the added noise' }, at.addedMargin, at.addedMarginSpread),
   ]
 }
 
@@ -109,14 +117,24 @@ export function furtherFacts(assessment: Assessment): readonly { readonly label:
   return [
     ...(reference === null
       ? []
-      : [{ label: `At ${tableFrequencyText(assessment)}`, value: densityText(reference.asd, assessment.unit) }]),
-    ...(added === null ? [] : [{ label: 'Added noise, to the same limit', value: marginHeadline(added) }]),
+      : [
+          {
+            label: `At ${tableFrequencyText(assessment)}`,
+            value: densityText(reference.asd, assessment.unit, reference.asdSpread.combined),
+          },
+        ]),
+    ...(added === null ? [] : [addedFact(assessment, added, best.addedMarginSpread)]),
     { label: 'Half-power band', value: frequencyText(halfPowerBand.to - halfPowerBand.from, 3) },
   ]
 }
 
-function marginHeadline(margin: number): string {
-  const text = marginText(margin)
+function addedFact(assessment: Assessment, added: number, spread: Spread | null): { label: string; value: string } {
+  if (!hasBackAction(assessment)) return { label: 'Margins to quantum limits', value: 'left out: no back-action in it' }
+  return { label: 'Added noise, to the same limit', value: marginHeadline(added, spread) }
+}
+
+function marginHeadline(margin: number, spread: Spread | null): string {
+  const text = marginText(margin, spread?.combined)
   return text === 'at' ? 'Exactly at' : text
 }
 
@@ -131,21 +149,26 @@ function largestHeadline(assessment: Assessment, at: At): Headline {
 }
 
 function occupancyHeadlines({ modes }: Assessment): readonly Headline[] {
-  return modes.flatMap(mode =>
-    mode.finalOccupancy === null
-      ? []
-      : [
-          {
-            id: `occupancy-${mode.id}`,
-            label: `Final occupancy of ${mode.id}`,
-            value: occupancyText(mode.finalOccupancy),
-            note: `quanta with the light on; the bath alone has ${occupancyText(mode.thermalOccupancy)}`,
-          },
-        ],
-  )
+  return modes.flatMap(mode => {
+    if (mode.finalOccupancy === null) return []
+    const spread = mode.finalOccupancySpread
+    const note = `quanta with the light on; the bath alone has ${occupancyText(mode.thermalOccupancy)}`
+    return [
+      {
+        id: `occupancy-${mode.id}`,
+        label: `Final occupancy of ${mode.id}`,
+        value: occupancyText(mode.finalOccupancy, spread?.combined),
+        note: joined(note, spread === null ? '' : partsText(mode.finalOccupancy, '', spread)),
+      },
+    ]
+  })
 }
 
-/** `26.4`, `0.31`, `6.87 × 10⁴`. */
-export function occupancyText(quanta: number): string {
-  return densityText(quanta, '')
+function joined(note: string, parts: string): string {
+  return parts === '' ? note : `${note}; ${parts}`
+}
+
+/** `26.4`, `0.31(4)`, `6.87 × 10⁴`. */
+export function occupancyText(quanta: number, uncertainty = 0): string {
+  return densityText(quanta, '', uncertainty)
 }

@@ -1,10 +1,42 @@
+import { fitPrefix, LEAST_TOLD, withUncertainty } from '../figure/prefix.js'
+import type { Spread } from '../model/assessment.js'
+import { plainDecimal, toSignificant } from '../quantity/digits.js'
 import { formatQuantity, formatTex } from '../quantity/format.js'
 
 const space = '\u00a0'
 
-/** Three significant digits with the prefix that fits: `8.31 aN/√Hz`. */
-export function densityText(asd: number, unit: string): string {
-  return formatQuantity(asd, unit)
+/**
+ * Three significant digits with the prefix that fits, `8.31 aN/√Hz`; with a standard uncertainty the digits that it
+ * leaves honest, `8.3(2) aN/√Hz`.
+ */
+export function densityText(asd: number, unit: string, uncertainty = 0): string {
+  return withUncertainty(asd, unit, uncertainty)
+}
+
+/** `0.15 aN/√Hz statistical, 0.14 aN/√Hz systematic`, in the unit of the value; empty where it has not both. */
+export function partsText(value: number, unit: string, { statistical, systematic }: Spread): string {
+  const told = (part: number): boolean => part > 0 && part >= LEAST_TOLD * Math.abs(value)
+  if (!told(statistical) || !told(systematic)) return ''
+  return `${besideText(statistical, value, unit)} statistical, ${besideText(systematic, value, unit)} systematic`
+}
+
+/** An uncertainty in two digits and with the prefix that its value has: `0.15 aN/√Hz` beside 9.45 aN/√Hz. */
+export function besideText(uncertainty: number, value: number, unit: string): string {
+  if (unit === '' || unit === 'dB') return withUnit(plainText(uncertainty), unit)
+  const fitted = fitPrefix(value, unit)
+  return withUnit(plainText(uncertainty / fitted.factor), fitted.unit)
+}
+
+/** Two significant digits without an exponent where that is short. */
+function plainText(value: number): string {
+  if (!(value > 0)) return '0'
+  return value < 1e-4 || value >= 1e4
+    ? formatQuantity(value, '', { digits: 2 })
+    : plainDecimal(toSignificant(value, 2), 0)
+}
+
+function withUnit(number: string, unit: string): string {
+  return unit === '' ? number : `${number}${space}${unit}`
 }
 
 /** `1.2435 MHz`: at most so many significant digits, without trailing zeros. */
@@ -34,21 +66,6 @@ export function numberTex(value: number, digits = 4): string {
 /** Zeros at the end of the first decimal fraction say nothing about a number that carries no uncertainty. */
 function trimZeros(text: string): string {
   return text.replace(/\.(\d*?)0+(?=\D|$)/, (_, kept: string) => (kept === '' ? '' : `.${kept}`))
-}
-
-/** `4.1 dB`, with a true minus sign. */
-export function decibelText(value: number): string {
-  return `${value
-    .toFixed(1)
-    .replace(/^-0\.0$/, '0.0')
-    .replace('-', '−')}${space}dB`
-}
-
-/** `4.1 dB above`, `0.3 dB below`, `at`: where something stands relative to a limit. */
-export function marginText(value: number): string {
-  const rounded = Math.round(value * 10) / 10
-  if (rounded === 0) return 'at'
-  return `${Math.abs(rounded).toFixed(1)}${space}dB ${rounded > 0 ? 'above' : 'below'}`
 }
 
 /** `62 %`, `0.4 %`, `< 0.01 %`; a negative share keeps its sign. */

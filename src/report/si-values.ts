@@ -10,7 +10,7 @@ const densityUnits: ReadonlyMap<string, string> = new Map([
 ])
 
 /** A root's value in the canonical unit of its dimension, without prefix: `3.1 × 10⁻¹² kg`. */
-export function siText({ value, dimension }: Root): string {
+export function siText({ value, dimension }: Pick<Root, 'value' | 'dimension'>): string {
   return withUnit(numberText(value, 6), dimension)
 }
 

@@ -29,7 +29,9 @@ function modeFacts(mode: ModeState): readonly Fact[] {
     fact('Linewidth, bare', frequencyText(mode.linewidth, 3)),
     fact('Linewidth, light on', frequencyText(mode.effectiveLinewidth, 3)),
     fact('Quanta of its bath', occupancyText(mode.thermalOccupancy)),
-    ...optional('Final occupancy', mode.finalOccupancy, occupancyText),
+    ...optional('Final occupancy', mode.finalOccupancy, quanta =>
+      occupancyText(quanta, mode.finalOccupancySpread?.combined),
+    ),
     ...optional('Zero-point motion', mode.zeroPoint, value => formatQuantity(value, 'm')),
     ...optional('Cooperativity 4g²/κΓ', mode.cooperativity, value => numberText(value, 3)),
   ]

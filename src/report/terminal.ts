@@ -1,8 +1,9 @@
 import type { Assessment } from '../model/assessment.js'
 import type { Evaluation } from '../model/evaluation.js'
-import { signedDensity } from './contributions.js'
+import { pointValue } from './contributions.js'
 import { opening } from './headlines.js'
-import { decibelText, densityText, frequencyText, percentText } from './numbers.js'
+import { decibelText, hasBackAction } from './margins.js'
+import { densityText, frequencyText, percentText } from './numbers.js'
 import { familyTitles } from './titles.js'
 
 /** A table of plain strings; the first row is its head. */
@@ -23,7 +24,9 @@ export function terminalHeading(assessment: Assessment): readonly string[] {
  * The total, every contribution with its share, every limit and the margins at the points of an evaluation, one row each;
  * for a few frequencies. Lines are sorted by their power at the first of them.
  */
-export function tableByLine({ unit }: Assessment, at: Evaluation): TextTable {
+export function tableByLine(assessment: Assessment, at: Evaluation): TextTable {
+  const { unit } = assessment
+  const margins = hasBackAction(assessment)
   const points = [...at.points.frequency.keys()]
   const cells = (label: string, family: string, cell: (i: number) => readonly [string, string]): readonly string[] =>
     [label, family, ...points.flatMap(cell)].map(plain)
@@ -32,14 +35,14 @@ export function tableByLine({ unit }: Assessment, at: Evaluation): TextTable {
     cells('total', '', i => [densityText(Math.sqrt(at.total[i]), unit), percentText(1)]),
     ...lines.map(line =>
       cells(line.title, familyTitles[line.family], i => [
-        signedDensity(line.psd[i], unit),
+        pointValue(line, at, { unit, index: i }),
         percentText(line.psd[i] / at.total[i]),
       ]),
     ),
     ...at.limits.map(limit =>
       cells(limit.title, 'limit', i => [
         densityText(Math.sqrt(limit.psd[i]), unit),
-        decibelText(10 * Math.log10(at.total[i] / limit.psd[i])),
+        margins ? decibelText(10 * Math.log10(at.total[i] / limit.psd[i])) : '',
       ]),
     ),
   ]
@@ -49,7 +52,7 @@ export function tableByLine({ unit }: Assessment, at: Evaluation): TextTable {
 
 /** One row a frequency: the total, the margin to the standard quantum limit, the largest contribution; for many of them. */
 export function tableByFrequency(assessment: Assessment, at: Evaluation): TextTable {
-  const limit = at.limits.find(each => each.id === 'sql')?.psd ?? null
+  const limit = (hasBackAction(assessment) ? at.limits.find(each => each.id === 'sql')?.psd : null) ?? null
   const rows = [...at.points.frequency].map((frequency, i) => {
     const largest = at.lines.reduce((best, line) => (line.psd[i] > best.psd[i] ? line : best))
     return [

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { curvesCsv, powerUnitOf, textCell } from '../../src/report/curves-csv.js'
 import { curvesJson } from '../../src/report/curves-json.js'
 import { fixtureAssessment } from './fixture.js'
+import { uncertainAssessment } from './uncertain-fixture.js'
 
 const assessment = fixtureAssessment()
 const { evaluation } = assessment
@@ -31,6 +32,20 @@ describe('curves.csv', () => {
     expect(column('offset (Hz)')).toEqual([...evaluation.points.offset])
     expect(column('total (N/√Hz)')).toEqual([...evaluation.total].map(Math.sqrt))
     expect(column('limit sql (N/√Hz)')).toEqual([...evaluation.limits[0].psd].map(Math.sqrt))
+  })
+
+  it('states the standard uncertainty of the total and its two kinds, where it was computed', () => {
+    const uncertain = parse(curvesCsv(uncertainAssessment()))
+    expect(uncertain[0].slice(3, 8)).toEqual([
+      'total (N/√Hz)',
+      'total standard uncertainty (N/√Hz)',
+      'total statistical uncertainty (N/√Hz)',
+      'total systematic uncertainty (N/√Hz)',
+      'added (N/√Hz)',
+    ])
+    expect(uncertain.slice(1).map(row => Number(row[4]))).toEqual(
+      [...evaluation.total].map(psd => 0.05 * Math.sqrt(psd)),
+    )
   })
 
   it('keeps the sign of a correlation', () => {
@@ -88,6 +103,37 @@ describe('curves.json', () => {
     const curves = data['curves'] as { total: number[]; sources: { vacuum?: { correlation: number[] } }[] }
     expect(curves.total).toEqual([...evaluation.total])
     expect(curves.sources[1].vacuum?.correlation).toEqual([...(evaluation.sources[1].vacuum?.correlation ?? [])])
+  })
+
+  it('has null for uncertainties that were not computed', () => {
+    expect(data['curves']).toMatchObject({ standard_uncertainty: null })
+    expect(data).toMatchObject({ requirements: [], variants: [], derived: [], correlations: [], citations: [] })
+  })
+
+  it('gives all that is uncertain, required, varied, derived and cited', () => {
+    const all = JSON.parse(curvesJson(uncertainAssessment()))
+    const part = (share: number) => [...evaluation.total].map(psd => share * Math.sqrt(psd))
+    expect(all.curves.standard_uncertainty).toEqual({
+      combined: part(0.05),
+      statistical: part(0.03),
+      systematic: part(0.04),
+    })
+    expect(all.headlines.best.asdSpread.combined).toBeCloseTo(0.05 * all.headlines.best.asd, 30)
+    expect(all.at_reference.line_spreads.map((each: { line: string }) => each.line)).toEqual(
+      evaluation.lines.map(line => line.id),
+    )
+    expect(all.root_shares[0]).toMatchObject({ root: 'fundamental.temperature', elasticity: 0.43 })
+    expect(all.requirements[0]).toMatchObject({ id: 'proposal', wanted: 2e-17, value: 1.63e-17, met: true })
+    expect(all.requirements[3]).toMatchObject({ value: null, spread: null, met: false })
+    expect(all.derived).toEqual([
+      expect.objectContaining({ id: 'spring', roots: ['mass', 'fundamental.frequency'], value: expect.any(Number) }),
+    ])
+    expect(all.correlations).toEqual([
+      { roots: ['mass', 'fundamental.temperature'], coefficient: -0.5, place: 'budgets/shared/cryostat.yaml:20:3' },
+    ])
+    expect(all.citations[0].key).toBe('ring')
+    expect(all.variants[0]).toMatchObject({ id: 'cold', title: 'one kelvin' })
+    expect(all.variants[0].curves.total).toEqual([...evaluation.total].map(psd => psd / 4))
   })
 
   it('gives roots with the text and place of the file', () => {

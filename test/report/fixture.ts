@@ -126,7 +126,7 @@ export function fixtureBudget(sensor = 'fixture'): Budget {
     readoutPlace: place(5),
     band: { low: 1.2e6, high: 1.3e6, place: place(6) },
     reference: 1.2435e6,
-    roots,
+    roots: roots.map(root => ({ ...root, place: { ...root.place, file: file.replace('fixture', sensor) } })),
     derived: [],
     correlations: [],
     requirements: [],

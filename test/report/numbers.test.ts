@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { decibelText, frequencyText, marginText, numberText, percentText, rangeText } from '../../src/report/numbers.js'
+import { decibelText, marginText } from '../../src/report/margins.js'
+import { frequencyText, numberText, percentText, rangeText } from '../../src/report/numbers.js'
 
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ')
 

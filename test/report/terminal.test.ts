@@ -36,6 +36,22 @@ describe('tables for a terminal', () => {
     expect(rows[0]).toEqual(['1.2 MHz', '408 aN/√Hz', '17.9 dB', 'Shot', '99.5 %'])
   })
 
+  it('call a signed line negligible that is next to nothing', () => {
+    const [first] = assessment.atReference.total
+    const lines = assessment.atReference.lines.map(line =>
+      line.signed ? { ...line, psd: Float64Array.of(-9e-7 * first) } : line,
+    )
+    const rows = tableByLine(assessment, { ...assessment.atReference, lines }).rows
+    expect(rows.find(row => row[1] === 'correlation')?.[2]).toBe('negligible')
+  })
+
+  it('have no margins for a readout without back-action', () => {
+    const warnings = [{ ...assessment.warnings[0], code: 'no-back-action' }]
+    const silent = { ...assessment, warnings }
+    expect(tableByFrequency(silent, assessment.atReference).rows[0][2]).toBe('')
+    expect(tableByLine(silent, assessment.atReference).rows.at(-1)?.[3]).toBe('')
+  })
+
   it('leave the margin empty where there is no standard quantum limit', () => {
     const at = { ...assessment.atReference, limits: [] }
     expect(tableByFrequency(assessment, at).rows[0][2]).toBe('')

@@ -80,7 +80,7 @@ describe('the tables', () => {
   it('give every value of the file as written, in SI, with uncertainty, evidence and line', () => {
     expect(view.parameters).toHaveLength(assessment.budget.roots.length)
     const row = view.parameters.find(each => each.id === 'mass')
-    expect(row).toMatchObject({ written: '3.1(2) ng', evidence: 'finite elements', place: 'budget.yaml:10' })
+    expect(row).toMatchObject({ written: '3.1(2) ng', evidence: { note: 'finite elements' }, place: 'budget.yaml:10' })
     expect(plain(row?.si ?? '')).toBe('3.1 × 10⁻¹² kg')
     expect(plain(row?.uncertainty ?? '')).toBe('2 × 10⁻¹³ kg')
   })

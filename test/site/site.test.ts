@@ -3,6 +3,7 @@ import { beforeAll, describe, expect, it } from 'vitest'
 import type { SiteInput } from '../../src/site/input.js'
 import { renderSite, type SiteFiles } from '../../src/site/render.js'
 import { fixtureAssessment } from '../report/fixture.js'
+import { uncertainAssessment } from '../report/uncertain-fixture.js'
 
 const message = '`mas` is no key of a resonator; the nearest is `mass` <b>&'
 const problem = {
@@ -16,6 +17,7 @@ const input: SiteInput = {
   project: { root: '/nowhere', title: 'Sensors <of> the shore', subtitle: 'drafts & records', date: '2026-03-14' },
   results: [
     { sensor: 'tern', assessment: fixtureAssessment('tern'), problems: [] },
+    { sensor: 'plover', assessment: uncertainAssessment('plover'), problems: [] },
     { sensor: 'avocet', assessment: fixtureAssessment('avocet'), problems: [] },
     { sensor: 'whimbrel', assessment: null, problems: [problem] },
   ],
@@ -113,6 +115,33 @@ describe('the site', () => {
       expect(levels.filter(level => level === 1), path).toHaveLength(1)
       levels.forEach((level, i) => expect(level, path).toBeLessThanOrEqual((levels[i - 1] ?? 0) + 1))
     }
+  })
+
+  it('shows requirements on the report and on the front page', () => {
+    expect(text(page('index.html'))).toContain('Requirements 2 of 4 missed')
+    const html = text(page('plover/draft/index.html'))
+    expect(html).toContain('proposal as promised Total below 20 aN/√Hz 16.3(5) aN/√Hz at 1.2435 MHz met by 1.8 dB')
+    expect(html).toContain('missed by 3.5 dB, 15 standard uncertainties')
+    expect(text(page('tern/draft/index.html'))).not.toContain('Requirements')
+  })
+
+  it('shows what is uncertain, with bars, and links evidence to the bibliography', () => {
+    const html = page('plover/draft/index.html')
+    expect(html.match(/<path class="bar-share" d="M0 0h(64|36)v6H0z"\/>/g)).toHaveLength(2)
+    expect(text(html)).toContain('fundamental.temperature 4.1(1) K 1 % → 0.43 % 0.65 aN/√Hz 64.0 %')
+    const row = html.slice(html.indexOf('id="root-fundamental.temperature"'))
+    const number = /href="#reference-(\d+)"/.exec(row)?.[1] ?? 'none'
+    expect(text(html)).toContain('A. Nobody, Ringdowns, J. Invented 3, 14 (2025) https://doi.org/10.1234/abc')
+    expect(html).toContain(`<li id="reference-${number}">A. Nobody, Ringdowns`)
+    expect(text(page('tern/draft/index.html'))).toContain('so that none of these numbers has one')
+  })
+
+  it('draws the band of the total and the variants, also in the figure that stands alone', () => {
+    for (const path of ['plover/draft/index.html', 'plover/draft/figure.svg']) {
+      expect(String(files.get(path)), path).toContain('class="figure-spread figure-fill"')
+      expect(String(files.get(path)), path).toContain('cold: one kelvin')
+    }
+    expect(page('tern/draft/index.html')).not.toContain('figure-spread')
   })
 
   it('makes every sideways scroll box reachable and named', () => {

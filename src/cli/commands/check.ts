@@ -1,3 +1,6 @@
+import { visible } from '../../budget/format-problem.js'
+import { requirementData } from '../../report/curves-json.js'
+import { requirementLine, requirementRows } from '../../report/requirements.js'
 import { terminalHeading } from '../../report/terminal.js'
 import { worst, type ExitCode, type Io } from '../io.js'
 import { assessAll, codeOf, reportOutcomes, reportProblems, type Outcome } from '../outcome.js'
@@ -40,7 +43,8 @@ function print(outcomes: readonly Outcome[], options: CheckOptions, io: Io): voi
 function sentence({ target, assessment }: Outcome): string {
   if (assessment === null) return ''
   const [, best] = terminalHeading(assessment)
-  return `${target.name}: ${best}\n`
+  const requirements = requirementRows(assessment).map(row => `  ${visible(requirementLine(row))}\n`)
+  return `${target.name}: ${best}\n${requirements.join('')}`
 }
 
 /** For machines: what a line says, with every number in SI units. */
@@ -51,18 +55,11 @@ function finding(outcome: Outcome): object {
     budget: target.name,
     file: target.file,
     exitCode: codeOf(outcome),
-    best: best === undefined ? null : { frequency: best.frequency, asd: best.asd, unit: assessment?.unit },
-    requirements: (assessment?.requirements ?? []).map(
-      ({ requirement: { id, of, bound, value: wanted }, value, frequency, met }) => ({
-        id,
-        of,
-        bound,
-        wanted,
-        value,
-        frequency,
-        met,
-      }),
-    ),
+    best:
+      best === undefined
+        ? null
+        : { frequency: best.frequency, asd: best.asd, spread: best.asdSpread, unit: assessment?.unit },
+    requirements: (assessment?.requirements ?? []).map(requirementData),
     problems: problems.map(({ severity, code, place, message }) => ({ severity, code, ...place, message })),
     fault: failure !== null && failure.problems.length === 0 ? failure.lines.join('\n') : null,
   }

@@ -47,7 +47,8 @@ async function evaluated({ budget }: Assessment, points: Float64Array): Promise<
 /** The published file; where frequencies are asked for, its curves stand on them. */
 async function asData(assessment: Assessment, asked: Evaluation | null): Promise<string> {
   const { curvesJson } = await import('../../report/curves-json.js')
-  return curvesJson(asked === null ? assessment : { ...assessment, evaluation: asked })
+  // The uncertainty at every point belongs to the engine's own points.
+  return curvesJson(asked === null ? assessment : { ...assessment, evaluation: asked, bands: null })
 }
 
 async function asTable(assessment: Assessment, asked: Evaluation | null, io: Io): Promise<string> {
