@@ -31,7 +31,7 @@ export const declaration = {
   equations: [
     {
       name: 'loss',
-      tex: 'a_{\\mathrm{out}} = \\sqrt{\\eta}\\,a_{\\mathrm{in}} + \\sqrt{1-\\eta}\\,a_{\\mathrm{bath}},\\quad V = \\left(n+\\tfrac12\\right)\\mathbb 1',
+      tex: 'a_{\\mathrm{out}} = \\sqrt{\\eta}\\,a_{\\mathrm{in}} + \\sqrt{1-\\eta}\\,a_{\\mathrm{bath}},\\quad V = \\left(n+\\tfrac12\\right)\\begin{pmatrix}1&0\\\\0&1\\end{pmatrix}',
     },
   ],
   symbols: { n: 'quanta of the bath', V: 'symmetrised covariance of the bath' },

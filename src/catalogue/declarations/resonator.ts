@@ -38,6 +38,7 @@ export const modeFields = {
       quality: {
         type: 'quantity',
         dimension: 'number',
+        symbol: 'Q_j',
         range: 'positive',
         meaning: 'quality factor that this channel alone would leave',
       },
