@@ -1,7 +1,7 @@
 import type { DensitySpec } from '../model/budget.js'
 import { amountOf } from './amount.js'
 import type { BandRead } from './band.js'
-import { isExpression, parseWritten } from './expression.js'
+import { isExpression } from './expression.js'
 import type { Tree } from './tree.js'
 import type { Use } from './use.js'
 import type { Values } from './values.js'
@@ -26,7 +26,7 @@ export function readDensityFormula(
 ): DensitySpec | null | undefined {
   const amount = amountOf(tree)
   if (amount === null || !isExpression(amount.scalar.text)) return undefined
-  const written = parseWritten(amount.scalar, values.issues)
+  const written = values.parameters.parse(amount.scalar)
   if (written === null) return null
   if (!written.names.includes('f')) return undefined
   const checked = values.check(amount, true)

@@ -4,7 +4,7 @@ import { checkExpression } from '../quantity/expression/check-expression.js'
 import { compileExpression, type Program } from '../quantity/expression/compile-expression.js'
 import { constantsByName } from '../quantity/expression/constants.js'
 import { namesIn } from '../quantity/expression/names-in.js'
-import { parseExpression } from '../quantity/expression/parse-expression.js'
+import { expressionBounds, parseExpression } from '../quantity/expression/parse-expression.js'
 import type { Expression } from '../quantity/expression/tree.js'
 import type { ValueKind } from '../quantity/expression/value-kind.js'
 import { dimensionOf } from '../quantity/dimension.js'
@@ -60,7 +60,9 @@ function attempt<Result>(scalar: TreeScalar, issues: Issues, work: () => Result)
     return work()
   } catch (error) {
     if (!(error instanceof QuantityError)) throw error
-    issues.error('expression', placeWithin(scalar, error.offset), error.message)
+    // Of one that is too long the schema has said so at its beginning.
+    const offset = scalar.text.length > expressionBounds.length ? -1 : error.offset
+    issues.error('expression', placeWithin(scalar, offset), error.message)
     return null
   }
 }

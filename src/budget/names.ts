@@ -6,13 +6,24 @@ import { ownNames } from '../quantity/expression/names-in.js'
 export const idPattern = '^[a-z][a-z0-9_]{0,59}$'
 const id = new RegExp(idPattern)
 
-/** Names of constants and functions of the expression language, and words of the file format. */
+/** Names of constants and functions of the expression language, and some that it may have. */
 const reserved: ReadonlySet<string> = new Set([
   ...[...constantNames, ...functionNames, ...ownNames],
   ...['f', 'i', 'inf', 'nan', 'k_b', 'omega', 'log', 'pow', 'sinc', 'bessel', 'if', 'to'],
-  ...['kind', 'of', 'value', 'about', 'evidence', 'measured', 'distribution', 'effect'],
   // Words that every JavaScript object answers to.
   ...['constructor', 'prototype'],
+])
+
+/** Keys that stand around quantities and lines, so that a map of ids is never taken for one of those. */
+const keys: ReadonlySet<string> = new Set([
+  'kind',
+  'of',
+  'value',
+  'about',
+  'evidence',
+  'measured',
+  'distribution',
+  'effect',
 ])
 
 /** Words that columns of data and headlines use beside the lines of a budget. */
@@ -26,6 +37,7 @@ export function lineFault(word: string): string | null {
 /** Why a word cannot be an id: a clause that fits behind the word; null for a good one. */
 export function idFault(word: string): string | null {
   if (reserved.has(word)) return 'is the name of a constant or a function; choose another'
+  if (keys.has(word)) return 'is a key of the file format; choose another'
   if (id.test(word)) return null
   const foreign = [...word].find(character => (character.codePointAt(0) ?? 0) > 0x7f)
   if (foreign !== undefined) {

@@ -72,7 +72,7 @@ export class ParameterTable {
       const quantity = derived || amount.scalar.text === '' ? null : this.#stated(amount.scalar)
       this.all.set(key, { name: key, amount, quantity, checked: null })
       if (derived) refuseSpread(amount, issues)
-      const expression = derived ? parseWritten(amount.scalar, issues) : null
+      const expression = derived ? this.parse(amount.scalar) : null
       if (expression !== null) written.set(key, expression)
     }
     this.#derive(written)
@@ -107,6 +107,13 @@ export class ParameterTable {
         for (const name of error.circle) written.delete(name)
       }
     }
+  }
+
+  /** Reads an expression; null where it is none, which has been said: then nothing that it may mean counts as unused. */
+  parse(scalar: TreeScalar): Written | null {
+    const written = parseWritten(scalar, this.issues)
+    if (written === null) for (const [word] of scalar.text.matchAll(/[a-z]\w*/g)) this.#used.add(word)
+    return written
   }
 
   /** Checks an expression; null where it is wrong, or where something that it names is, which has been said. */

@@ -50,7 +50,7 @@ class RequirementReader {
   read({ key, keyPlace, value }: TreeEntry): Requirement | null {
     if (value.type !== 'map') return null
     const of = this.#of(child(value, 'of'))
-    const free = of?.startsWith('occupancy.') === true
+    const free = textOf(child(value, 'of'))?.startsWith('occupancy.') === true
     const place = free ? this.#refusePlace(value) : this.#one(key, value, { keys: ['at', 'over'], place: keyPlace })
     const bound = this.#one(key, value, { keys: ['below', 'above'], place: keyPlace })
     const where = place === null ? null : this.#where(place)

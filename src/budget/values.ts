@@ -3,7 +3,7 @@ import { QuantityError } from '../quantity/error.js'
 import type { Quantity } from '../quantity/parse.js'
 import { amountOf, type Amount } from './amount.js'
 import { factorBetween, fit, type Fitted } from './convert.js'
-import { isExpression, parseWritten, type Checked } from './expression.js'
+import { isExpression, type Checked } from './expression.js'
 import type { Issues } from './issues.js'
 import { Keeper } from './keeper.js'
 import { suggestion } from './nearest.js'
@@ -120,7 +120,7 @@ export class Values {
   /** Reads an expression where it stands; null where it is wrong, which has been said. */
   check(amount: Amount, withFrequency: boolean): Checked | null {
     refuseSpread(amount, this.issues)
-    const written = parseWritten(amount.scalar, this.issues)
+    const written = this.parameters.parse(amount.scalar)
     return written === null ? null : this.parameters.check(written, withFrequency)
   }
 

@@ -10,18 +10,21 @@ const mostProperties = 200
 const longestText = 25_000
 
 /**
- * Refuses, from the tokens alone, what would cost a parser time or stack: deep nesting, many aliases, very many tokens; and
- * the parts of YAML that a budget has no use for: directives, tags, explicit keys, a second document.
+ * The tokens of a text, made once for all; or a refusal, from them alone, of what would cost a parser time or stack: deep
+ * nesting, many aliases, very many tokens; and of the parts of YAML that a budget has no use for: directives, tags, explicit
+ * keys, a second document.
  */
-export function refuseUnbounded(source: SourceText): Problem | null {
+export function boundedTokens(source: SourceText): readonly string[] | Problem {
   const scan = new Scan()
+  const tokens: string[] = []
   for (const token of new Lexer().lex(source.text)) {
     const found = scan.next(token)
     if (found !== null)
       return { severity: 'error', code: found.code, place: source.place(scan.offset), message: found.message }
     scan.advance(token)
+    tokens.push(token)
   }
-  return null
+  return tokens
 }
 
 interface Found {

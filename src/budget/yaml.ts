@@ -1,8 +1,8 @@
-import { Composer, Parser, visit, type Document, type YAMLError } from 'yaml'
+import { Composer, Parser, visit, type CST, type Document, type YAMLError } from 'yaml'
 import type { Problem } from '../model/problem.js'
 import type { YamlFile } from './tree.js'
 import { treeOf } from './yaml-tree.js'
-import { refuseUnbounded } from './yaml-bounds.js'
+import { boundedTokens } from './yaml-bounds.js'
 import { yamlMessage } from './yaml-messages.js'
 import { sourceText, type SourceText } from './yaml-text.js'
 
@@ -13,20 +13,20 @@ import { sourceText, type SourceText } from './yaml-text.js'
 export function readYaml(file: string, bytes: Uint8Array): YamlFile {
   const source = sourceText(file, bytes)
   if ('severity' in source) return { tree: null, problems: [source] }
-  const unbounded = refuseUnbounded(source)
-  if (unbounded !== null) return { tree: null, problems: [unbounded] }
-  const document = compose(source)
+  const tokens = boundedTokens(source)
+  if ('severity' in tokens) return { tree: null, problems: [tokens] }
+  const document = compose(source, tokens)
   if ('severity' in document) return { tree: null, problems: [document] }
   if (document.errors.length > 0) return { tree: null, problems: syntaxProblems(source, document) }
   return treeOf(source, document)
 }
 
 /** The library's own search for equal keys is quadratic: it is off, and `treeOf` looks for them. */
-function compose(source: SourceText): Document.Parsed | Problem {
+function compose(source: SourceText, tokens: readonly string[]): Document.Parsed | Problem {
   const start = { file: source.file, line: 1, column: 1 }
   try {
     const composer = new Composer({ schema: 'failsafe', uniqueKeys: false })
-    const documents = [...composer.compose(new Parser().parse(source.text), true, source.text.length)]
+    const documents = [...composer.compose(parse(tokens), true, source.text.length)]
     const [only] = documents
     if (only !== undefined && documents.length === 1) return only
     return { severity: 'error', code: 'yaml', place: start, message: 'the file does not hold one YAML document' }
@@ -34,6 +34,12 @@ function compose(source: SourceText): Document.Parsed | Problem {
     const reason = error instanceof Error ? error.message : 'unknown reason'
     return { severity: 'error', code: 'yaml', place: start, message: `this file cannot be read as YAML: ${reason}` }
   }
+}
+
+function* parse(tokens: readonly string[]): Generator<CST.Token> {
+  const parser = new Parser()
+  for (const token of tokens) yield* parser.next(token)
+  yield* parser.end()
 }
 
 /** Errors of these kinds follow from almost any other that stands before them. */
