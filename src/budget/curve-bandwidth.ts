@@ -30,13 +30,25 @@ function windowOf(tree: Tree | undefined, { issues }: Values): WindowName | null
   if (tree === undefined || word === null) return null
   const name = word.toLowerCase()
   if (isWindowName(name)) return name
-  issues.error(
-    'choice',
-    tree.place,
-    `${quoted(word)} is no window; there are ${windowNames.map(each => `\`${each}\``).join(', ')}${suggestion(name, windowNames)}`,
-  )
+  const other = otherNames.get(name)
+  const listed = windowNames.map(each => `\`${each}\``).join(', ')
+  const choice = other === undefined ? `there are ${listed}${suggestion(name, windowNames)}` : `write \`${other}\``
+  issues.error('choice', tree.place, `${quoted(word)} is no window; ${choice}`)
   return null
 }
+
+/** What the windows are called elsewhere; the nearest word would be a wrong one. */
+const otherNames: ReadonlyMap<string, WindowName> = new Map([
+  ['hanning', 'hann'],
+  ['von hann', 'hann'],
+  ['boxcar', 'rectangular'],
+  ['uniform', 'rectangular'],
+  ['none', 'rectangular'],
+  ['triangular', 'bartlett'],
+  ['parabolic', 'welch'],
+  ['flattop', 'flat-top'],
+  ['flat top', 'flat-top'],
+])
 
 const ohm = dimensionOf({ mass: 1, length: 2, time: -3, current: -2 })
 

@@ -1,4 +1,5 @@
-import type { DensityField } from '../catalogue/declaration.js'
+import { declaredMeanings } from '../quantity/declared-meanings.js'
+import { meaningOfDensity, type DensityOf } from '../quantity/density.js'
 import {
   dimensionOf,
   equalDimensions,
@@ -26,14 +27,11 @@ export interface Kind {
   readonly cycles: Rational
 }
 
-type Of = DensityField['of']
-
-/** What a field takes: its amplitude in no bandwidth. */
-const amplitudes: Readonly<Record<Of, Kind>> = {
-  force: { dimension: dimensionOf({ mass: 1, length: 1, time: -2 }), cycles: zero },
-  length: { dimension: dimensionOf({ length: 1 }), cycles: zero },
-  // A number of quanta is a power per hertz without a unit.
-  quanta: { dimension: dimensionOf({ time: rational(-1, 2) }), cycles: rational(1, 2) },
+/** A number of quanta is a power per hertz without a unit; everything else is an amplitude in no bandwidth. */
+function amplitudeOf(of: DensityOf): Kind {
+  if (of === 'quanta') return { dimension: dimensionOf({ time: rational(-1, 2) }), cycles: half }
+  const { dimension, counts } = declaredMeanings[meaningOfDensity(of).of]
+  return { dimension, cycles: counts === 'cycles' ? one : zero }
 }
 
 const half = rational(1, 2)
@@ -44,7 +42,7 @@ const rootOhm: Kind = {
 }
 
 /** Whether a scale multiplies the power itself: quanta are counted, not squared. */
-export function scalesPower(of: Of): boolean {
+export function scalesPower(of: DensityOf): boolean {
   return of === 'quanta'
 }
 
@@ -52,13 +50,13 @@ export function scalesPower(of: Of): boolean {
  * Every way to read a column, times a scale, as the density of a field; a resistance is tried in both ways. With `counted`
  * false, hertz are not told from radians per second.
  */
-export function meaningsOf(unit: ColumnUnit, scale: Kind, of: Of, counted = true): Meaning[] {
+export function meaningsOf(unit: ColumnUnit, scale: Kind, of: DensityOf, counted = true): Meaning[] {
   const transducer = scalesPower(of) ? raised(scale, half) : scale
   return everyMeaning.filter(meaning => {
     if (!meaning.power && (unit.power || (scalesPower(of) && isDimensionless(unit.dimension)))) return false
     const amplitude = raised(unit, meaning.power ? half : one)
     const turned = times(amplitude, raised(rootOhm, rational(turns[meaning.resistance])))
-    const wanted = meaning.density ? times(amplitudes[of], perRootHertz) : amplitudes[of]
+    const wanted = meaning.density ? times(amplitudeOf(of), perRootHertz) : amplitudeOf(of)
     return same(times(turned, transducer), wanted, counted && !scalesPower(of))
   })
 }

@@ -1,5 +1,5 @@
-import type { DensityField } from '../catalogue/declaration.js'
 import type { Slot } from '../model/budget.js'
+import type { DensityOf } from '../quantity/density.js'
 import { QuantityError } from '../quantity/error.js'
 import { textOf } from './amount.js'
 import { readBandwidth, readResistance } from './curve-bandwidth.js'
@@ -22,7 +22,7 @@ export interface CurveReading {
 
 /** Where a table stands: what the field takes, and the path that names its roots. */
 export interface CurveSpot {
-  readonly of: DensityField['of']
+  readonly of: DensityOf
   readonly path: string
   readonly values: Values
 }
@@ -37,7 +37,7 @@ export function powerDensity(x: number, { unit, power, factor }: CurveReading): 
 /** Reads what the numbers of the second column mean; null where that is wrong or open, which has been said. */
 export function readReading(table: Tree, spot: CurveSpot): CurveReading | null {
   const unitTree = secondUnit(table)
-  const unit = unitTree === null ? null : columnUnit(unitTree, spot.values)
+  const unit = unitTree === null ? null : columnUnit(unitTree, spot)
   const scaleTree = child(table, 'scale')
   const scale = scaleTree === undefined ? { kind: noScale, slot: null } : readScale(scaleTree, spot)
   if (unitTree === null || unit === null || scale === null) return null
@@ -52,14 +52,14 @@ function secondUnit(table: Tree): Tree | null {
   return units?.type === 'list' ? (units.items[1] ?? null) : null
 }
 
-function columnUnit(tree: Tree, { issues }: Values): ColumnUnit | null {
+function columnUnit(tree: Tree, { of, values }: CurveSpot): ColumnUnit | null {
   const text = textOf(tree)
   if (tree.type !== 'scalar' || text === null) return null
   try {
-    return readColumnUnit(text)
+    return readColumnUnit(text, of)
   } catch (error) {
     if (!(error instanceof QuantityError)) throw error
-    issues.error('quantity', placeWithin(tree, error.offset), error.message)
+    values.issues.error('quantity', placeWithin(tree, error.offset), error.message)
     return null
   }
 }

@@ -1,4 +1,4 @@
-import type { DensityField } from '../catalogue/declaration.js'
+import { meaningOfDensity, type DensityOf } from '../quantity/density.js'
 import { describeDimension } from '../quantity/describe.js'
 import { multiplyDimensions } from '../quantity/dimension.js'
 import { add } from '../quantity/rational.js'
@@ -17,7 +17,7 @@ export interface MeaningKeys {
 export interface Undecided {
   readonly unit: ColumnUnit
   readonly scale: Kind
-  readonly of: DensityField['of']
+  readonly of: DensityOf
   /** What unit and scale admit, and of it what the keys leave. */
   readonly all: readonly Meaning[]
   readonly fit: readonly Meaning[]
@@ -74,22 +74,23 @@ function contradiction({ unit, all, keys }: Undecided): MeaningFault {
   }
 }
 
-const wanted: Readonly<Record<DensityField['of'], string>> = {
-  force: 'a density of force is wanted, such as `aN/√Hz` or `aN²/Hz`',
-  length: 'a density of displacement is wanted, such as `am/√Hz` or `am²/Hz`',
-  quanta: 'a number of quanta is wanted, the unit `1`',
+function wantedFor(of: DensityOf): string {
+  if (of === 'quanta') return 'a number of quanta is wanted, the unit `1`'
+  const { noun, examples } = meaningOfDensity(of)
+  const [amplitude, power] = examples.map(example => example.replace(/^\S+ /, ''))
+  return `a density of ${noun} is wanted, such as \`${amplitude}\` or \`${power}\``
 }
 
 function wrongKind({ unit, scale, of }: Undecided): MeaningFault {
   if (meaningsOf(unit, scale, of, false).length > 0)
     return {
       at: null,
-      message: `\`${unit.text}\` is not per hertz${scale === noScale ? '' : ' together with the scale'}, so that a factor 2π stays open; ${wanted[of]}`,
+      message: `\`${unit.text}\` is not per hertz${scale === noScale ? '' : ' together with the scale'}, so that a factor 2π stays open; ${wantedFor(of)}`,
     }
   if (scale !== noScale) {
     const kind = describeDimension(multiplyDimensions(unit.dimension, scale.dimension), add(unit.cycles, scale.cycles))
-    return { at: null, message: `\`${unit.text}\` times the scale is ${kind}; ${wanted[of]}` }
+    return { at: null, message: `\`${unit.text}\` times the scale is ${kind}; ${wantedFor(of)}` }
   }
   const kind = describeDimension(unit.dimension, unit.cycles)
-  return { at: null, message: `\`${unit.text}\` is ${kind}; ${wanted[of]}, or a \`scale\` from one to the other` }
+  return { at: null, message: `\`${unit.text}\` is ${kind}; ${wantedFor(of)}, or a \`scale\` from one to the other` }
 }

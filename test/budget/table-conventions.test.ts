@@ -1,18 +1,10 @@
 import { describe, expect, it } from 'vitest'
 import { noiseBandwidthInBins } from '../../src/physics/windows.js'
+import { uniformNumbers } from '../reference/uniform.js'
 import { readTable } from './table-fixture.js'
 
-/** Uniform numbers of a linear congruential generator (Knuth, MMIX), seeded: the same noise in every run. */
-function uniform(seed: bigint): () => number {
-  let state = seed
-  return () => {
-    state = (state * 6364136223846793005n + 1442695040888963407n) & 0xffffffffffffffffn
-    return Number(state >> 11n) / 2 ** 53
-  }
-}
-
 /** One noise: frequencies in Hz over the band and around it, one-sided force density in N²/Hz. */
-const random = uniform(20261201n)
+const random = uniformNumbers(20261201)
 const noise = Array.from({ length: 60 }, (_, i) => ({
   f: 1.15e6 + 2.9e3 * i + 1e3 * random(),
   S: 4e-36 * (1.24e6 / (1.15e6 + 2.9e3 * i)) * Math.exp(2 * (random() - 0.5)),

@@ -1,6 +1,5 @@
 import type { DensitySpec, Table } from '../../src/model/budget.js'
-import { rootValues } from '../../src/engine/bind.js'
-import { Binder } from '../../src/engine/bind.js'
+import { Binder, rootValues } from '../../src/engine/bind.js'
 import type { Shape } from '../../src/model/network.js'
 import { good, lines, read, small } from './read.js'
 
