@@ -63,8 +63,8 @@ function addBuild(root: Command, io: Io, done: Done): void {
     .command('build')
     .summary('compute the budgets and publish the site')
     .description(
-      'Computes every budget (or only those named: the site then holds no others) and publishes the site, whole or not ' +
-        'at all. A budget that is refused gets a page that says why.',
+      'Computes every budget and publishes the site, whole or not at all. A budget that is refused gets a page that ' +
+        'says why. Names choose the budgets whose errors are printed and decide the exit code; the site holds all.',
     )
     .argument('[budget...]', named)
     .helpOption('--help', 'print this help')

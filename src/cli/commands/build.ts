@@ -17,17 +17,31 @@ export async function build(options: BuildOptions, io: Io): Promise<ExitCode> {
   return await publishProject(projectOf(options.root, io), options.budgets, io)
 }
 
-/** What is wrong is printed after the site stands, so that it is what a person sees last. */
+/**
+ * The site always holds every budget, because its front page lists them all; names only choose what is told of. What is
+ * wrong is printed after the site stands, so that it is what a person sees last.
+ */
 export async function publishProject(project: Project, names: readonly string[], io: Io): Promise<ExitCode> {
-  const outcomes = await assessAll(targetsInside(project, names, io), 'report')
+  const told = new Set(targetsInside(project, names, io).map(target => target.name))
+  const outcomes = await assessAll(targetsInside(project, [], io), 'report')
   const { buildSite } = await import('../../site/build.js')
   const { pages, outputDir } = await buildSite({
-    project: { root: project.root, title: project.site.title, date: dateOf(project.root) },
+    project: { root: project.root, ...siteWords(project), date: dateOf(project.root) },
     results: outcomes.map(resultOf),
     outputDir: outputOf(project),
   })
   io.out(`${pages} pages; the front page is ${fromHere(join(outputDir, 'index.html'), io)}\n`)
-  return worst([reportProblems(project.problems, io), reportOutcomes(outcomes, io)])
+  return worst([
+    reportProblems(project.problems, io),
+    reportOutcomes(
+      outcomes.filter(({ target }) => told.has(target.name)),
+      io,
+    ),
+  ])
+}
+
+function siteWords({ site: { title, subtitle } }: Project): { title: string; subtitle: string | null } {
+  return { title, subtitle }
 }
 
 /** A fault of the engine has no place in the file; its page names the file. */
