@@ -2,6 +2,7 @@ import type { Complex } from '../model/network.js'
 import { EngineFault } from '../model/problem.js'
 import { conjugate, multiply as times, norm, reciprocal } from '../physics/complex.js'
 import { addUp } from './add-up.js'
+import { Decays } from './decays.js'
 import {
   addForms,
   isConstant,
@@ -41,8 +42,7 @@ export const inputs = { frequency: 0, base: blockBytes, offset: 2 * blockBytes }
 export class Tape {
   readonly #steps: Step[] = []
   readonly #known = new KeyTree()
-  /** Registers that hold 1/[κ/2 − i(Δ+ω)], for the exact difference of two of them. */
-  readonly #decays = new Map<number, { half: number; detuning: number }>()
+  readonly #decays = new Decays()
   /** Real registers that hold |a|² or 1/|a|² of a complex register: their product is 1. */
   readonly #moduli = new Map<number, { of: number; inverse: boolean }>()
   #blocks = 3
@@ -89,7 +89,7 @@ export class Tape {
     const form = this.complex(['decay', half, detuning], out => ({ n }) => {
       loops.decayReciprocal(out, inputs.frequency, n, half, detuning)
     })
-    this.#decays.set(form.terms[0].register, { half, detuning })
+    this.#decays.add(form.terms[0].register, { half, detuning })
     return form
   }
 
@@ -103,28 +103,8 @@ export class Tape {
   /** The same as a term; a form with more terms is written to a register of its own. */
   #single(form: Form): Term {
     if (isSingle(form)) return form.terms[0]
-    const exact = this.#withoutCancellation(form)
+    const exact = this.#decays.withoutCancellation(form, (a, b) => this.multiply(a, b))
     return (isSingle(exact) ? exact : this.#combine(exact)).terms[0]
-  }
-
-  /**
-   * s(A − B) with A, B = 1/[h − i(Δ+ω)], 1/[h − i(Δ′+ω)] is s·i(Δ − Δ′)·A·B, which loses no digits where the two are nearly equal:
-   * the stiffness of light far inside the linewidth.
-   */
-  #withoutCancellation(form: Form): Form {
-    for (const [i, a] of form.terms.entries()) {
-      const first = this.#decays.get(a.register)
-      if (first === undefined) continue
-      for (const b of form.terms.slice(i + 1)) {
-        const second = this.#decays.get(b.register)
-        if (second?.half !== first.half || a.scale.re !== -b.scale.re || a.scale.im !== -b.scale.im) continue
-        const rest: Form = { constant: form.constant, terms: form.terms.filter(t => t !== a && t !== b) }
-        const product = this.multiply(registerForm(a.register), registerForm(b.register))
-        const factor = times(a.scale, { re: 0, im: first.detuning - second.detuning })
-        return this.#withoutCancellation(addForms(rest, scaleForm(product, factor)))
-      }
-    }
-    return form
   }
 
   #combine({ constant: c, terms }: Form): Form {
