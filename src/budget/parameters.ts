@@ -133,9 +133,10 @@ export class ParameterTable {
     return this.all.get(name)
   }
 
-  warnUnused(): void {
+  /** Not of those in other files, which serve other budgets too. */
+  warnUnused(file: string): void {
     for (const { name, amount } of this.all.values()) {
-      if (this.#used.has(name)) continue
+      if (this.#used.has(name) || amount.scalar.place.file !== file) continue
       const message = `the parameter \`${name}\` is not used; delete it or name it in a field`
       this.issues.warning('unused', amount.scalar.place, message)
     }

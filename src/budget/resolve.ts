@@ -52,7 +52,7 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
       : readRequirements(child(root, 'requirements'), { components, lines, measurand, band }, reader.values)
   const correlations = readCorrelations(entry(root, 'correlations'), reader.values)
   const citations = readCitations(root, origin.data.files, issues)
-  reader.values.finish()
+  reader.values.finish(origin.file)
   if (issues.failed || band === null || measurand === null || readout === null || revision === null) return null
   return {
     sensor: origin.sensor,

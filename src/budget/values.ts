@@ -72,9 +72,9 @@ export class Values {
     return this.read(tree, use, { path: '', range })?.value ?? null
   }
 
-  /** Once every field is read. */
-  finish(): void {
-    this.parameters.warnUnused()
+  /** Once every field of the budget in `file` is read. */
+  finish(file: string): void {
+    this.parameters.warnUnused(file)
     this.keeper.finish()
   }
 

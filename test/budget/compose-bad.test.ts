@@ -206,7 +206,6 @@ const cases: readonly Case[] = [
       [shared('b')]: 'format: 1\nparameters:\n  base: 4 K\n',
     },
     told: [
-      `[unused] ${shared('b')}:3:9: warning: the parameter \`base\` is not used; delete it or name it in a field`,
       `[included-twice] ${tern}:5:29: \`base\` stands in two shared parts, at ${shared('a')}:2 and at ${shared('b')}:3; rename one, or include only one of them`,
     ],
   },

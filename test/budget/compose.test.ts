@@ -113,6 +113,13 @@ describe('shared parts', () => {
     expect(root(budget, 'cavity.frequency').value).toBe(195e12)
   })
 
+  it('may hold parameters that only other budgets use', () => {
+    const more = { 'budgets/shared/room.yaml': 'format: 1\nparameters: { room: 295 K }\n' }
+    expect(tern(`${head}include: ../shared/room.yaml\n`, more).warnings).toEqual([])
+    const own = tern(`${head}parameters: { room: 295 K }\n`).warnings.map(({ code }) => code)
+    expect(own).toEqual(['unused'])
+  })
+
   it('may include another one, which then counts once', () => {
     const room = 'format: 1\nparameters: { room: 295 K }\n'
     const part = (id: string) =>
