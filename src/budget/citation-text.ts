@@ -22,14 +22,14 @@ const mostAuthors = 6
  * does not have is left out.
  */
 export function citationText(entry: ReadEntry): string {
-  const year = yearOf(entry.issued)
-  const origin = [originOf(entry), year === null ? '' : `(${year})`].filter(text => text !== '').join(' ')
-  const doi = doiOf(entry.DOI)
-  const parts = [authorsOf(entry.author ?? entry.editor), plain(entry.title), origin, doi === null ? '' : `doi:${doi}`]
-  return parts
-    .filter(part => part !== '')
-    .join(', ')
-    .slice(0, 1500)
+  const [year, doi] = [yearOf(entry.issued), doiOf(entry.DOI)]
+  const work = listed([authorsOf(entry.author ?? entry.editor), plain(entry.title), originOf(entry)])
+  return listed([spaced([work, year === null ? '' : `(${year})`]), doi === null ? '' : `doi:${doi}`]).slice(0, 1500)
+}
+
+/** True where there is something to print that tells one work from another. */
+export function isCitable(entry: ReadEntry): boolean {
+  return authorsOf(entry.author ?? entry.editor) !== '' || plain(entry.title) !== ''
 }
 
 /** Where the work can be read: its DOI, else an address of the web; null for none. */
@@ -94,7 +94,7 @@ function authorsOf(value: unknown): string {
 function nameOf(value: unknown): string {
   if (typeof value !== 'object' || value === null) return ''
   const name = value as { readonly [part: string]: unknown }
-  const given = plain(name['given']).replace(/(\p{Lu})[\p{L}’']+/gu, '$1.')
+  const given = plain(name['given']).replace(/(\p{Lu})[\p{L}’']+(?![\p{L}’'.])/gu, '$1.')
   const parts = [given, plain(name['dropping-particle']), plain(name['non-dropping-particle'])]
   return spaced([...parts, plain(name['family']), plain(name['suffix']), plain(name['literal'])])
 }

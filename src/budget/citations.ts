@@ -1,8 +1,8 @@
 import { createRequire } from 'node:module'
 import type { Citation } from '../model/budget.js'
-import { EngineFault, type Problem } from '../model/problem.js'
+import { EngineFault, type Place, type Problem } from '../model/problem.js'
 import { scanBibtex, type BibEntry, type BibFile } from './bibtex.js'
-import { citationLink, citationText, type ReadEntry } from './citation-text.js'
+import { citationLink, citationText, isCitable, type ReadEntry } from './citation-text.js'
 import { FileRefusal, type FileSource } from './file-source.js'
 import type { Issues } from './issues.js'
 import { suggestion } from './nearest.js'
@@ -84,16 +84,16 @@ function isSound(entry: BibEntry, { strings }: BibFile, issues: Issues): boolean
   return open.length === 0 && !entry.tooComplex
 }
 
-const read = new Map<string, Citation | Problem>()
+const read = new Map<string, Citation>()
 
 /** One reading of a text is enough for all budgets that cite it. */
 function citationOf(entry: BibEntry, { strings }: BibFile): Citation | Problem {
-  const text = [...macrosOf(entry, strings)].map(each => each.text).join('\n') + entry.text
-  const known = read.get(text)
-  if (known !== undefined) return 'severity' in known ? { ...known, place: entry.place } : known
+  const macros = [...macrosOf(entry, strings)].map(({ text }) => `${text}\n`).join('')
+  const known = read.get(macros + entry.text)
+  if (known !== undefined) return known
+  const citation = parse(entry, macros)
   if (read.size > 1000) read.clear()
-  const citation = parse(entry, text)
-  read.set(text, citation)
+  if (!('severity' in citation)) read.set(macros + entry.text, citation)
   return citation
 }
 
@@ -108,22 +108,25 @@ function macrosOf(entry: BibEntry, strings: BibFile['strings'], found = new Set<
   return found
 }
 
-function parse({ key, place }: BibEntry, text: string): Citation | Problem {
+function parse(entry: BibEntry, macros: string): Citation | Problem {
+  const { key, place, text } = entry
+  const fault = { severity: 'error', code: 'bibtex', place } as const
   try {
-    const entry = library()(text, { forceType: '@biblatex/text', generateGraph: false })[0]
-    const printed = entry === undefined ? '' : citationText(entry)
-    if (entry !== undefined && printed !== '') return { key, text: printed, link: citationLink(entry) }
-    return {
-      severity: 'error',
-      code: 'bibtex',
-      place,
-      message: `the entry ${quoted(key)} has neither author nor title`,
-    }
+    const found = library()(macros + text, { forceType: '@biblatex/text', generateGraph: false })[0]
+    if (found !== undefined && isCitable(found)) return { key, text: citationText(found), link: citationLink(found) }
+    return { ...fault, message: `the entry ${quoted(key)} has neither author nor title` }
   } catch (error) {
-    const reason = error instanceof Error ? (error.message.split('\n')[0] ?? '') : 'unknown reason'
-    const message = `the entry ${quoted(key)} is no BibTeX that can be read (${reason.slice(0, 100)}); look for a missing comma or brace`
-    return { severity: 'error', code: 'bibtex', place, message }
+    const message = `the entry ${quoted(key)} is no BibTeX that can be read here; look for a missing comma or brace`
+    return { ...fault, place: placeOf(error, entry, macros), message }
   }
+}
+
+/** The library tells the line of what it has read. */
+function placeOf(error: unknown, { place, text }: BibEntry, macros: string): Place {
+  const told = /at line (\d{1,6}) col (\d{1,6})/.exec(error instanceof Error ? error.message : '')
+  const line = Number(told?.[1] ?? 1) - macros.split('\n').length
+  if (!(line > 0) || line >= text.split('\n').length) return place
+  return { ...place, line: place.line + line, column: Number(told?.[2] ?? 1) }
 }
 
 type Chain = (text: string, options: { forceType: string; generateGraph: boolean }) => readonly ReadEntry[]

@@ -1,9 +1,10 @@
+import { toText } from '../quantity/rational.js'
+import { computedQuantity } from '../quantity/computed.js'
 import { baseUnitText, equalDimensions, dimensionOf } from '../quantity/dimension.js'
 import { declaredNames, type DeclaredName } from '../quantity/declared.js'
 import { QuantityError } from '../quantity/error.js'
 import type { ValueKind } from '../quantity/expression/value-kind.js'
 import type { Quantity } from '../quantity/parse.js'
-import { zero } from '../quantity/rational.js'
 import type { Outcome } from './formula.js'
 import { useAs, type Use } from './use.js'
 
@@ -43,28 +44,30 @@ export interface Fitted {
 
 /** Fits an expression's kind to a field. Throws a QuantityError where it is of another kind. */
 export function fit(kind: ValueKind, text: string, use: Use): Fitted {
-  const { value, dimension, power } = use(unitOf(kind, text))
+  const { value, dimension, power } = use(computedQuantity(text, kind, 1))
   const toRatio = dimension === 'power-ratio' && equalDimensions(kind.dimension, level)
   return { outcome: toRatio ? { level: true } : { factor: value }, dimension, power }
-}
-
-/** One coherent unit of an expression's kind. */
-function unitOf({ dimension, cycles }: ValueKind, text: string): Quantity {
-  const value = { value: 1, difference: 1, uncertainty: 0, dimension, cycles, angle: zero, level: null }
-  return { ...value, text, unitText: '', unitFactor: 1, computed: true }
 }
 
 /** Those that a number without further words is first taken for. */
 const common: readonly DeclaredName[] = ['frequency', 'rate', 'number', 'temperature', 'energy', 'pressure', 'decibel']
 const natural: readonly DeclaredName[] = [...common, ...declaredNames]
 
-/** The declared dimension whose canonical unit a value of this kind has already; its base units where there is none. */
+const naturalUses = new Map<string, Use>()
+
+/** Use as the declared dimension whose canonical unit a value of this kind has already; in base units where there is none. */
 export function naturalUse(kind: ValueKind): Use {
-  const text = '='
+  const key = `${baseUnitText(kind.dimension)} ${toText(kind.cycles)}`
+  const use = naturalUses.get(key) ?? findNaturalUse(kind)
+  naturalUses.set(key, use)
+  return use
+}
+
+function findNaturalUse(kind: ValueKind): Use {
   for (const name of natural) {
     const use = useAs(name)
     try {
-      if (use(unitOf(kind, text)).value === 1) return use
+      if (use(computedQuantity('=', kind, 1)).value === 1) return use
     } catch (error) {
       if (!(error instanceof QuantityError)) throw error
     }
