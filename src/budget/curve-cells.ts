@@ -26,6 +26,7 @@ const marks = { comma: ',', semicolon: ';', tab: '\t' } as const
 export function cellsOf(line: string, separator: Separator): readonly Cell[] | CellFault {
   if (separator === 'spaces') return spaced(line)
   const mark = marks[separator]
+  if (!line.includes('"')) return plain(line.split(mark, mostCells + 1))
   const cells: Cell[] = []
   let at = 0
   while (at <= line.length) {
@@ -39,6 +40,17 @@ export function cellsOf(line: string, separator: Separator): readonly Cell[] | C
 }
 
 const tooMany: CellFault = { column: 1, message: `this row has more than ${mostCells} cells` }
+
+/** Most files have no quotation marks at all. */
+function plain(pieces: readonly string[]): readonly Cell[] | CellFault {
+  if (pieces.length > mostCells) return tooMany
+  let at = 0
+  return pieces.map(piece => {
+    const column = at + piece.length - piece.trimStart().length + 1
+    at += piece.length + 1
+    return { text: piece.trim(), column }
+  })
+}
 
 function spaced(line: string): readonly Cell[] | CellFault {
   const cells: Cell[] = []
