@@ -99,7 +99,7 @@ function warningsOf({ budget, network }: Prepared): Problem[] {
   return warnings
 }
 
-/** How much is wanted: a report has uncertainties at every point of the band; a glance only those of its headline numbers. */
+/** How much is wanted: a report has uncertainties at every point of the band; a glance only those of its headline numbers, and no curves of variants. */
 export type Depth = 'report' | 'glance'
 
 /** Everything that a report says about one budget. Throws `Refusal` for the input's faults and `EngineFault` for the engine's. */
@@ -127,7 +127,7 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
     rootShares: rootSharesAt(budget, spots, 0),
     lineSpreads: lineSpreadsAt(budget, spots, 0),
     requirements: requirementResults(budget, { band: evaluation, modes, at }),
-    variants: budget.variants.map(variant => assessVariant(variant, depth)),
+    variants: budget.variants.flatMap(variant => assessVariant(variant, depth)),
     modes,
     cavities: cavityStates(network),
     unit: units[budget.measurand.quantity],
@@ -135,10 +135,15 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   }
 }
 
-/** A refusal names the variant: its place may lie in what the budget itself says, and is fine there. */
-function assessVariant({ id, title, budget }: Variant, depth: Depth): Assessment['variants'][number] {
+/**
+ * For a glance a variant is only tried: whether it would be refused. A refusal names the variant, since its place may lie in what the
+ * budget itself says, and is fine there.
+ */
+function assessVariant({ id, title, budget }: Variant, depth: Depth): Assessment['variants'] {
   try {
-    return { id, title, assessment: assess(budget, depth) }
+    if (depth === 'report') return [{ id, title, assessment: assess(budget) }]
+    prepare(budget)
+    return []
   } catch (error) {
     if (!(error instanceof Refusal)) throw error
     throw new Refusal(error.problems.map(problem => ofVariant(id, problem)))
