@@ -1,3 +1,4 @@
+import { references, type Reference } from '../catalogue/references.js'
 import type { Budget } from '../model/budget.js'
 import { referenceText } from './catalogue.js'
 
@@ -20,13 +21,22 @@ export interface EvidenceText {
 
 /** References of the catalogue in the order of mention, then what the budget itself cites; each once. */
 export function bibliographyOf(budget: Budget, catalogueKeys: readonly string[]): readonly BibliographyEntry[] {
-  const laws = catalogueKeys.map(key => ({ key, text: referenceText(key), link: '' }))
   const own = budget.citations.map(({ key, text, link }) => ({ key: ownKey(key), text, link: addressOf(link) }))
-  return [...laws, ...own]
+  const shared = new Map(own.filter(({ key, text }) => isOfCatalogue(key, text)).map(entry => [entry.key, entry]))
+  const laws = catalogueKeys.map(key => shared.get(ownKey(key)) ?? { key, text: referenceText(key), link: '' })
+  return [...laws, ...own.filter(entry => !laws.includes(entry))]
 }
 
 /** Keys of a budget and keys of the catalogue may be alike without meaning the same. */
 const ownKey = (key: string): string => `budget:${key}`
+
+/** Whether a budget cites under a key of the catalogue the very work that the catalogue means: same year, same author. */
+function isOfCatalogue(key: string, text: string): boolean {
+  const reference = (references as { readonly [key: string]: Reference })[key.replace(/^budget:/, '')]
+  if (reference === undefined) return false
+  const [author] = reference.authors.split(',')
+  return text.includes(String(reference.year)) && text.includes(author.slice(author.lastIndexOf(' ') + 1))
+}
 
 /** Of a DOI or an address; nothing else becomes a link, whatever a file says. */
 function addressOf(link: string | null): string {

@@ -50,13 +50,9 @@ function shareSentence(share: number, frequency: string): string {
 function varianceSentences({ budget }: Assessment, share: number | null): readonly string[] {
   const assumed = budget.roots.filter(root => isAssumed(root.evidence))
   const exact = assumed.filter(root => root.uncertainty === 0).length
+  if (exact === assumed.length) return ['No assumed value states an uncertainty, so that none counts in the variance.']
   const bring = share === null ? '' : `The assumed values bring ${percentText(share)} of the variance of the total.`
-  const lack =
-    exact === 0
-      ? ''
-      : exact === assumed.length
-        ? 'No assumed value states an uncertainty.'
-        : `Of the assumed values, ${exact} ${exact === 1 ? 'states' : 'state'} no uncertainty.`
+  const lack = exact === 0 ? '' : `Of the assumed values, ${exact} ${exact === 1 ? 'states' : 'state'} no uncertainty.`
   return [bring, lack].filter(sentence => sentence !== '')
 }
 

@@ -16,6 +16,7 @@ export interface ParameterRow {
   readonly dispersion: string
   readonly evidence: EvidenceText
   readonly about: string
+  /** ISO date; empty where there is none, or where the evidence names it. */
   readonly measured: string
   readonly place: string
   /** It stands in a file that the budget's own file builds upon. */
@@ -68,7 +69,8 @@ function rootRow(root: Root, file: string, bibliography: readonly BibliographyEn
     dispersion: root.uncertainty > 0 ? `${root.distribution}, ${root.effect}` : '',
     evidence: evidenceText(root.evidence, bibliography),
     about: root.about ?? '',
-    measured: root.measured ?? '',
+    // A note often names the day already.
+    measured: root.measured === null || root.evidence?.includes(root.measured) ? '' : root.measured,
     place: placeText(root.place, file),
     inherited: root.place.file !== file,
   }

@@ -131,6 +131,25 @@ describe('evidence', () => {
     })
   })
 
+  it('prints a work once that the laws and the budget cite under one key, and twice where the key means another', () => {
+    const withText = (text: string) => {
+      const citations = [{ key: 'callen-welton-1951', text, link: '10.1103/PhysRev.83.34' }]
+      return reportView({ ...assessment, budget: { ...assessment.budget, citations } }).bibliography
+    }
+    const same = withText('H. B. Callen and T. A. Welton, Irreversibility, Phys. Rev. 83, 34 (1951)')
+    expect(same).toHaveLength(view.bibliography.length - 1)
+    expect(same[0].link).toBe('https://doi.org/10.1103/PhysRev.83.34')
+    expect(withText('A. Nobody, Another work (2001)')).toHaveLength(view.bibliography.length)
+  })
+
+  it('says so where no assumed value is uncertain', () => {
+    const roots = assessment.budget.roots.map(root => ({ ...root, uncertainty: 0 }))
+    const { evidence } = reportView({ ...assessment, budget: { ...assessment.budget, roots } })
+    expect(evidence.sentences.at(-1)).toBe(
+      'No assumed value states an uncertainty, so that none counts in the variance.',
+    )
+  })
+
   it('makes no link of an address that is none', () => {
     const linked = (link: string | null) => {
       const citations = [{ key: 'ring', text: 'A', link }]

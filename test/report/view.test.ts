@@ -86,6 +86,19 @@ describe('the tables', () => {
   })
 })
 
+describe('a day of measurement', () => {
+  it('is not said twice', () => {
+    const row = (evidence: string) => {
+      const roots = assessment.budget.roots.map(root =>
+        root.id === 'fundamental.quality' ? { ...root, evidence } : root,
+      )
+      return reportView({ ...assessment, budget: { ...assessment.budget, roots } }).parameters[2]
+    }
+    expect(row('lab book 12').measured).toBe('2026-03-14')
+    expect(row('ringdown 2026-03-14').measured).toBe('')
+  })
+})
+
 describe('the equation cards', () => {
   const card = (id: string) => view.cards.find(each => each.id === id)
 
