@@ -74,11 +74,11 @@ class Scanner {
       text.slice(from, Math.min(body.end - 1, from + 300)),
     )
     const key = name?.[1] ?? ''
-    const macros = body.words.map(({ start, end }) => ({
+    const tooComplex = body.end - at > longestEntry || body.deepest > deepestBraces
+    const macros = (tooComplex ? [] : body.words).map(({ start, end }) => ({
       name: text.slice(start, end).toLowerCase(),
       place: this.source.place(start),
     }))
-    const tooComplex = body.end - at > longestEntry || body.deepest > deepestBraces
     const entry = {
       key,
       text: tooComplex ? '' : text.slice(at, body.end),

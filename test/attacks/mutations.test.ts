@@ -1,8 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { example, read, small } from '../budget/read.js'
+import { example, read, small, spring } from '../budget/read.js'
 
-const originals = [example, small]
+const originals = [example, small, spring]
 
 /** Pieces that mean something to YAML, to quantities or to the reader of budgets. */
 const piece = fc.oneof(
@@ -17,6 +17,10 @@ const piece = fc.oneof(
     '!!x ',
     '"',
     '= ',
+    '= f',
+    '*f',
+    '^',
+    '= sqrt(',
     '{ value: 1 }',
     '1e999',
     '-1',

@@ -24,6 +24,8 @@ components:
 `
 
 export const example = readFileSync(new URL('good/membrane.yaml', import.meta.url), 'utf8')
+/** Every way to state, derive, correlate and require a value. */
+export const spring = readFileSync(new URL('good/spring.yaml', import.meta.url), 'utf8')
 
 export function read(text: string | Uint8Array, data: Readonly<Record<string, string>> = {}): BudgetRead {
   return readBudgetFile(new MemoryFiles({ 'budget.yaml': text, ...data }), {

@@ -3,12 +3,12 @@ import { describe, expect, it } from 'vitest'
 import { parse } from 'yaml'
 import { declarations } from '../../src/catalogue/declarations.js'
 import { budgetSchema, type Schema } from '../../src/budget/schema.js'
-import { example, small } from './read.js'
+import { example, small, spring } from './read.js'
 
 const schema = budgetSchema()
 
 /** As an editor reads it: draft-07 alone, values typed by YAML, no discriminator. */
-function editor() {
+const editor = once(() => {
   const ajv = new Ajv({
     allErrors: true,
     strict: true,
@@ -17,6 +17,11 @@ function editor() {
     keywords: ['discriminator'],
   })
   return ajv.compile(schema)
+})
+
+function once<Result>(make: () => Result): () => Result {
+  let made: { readonly result: Result } | null = null
+  return () => (made ??= { result: make() }).result
 }
 
 function* subschemas(node: unknown, path = '#'): Generator<[string, Schema]> {
@@ -32,7 +37,7 @@ describe('the published schema', () => {
 
   it('accepts good budgets as an editor reads them', () => {
     const validate = editor()
-    for (const text of [example, small]) expect([validate(parse(text)), validate.errors]).toEqual([true, null])
+    for (const text of [example, small, spring]) expect([validate(parse(text)), validate.errors]).toEqual([true, null])
   })
 
   it.each([
@@ -46,6 +51,32 @@ describe('the published schema', () => {
   ])('refuses %s as an editor reads it', (_name, from, to) => {
     expect(small).toContain(from)
     expect(editor()(parse(small.replace(from, to)))).toBe(false)
+  })
+
+  it.each([
+    ['an unknown distribution', 'distribution: rectangular', 'distribution: uniform'],
+    ['an unknown effect', 'effect: systematic', 'effect: random'],
+    ['three correlated at once', '[k, m0]', '[k, m0, q0]'],
+    ['a correlation without coefficient', ', coefficient: 0.8', ''],
+    ['a requirement of nothing', 'of: total, ', ''],
+    ['an unknown key of a requirement', 'below: 200 aN', 'under: 200 aN'],
+  ])('refuses %s as an editor reads it', (_name, from, to) => {
+    expect(spring).toContain(from)
+    expect(editor()(parse(spring.replace(from, to)))).toBe(false)
+  })
+
+  it('explains every key that is no field of a kind to an editor', () => {
+    const plain = ['quantity', 'requirement', 'claim', 'table', 'variant', 'measurand']
+    const definitions = schema['definitions'] as Record<string, { properties: Record<string, Schema> }>
+    const silent = [
+      ['', schema as { properties: Record<string, Schema> }] as const,
+      ...plain.map(name => [name, definitions[name]] as const),
+    ].flatMap(([name, definition]) =>
+      Object.entries(definition?.properties ?? {})
+        .filter(([, node]) => node['description'] === undefined && node['$ref'] === undefined)
+        .map(([key]) => `${name}.${key}`),
+    )
+    expect(silent).toEqual([])
   })
 
   it('has a definition of every kind, with the declared fields', () => {
