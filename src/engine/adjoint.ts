@@ -1,5 +1,6 @@
 import type { Entry, Injection, Network } from '../model/network.js'
 import { addForms, constantForm, isZeroForm, negateForm, scaleForm, zeroForm, type Form } from './form.js'
+import { filterForm } from './filter.js'
 import { oscillator } from './oscillator.js'
 import type { Tape } from './tape.js'
 
@@ -186,8 +187,9 @@ export function adjoint(tape: Tape, network: Network): Adjoint {
 export function transfer(tape: Tape, row: readonly Form[], injection: Injection, withDirect: boolean): Form {
   const start = withDirect ? constantForm(injection.direct) : zeroForm
   const alone = injection.rows.length === 1
-  return injection.rows.reduce((sum, { row: r, value }) => {
+  const form = injection.rows.reduce((sum, { row: r, value }) => {
     const element = alone ? tape.single(row[r]) : row[r]
     return addForms(sum, scaleForm(element, value))
   }, start)
+  return injection.filter === undefined ? form : tape.multiply(form, filterForm(tape, injection.filter))
 }

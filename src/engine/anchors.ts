@@ -2,7 +2,8 @@ import type { Evaluation } from '../model/evaluation.js'
 import type { Network } from '../model/network.js'
 import type { Anchor } from '../model/points.js'
 import { complex, divide, magnitude, multiply, scale, subtract } from '../physics/complex.js'
-import { transferAt, type ComplexFrequency } from './dense.js'
+import type { ComplexFrequency } from './dense.js'
+import { transferAt } from './transfer-at.js'
 import { energyDecay, polesOfModes, type Pole } from './poles.js'
 
 export interface Band {

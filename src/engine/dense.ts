@@ -84,13 +84,3 @@ export function injectionColumn(network: Network, injection: Injection): Complex
   for (const { row, value } of injection.rows) column[row] = add(column[row], value)
   return column
 }
-
-/** R(ω): transfer of an injection to the record at a complex frequency. */
-export function transferAt(network: Network, injection: Injection, at: ComplexFrequency): Complex {
-  const { matrix } = denseAt(network, at)
-  const z = solveDense(
-    matrix,
-    injectionColumn(network, injection).map(value => [value]),
-  )
-  return network.readout.reduce((sum, { column, value }) => add(sum, multiply(value, z[column][0])), injection.direct)
-}

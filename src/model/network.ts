@@ -36,10 +36,22 @@ export type Shape =
   | { readonly form: 'viscous bath'; readonly strength: number; readonly temperature: number }
   | { readonly form: 'structural bath'; readonly strength: number; readonly temperature: number }
 
-/** Where a unit of something enters: into the equations of some unknowns, and straight into the record. */
+/**
+ * A factor that depends on frequency: (−iω)^order · e^{iωτ} · [constant + Σ coefficient/(half − i(detuning + ω))], rates in rad/s, the
+ * delay τ in s. The sum over decays is what a field meets at a cavity that only filters it.
+ */
+export interface Filter {
+  readonly order?: -2 | -1 | 0 | 1 | 2
+  readonly delay?: number
+  readonly constant: Complex
+  readonly decays?: readonly { readonly coefficient: Complex; readonly half: number; readonly detuning: number }[]
+}
+
+/** Where a unit of something enters: into the equations of some unknowns, and straight into the record; all of it behind the filter. */
 export interface Injection {
   readonly rows: readonly { readonly row: number; readonly value: Complex }[]
   readonly direct: Complex
+  readonly filter?: Filter
 }
 
 /** Hermitian, positive semidefinite, one row a node of the source; one-sided (2V for fields). */
