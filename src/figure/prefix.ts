@@ -33,8 +33,8 @@ export function withUnit(value: number, unit: string, digits = 3): string {
   return formatQuantity(value, unit, { digits })
 }
 
-/** An uncertainty below this part of its value would only bring digits that nobody can use. */
-export const LEAST_TOLD = 1e-5
+/** An uncertainty below this part of its value hides in the rounding to three digits, and would bring more of them for nothing. */
+export const LEAST_TOLD = 5e-4
 
 /** The same with a standard uncertainty where there is one: `8.3(2) aN/√Hz`. */
 export function withUncertainty(value: number, unit: string, uncertainty: number): string {

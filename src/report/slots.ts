@@ -69,7 +69,7 @@ export function slotText(budget: Budget, slot: Slot): { readonly text: string; r
   if ('constant' in slot) return null
   if ('root' in slot) return { text: budget.roots[slot.root].text, root: budget.roots[slot.root].id }
   const derived = budget.derived.find(({ formula }) => formula === slot.formula)
-  return { text: derived?.text ?? numberText(slotValue(budget, slot)), root: '' }
+  return { text: derived?.text ?? numberText(slotValue(budget, slot)), root: derived?.id ?? '' }
 }
 
 /** The slot of a field by its path (`ports`, `front`, `rate`), or null where there is none. */

@@ -5,6 +5,7 @@ import { opening } from './headlines.js'
 import { decibelText, hasBackAction } from './margins.js'
 import { densityText, frequencyText, percentText } from './numbers.js'
 import { familyTitles } from './titles.js'
+import { spreadAtReference } from './uncertain-values.js'
 
 /** A table of plain strings; the first row is its head. */
 export interface TextTable {
@@ -27,15 +28,16 @@ export function terminalHeading(assessment: Assessment): readonly string[] {
 export function tableByLine(assessment: Assessment, at: Evaluation): TextTable {
   const { unit } = assessment
   const margins = hasBackAction(assessment)
+  const doubt = uncertaintiesAt(assessment, at)
   const points = [...at.points.frequency.keys()]
   const cells = (label: string, family: string, cell: (i: number) => readonly [string, string]): readonly string[] =>
     [label, family, ...points.flatMap(cell)].map(plain)
   const lines = at.lines.toSorted((a, b) => b.psd[0] - a.psd[0])
   const rows = [
-    cells('total', '', i => [densityText(Math.sqrt(at.total[i]), unit), percentText(1)]),
+    cells('total', '', i => [densityText(Math.sqrt(at.total[i]), unit, doubt.total), percentText(1)]),
     ...lines.map(line =>
       cells(line.title, familyTitles[line.family], i => [
-        pointValue(line, at, { unit, index: i }),
+        pointValue(line, at, { unit, index: i, uncertainty: doubt.ofLine(line.id) }),
         percentText(line.psd[i] / at.total[i]),
       ]),
     ),
@@ -48,6 +50,13 @@ export function tableByLine(assessment: Assessment, at: Evaluation): TextTable {
   ]
   const head = ['', 'family', ...points.flatMap(i => [frequencyText(at.points.frequency[i], 9), 'share or margin'])]
   return { head: head.map(plain), rows, numeric: head.map((_, i) => i).slice(2) }
+}
+
+/** Standard uncertainties are known where the report's tables are taken, and not at frequencies that a call asks for. */
+function uncertaintiesAt(assessment: Assessment, at: Evaluation): { total: number; ofLine(id: string): number } {
+  if (at !== assessment.atReference) return { total: 0, ofLine: () => 0 }
+  const spreads = new Map(at.lines.map(({ id }, k) => [id, assessment.lineSpreads[k]?.combined ?? 0]))
+  return { total: spreadAtReference(assessment).combined, ofLine: id => spreads.get(id) ?? 0 }
 }
 
 /** One row a frequency: the total, the margin to the standard quantum limit, the largest contribution; for many of them. */

@@ -38,7 +38,7 @@ describe('numbers among parameters', () => {
   })
 
   it('say what the file says', () => {
-    expect(slotText(budget, { formula })).toEqual({ text: '= 2*mass', root: '' })
+    expect(slotText(budget, { formula })).toEqual({ text: '= 2*mass', root: 'double' })
     expect(slotText(budget, { root: 0 })).toEqual({ text: '3.1(2) ng', root: 'mass' })
     expect(slotText(budget, { constant: 1 })).toBeNull()
   })

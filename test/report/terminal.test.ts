@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { tableByFrequency, tableByLine, terminalHeading } from '../../src/report/terminal.js'
 import { fixtureAssessment } from './fixture.js'
+import { uncertainAssessment } from './uncertain-fixture.js'
 
 const assessment = fixtureAssessment()
 
@@ -34,6 +35,13 @@ describe('tables for a terminal', () => {
     expect(head).toEqual(['frequency', 'total', 'above the SQL', 'largest', 'its share'])
     expect(rows).toHaveLength(assessment.evaluation.points.frequency.length)
     expect(rows[0]).toEqual(['1.2 MHz', '408 aN/√Hz', '17.9 dB', 'Shot', '99.5 %'])
+  })
+
+  it('state uncertainties where they are known', () => {
+    const uncertain = uncertainAssessment()
+    const [total, thermal] = tableByLine(uncertain, uncertain.atReference).rows
+    expect([total[2], thermal[2]]).toEqual(['16.3(8) aN/√Hz', '15.1(15) aN/√Hz'])
+    expect(tableByLine(uncertain, assessment.atReference).rows[0][2]).toBe('16.3 aN/√Hz')
   })
 
   it('call a signed line negligible that is next to nothing', () => {

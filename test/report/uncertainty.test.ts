@@ -15,7 +15,7 @@ describe('digits', () => {
     [9.451e-18, 0.15e-18, '9.45(15) aN/√Hz'],
     [9.451e-18, 0, '9.45 aN/√Hz'],
     [9.451e-18, 12e-18, '9(12) aN/√Hz'],
-    [9.451e-18, 1e-25, '9.45 aN/√Hz'],
+    [9.451e-18, 4e-21, '9.45 aN/√Hz'],
     [9.451e-18, NaN, '9.45 aN/√Hz'],
   ])('%s ± %s is %s', (value, uncertainty, text) => expect(plain(densityText(value, 'N/√Hz', uncertainty))).toBe(text))
 
