@@ -20,6 +20,9 @@ const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/
 
 const everything = { sources: true, limits: true } as const
 
+/** Unit of the measurand's amplitude density. */
+export const unitOf = (budget: Budget): string => units[budget.measurand.quantity]
+
 /** A budget at its working point, ready to be evaluated anywhere. */
 export interface Prepared {
   readonly budget: Budget
@@ -53,7 +56,7 @@ export function evaluateAtFrequencies(budget: Budget, frequencies: ArrayLike<num
   return evaluateList(prepare(budget), frequencies)
 }
 
-function evaluateList({ budget, network, poles }: Prepared, frequencies: ArrayLike<number>): Evaluation {
+export function evaluateList({ budget, network, poles }: Prepared, frequencies: ArrayLike<number>): Evaluation {
   const anchors = modeAnchors(network, poles, { low: 0, high: Infinity })
   const list = Array.from(frequencies, frequency => pointAt(anchors, frequency))
   // Anchors that no point is measured from would be followed for nothing when roots change.
@@ -86,7 +89,7 @@ function checkLimits(evaluation: Evaluation): void {
 }
 
 /** What a person should know beside the numbers. */
-function warningsOf({ budget, network }: Prepared): Problem[] {
+export function warningsOf({ budget, network }: Prepared): Problem[] {
   const warnings = [...budget.warnings]
   if (network.sensing.light === null) {
     warnings.push({
@@ -105,6 +108,7 @@ export type Depth = 'report' | 'glance'
 /** Everything that a report says about one budget. Throws `Refusal` for the input's faults and `EngineFault` for the engine's. */
 export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   const prepared = prepare(budget)
+  if (depth === 'glance') tryVariants(budget)
   const { network, poles } = prepared
   const evaluation = evaluateBand(prepared)
   if (network.sensing.light !== null) checkLimits(evaluation)
@@ -127,25 +131,29 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
     rootShares: rootSharesAt(budget, spots, 0),
     lineSpreads: lineSpreadsAt(budget, spots, 0),
     requirements: requirementResults(budget, { band: evaluation, modes, at }),
-    variants: budget.variants.flatMap(variant => assessVariant(variant, depth)),
+    variants: depth === 'report' ? budget.variants.map(assessVariant) : [],
     modes,
     cavities: cavityStates(network),
-    unit: units[budget.measurand.quantity],
+    unit: unitOf(budget),
     warnings: warningsOf(prepared),
   }
 }
 
-/**
- * For a glance a variant is only tried: whether it would be refused. A refusal names the variant, since its place may lie in what the
- * budget itself says, and is fine there.
- */
-function assessVariant({ id, title, budget }: Variant, depth: Depth): Assessment['variants'] {
+/** Throws a refusal that names the variant: its place may lie in what the budget itself says, and is fine there. */
+function inVariant<Result>(id: string, work: () => Result): Result {
   try {
-    if (depth === 'report') return [{ id, title, assessment: assess(budget) }]
-    prepare(budget)
-    return []
+    return work()
   } catch (error) {
     if (!(error instanceof Refusal)) throw error
     throw new Refusal(error.problems.map(problem => ofVariant(id, problem)))
   }
+}
+
+function assessVariant({ id, title, budget }: Variant): Assessment['variants'][number] {
+  return { id, title, assessment: inVariant(id, () => assess(budget)) }
+}
+
+/** Whether a variant would be refused, without drawing it. */
+export function tryVariants(budget: Budget): void {
+  for (const variant of budget.variants) inVariant(variant.id, () => prepare(variant.budget))
 }
