@@ -35,6 +35,7 @@ const page = (path: string): string => pages.get(path) ?? ''
 const text = (html: string): string =>
   html
     .replace(/<(style|script|svg|math)\b.*?<\/\1>/gs, ' ')
+    .replaceAll('<wbr>', '')
     .replace(/<[^>]*>/g, ' ')
     .replace(/&#(\d+);/g, (_, code: string) => String.fromCodePoint(Number(code)))
     .replaceAll('&lt;', '<')
