@@ -1,3 +1,4 @@
+import { remembered } from './remembered.js'
 import { checkCharacters } from './characters.js'
 import { isCelsius, readCelsius } from './celsius.js'
 import { scaled } from './decimal.js'
@@ -47,10 +48,10 @@ export const longestQuantity = 200
  * stays a level. `20 °C` is 293.15 K, and its `difference` 20 K. `V pk` is 1/√2 of `V rms`, which is `V`.
  * Throws a QuantityError that names the piece and what would be right.
  */
-export function parseQuantity(text: string): Quantity {
+export const parseQuantity: (text: string) => Quantity = remembered(text => {
   checkText(text)
   return meaningOfQuantity(readTree(text, parseQuantityTree), text)
-}
+})
 
 /** Reads a unit alone: `aN/√Hz`; the empty text and `1` are the number 1. Places count from the first character that is no space. */
 export function parseUnit(text: string): Unit {
