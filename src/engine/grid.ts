@@ -1,6 +1,7 @@
 import type { Evaluation } from '../model/evaluation.js'
 import type { Anchor, Points } from '../model/points.js'
 import type { Band } from './anchors.js'
+import { Arena } from './arena.js'
 import type { Evaluator } from './evaluate.js'
 import { makePoints, type Point } from './points.js'
 
@@ -92,7 +93,8 @@ function within(points: Points, i: number, part: number): Point {
   const anchor = points.anchor[i]
   if (anchor >= 0 && points.anchor[i + 1] === anchor) {
     const { halfWidth } = points.anchors[anchor]
-    const [from, to] = [points.offset[i], points.offset[i + 1]].map(offset => Math.asinh(offset / halfWidth))
+    const from = Math.asinh(points.offset[i] / halfWidth)
+    const to = Math.asinh(points.offset[i + 1] / halfWidth)
     return { anchor, offset: halfWidth * Math.sinh(from + (to - from) * part) }
   }
   const [from, to] = [points.frequency[i], points.frequency[i + 1]]
@@ -127,22 +129,36 @@ function interpolate(left: number, right: number, part: number): number {
  * middle or beside it are halved, a generation at a time.
  */
 export function refine(evaluator: Evaluator, start: Points): Points {
+  const arenas = probed.map(() => new Arena())
   let points = start
   let curves = followed(evaluator.at(points))
   let open = [...points.frequency.keys()].slice(0, -1)
   while (open.length > 0 && points.frequency.length < mostPoints) {
-    const probes = probed.map(part => probesOf(points, open, part))
-    const there = probes.map(each => followed(evaluator.at(each)))
-    const bent = open.filter((i, k) =>
-      probes.some((each, p) => !straight({ points, curves, i }, { probes: each, there: there[p], k })),
-    )
-    if (bent.length === 0) break
-    const grown = insert({ points, curves, open, bent }, { middles: probes[0], there: there[0] })
+    const probe = (intervals: readonly number[], p: number): Probes => {
+      const at = probesOf(points, intervals, probed[p])
+      return { at, there: followed(evaluator.at(at, arenas[p])) }
+    }
+    const isBent = (probes: Probes) => (i: number, k: number) => !straight({ points, curves, i }, probes, k)
+    const middles = probe(open, 0)
+    const bent = new Set(open.filter(isBent(middles)))
+    // Beside the middle only those are probed that the middle leaves in doubt.
+    for (let p = 1; p < probed.length; p++) {
+      const rest = open.filter(i => !bent.has(i))
+      if (rest.length > 0) for (const i of rest.filter(isBent(probe(rest, p)))) bent.add(i)
+    }
+    if (bent.size === 0) break
+    const grown = insert({ points, curves, open, bent }, middles)
     points = grown.points
     curves = grown.curves
     open = grown.open
   }
   return points
+}
+
+/** One point in each of some intervals, with the curves there. */
+interface Probes {
+  readonly at: Points
+  readonly there: readonly Float64Array[]
 }
 
 /** A point in each interval, in the order of the intervals, which is that of frequency. */
@@ -160,22 +176,32 @@ function probesOf(points: Points, open: readonly number[], part: number): Points
 
 function straight(
   { points, curves, i }: { points: Points; curves: readonly Float64Array[]; i: number },
-  { probes, there, k }: { probes: Points; there: readonly Float64Array[]; k: number },
+  { at, there }: Probes,
+  k: number,
 ): boolean {
   // Neighbours that double precision cannot halve are as close as can be.
   if (separation(points, i, i + 1) <= 4e-16 * points.frequency[i]) return true
-  const part = fraction(points, i, probes, k)
+  const part = fraction(points, i, at, k)
   if (!(part > 0 && part < 1)) return true
   const floor = gridFloor * there[0][k]
-  return curves.every((curve, c) => {
-    const [left, right, actual] = [curve[i], curve[i + 1], there[c][k]]
-    const crosses = left * right < 0
-    const [smaller, larger] = [Math.abs(left), Math.abs(right)].sort((a, b) => a - b)
-    if (!crosses && larger > steepest * Math.max(smaller, floor)) return false
-    // Where a curve passes zero its relative error is largest there and not at the probe: all of the interval is held to the floor.
-    const scale = crosses ? floor : Math.max(Math.abs(actual), floor)
-    return Math.abs(interpolate(left, right, part) - actual) <= 2 * gridTolerance * safety * scale
-  })
+  for (let c = 0; c < curves.length; c++) {
+    if (!straightCurve(curves[c][i], curves[c][i + 1], there[c][k], { part, floor })) return false
+  }
+  return true
+}
+
+function straightCurve(
+  left: number,
+  right: number,
+  actual: number,
+  { part, floor }: { part: number; floor: number },
+): boolean {
+  const crosses = left * right < 0
+  const [a, b] = [Math.abs(left), Math.abs(right)]
+  if (!crosses && Math.max(a, b) > steepest * Math.max(Math.min(a, b), floor)) return false
+  // Where a curve passes zero its relative error is largest there and not at the probe: all of the interval is held to the floor.
+  const scale = crosses ? floor : Math.max(Math.abs(actual), floor)
+  return Math.abs(interpolate(left, right, part) - actual) <= 2 * gridTolerance * safety * scale
 }
 
 /** Puts the middles of bent intervals among the points; both halves are open for the next generation. */
@@ -185,10 +211,10 @@ function insert(
     curves,
     open,
     bent,
-  }: { points: Points; curves: readonly Float64Array[]; open: readonly number[]; bent: readonly number[] },
-  { middles, there }: { middles: Points; there: readonly Float64Array[] },
+  }: { points: Points; curves: readonly Float64Array[]; open: readonly number[]; bent: ReadonlySet<number> },
+  { at: middles, there }: Probes,
 ): { points: Points; curves: Float64Array[]; open: number[] } {
-  const size = points.frequency.length + bent.length
+  const size = points.frequency.length + bent.size
   const next = {
     anchors: points.anchors,
     frequency: new Float64Array(size),
@@ -203,16 +229,14 @@ function insert(
     next.frequency[at] = from.frequency[index]
     next.anchor[at] = from.anchor[index]
     next.offset[at] = from.offset[index]
-    for (const [c, curve] of values.entries()) grown[c][at] = curve[index]
+    for (let c = 0; c < values.length; c++) grown[c][at] = values[c][index]
     at++
   }
-  let b = 0
   for (let i = 0; i < points.frequency.length; i++) {
     put(points, curves, i)
-    if (b < bent.length && bent[b] === i) {
+    if (bent.has(i)) {
       halves.push(at - 1, at)
       put(middles, there, place.get(i)!)
-      b++
     }
   }
   return { points: next, curves: grown, open: halves }
