@@ -5,7 +5,7 @@ import { decibelText } from '../report/margins.js'
 import { densityText, frequencyText } from '../report/numbers.js'
 
 /** The requirements that a budget misses, each at its place in the file with what was found and what is wanted. */
-export function shortfalls({ requirements, unit }: Assessment): readonly Problem[] {
+export function shortfalls({ requirements, unit }: Pick<Assessment, 'requirements' | 'unit'>): readonly Problem[] {
   return requirements
     .filter(result => !result.met)
     .map(result => ({

@@ -6,6 +6,7 @@ import { spreadAt, type Differentiated } from './uncertainty.js'
 
 /** A number that a requirement is held against. */
 interface Held {
+  readonly title: string
   readonly value: number
   readonly spread: Spread
   readonly frequency: number | null
@@ -17,14 +18,16 @@ function heldAt(budget: Budget, at: Differentiated, of: string, index: number): 
   const frequency = evaluation.points.frequency[index]
   if (of.startsWith('margin.')) {
     const margin = totalMargin(budget, at, of.slice('margin.'.length), index)
-    return margin === null ? null : { ...margin, frequency }
+    const title = evaluation.limits.find(({ id }) => id === of.slice('margin.'.length))?.title
+    return margin === null || title === undefined ? null : { title, ...margin, frequency }
   }
   const line = evaluation.lines.findIndex(({ id }) => id === of)
   const psd = of === 'total' ? evaluation.total : evaluation.lines[line]?.psd
   if (psd === undefined) return null
   const value = Math.sqrt(Math.abs(psd[index]))
   const slope = (k: number): number => (of === 'total' ? slopes[k].total : slopes[k].lines[line])[index]
-  return { value, spread: spreadAt(budget, slopes, s => slope(slopes.indexOf(s)) / (2 * value)), frequency }
+  const title = of === 'total' ? 'Total' : evaluation.lines[line].title
+  return { title, value, spread: spreadAt(budget, slopes, s => slope(slopes.indexOf(s)) / (2 * value)), frequency }
 }
 
 /** Frequency in Hz of the worst point of a stretch: the greatest value for a bound from above, the least for one from below; null where there is none. */
@@ -53,7 +56,7 @@ function held(budget: Budget, requirement: Requirement, grounds: Grounds): Held 
   if (of.startsWith('occupancy.')) {
     const mode = grounds.modes.find(({ id }) => id === of.slice('occupancy.'.length))
     if (mode?.finalOccupancy === undefined || mode.finalOccupancy === null) return null
-    return { value: mode.finalOccupancy, spread: mode.finalOccupancySpread!, frequency: null }
+    return { title: mode.id, value: mode.finalOccupancy, spread: mode.finalOccupancySpread!, frequency: null }
   }
   if (where === null) return null
   if ('at' in where) return heldAt(budget, grounds.at(where.at), of, 0)
@@ -67,12 +70,13 @@ function held(budget: Budget, requirement: Requirement, grounds: Grounds): Held 
  */
 export function requirementResults(budget: Budget, grounds: Grounds): RequirementResult[] {
   return budget.requirements.map(requirement => {
-    const { value, spread, frequency } = held(budget, requirement, grounds) ?? {
+    const { title, value, spread, frequency } = held(budget, requirement, grounds) ?? {
+      title: null,
       value: NaN,
       spread: { statistical: NaN, systematic: NaN, combined: NaN },
       frequency: null,
     }
     const met = requirement.bound === 'below' ? value <= requirement.value : value >= requirement.value
-    return { requirement, value, spread, frequency, met }
+    return { requirement, title, value, spread, frequency, met }
   })
 }

@@ -101,6 +101,8 @@ export interface RootShare {
 /** A requirement with the number that it was held against. */
 export interface RequirementResult {
   readonly requirement: Requirement
+  /** What it speaks of, as its line or limit is called: `Total`, `Shot noise`, `Standard quantum limit`; null where nothing has that name. */
+  readonly title: string | null
   readonly value: number
   readonly spread: Spread
   /** In Hz: where the value was taken, the worst place of a band; null for an occupancy. */

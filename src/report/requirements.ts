@@ -22,7 +22,16 @@ export interface RequirementRow {
 
 /** Every requirement of the budget, in the order of the file. */
 export function requirementRows(assessment: Assessment): readonly RequirementRow[] {
-  return assessment.requirements.map(result => requirementRow(result, assessment))
+  const spoken: Spoken = (frequency, width) => spokenFrequency(assessment, frequency, width)
+  return assessment.requirements.map(result => requirementRow(result, { unit: assessment.unit, spoken }))
+}
+
+/** How the place of a worst value is told: a frequency in Hz within a width. */
+type Spoken = (frequency: number, width: number) => string
+
+/** The same where nothing but the results is known. */
+export function plainRequirementRows(results: readonly RequirementResult[], unit: string): readonly RequirementRow[] {
+  return results.map(result => requirementRow(result, { unit, spoken: frequency => frequencyText(frequency, 7) }))
 }
 
 /** How many requirements are met, in words; null where there are none. */
@@ -42,31 +51,27 @@ export function requirementLine({ id, what, bound, number, where, met, distance 
   return `${id}: ${verdict}: ${inSentence(what)} ${number}${place}, wanted ${bound}`.replaceAll('\u00a0', ' ')
 }
 
-function requirementRow(result: RequirementResult, assessment: Assessment): RequirementRow {
+function requirementRow(result: RequirementResult, { unit, spoken }: { unit: string; spoken: Spoken }): RequirementRow {
   const { requirement, value, spread, met } = result
   const { id, about, of, bound, text, place } = requirement
   return {
     id,
     about: about ?? '',
-    what: whatText(of, assessment),
+    what: whatText(result),
     bound: `${bound} ${text}`,
-    number: Number.isFinite(value) ? numberOf(of, value, spread.combined, assessment.unit) : 'no such number here',
-    where: whereText(result, assessment),
+    number: Number.isFinite(value) ? numberOf(of, value, spread.combined, unit) : 'no such number here',
+    where: whereText(result, spoken),
     met,
     distance: Number.isFinite(value) ? distanceText(result) : '',
     place: `${place.file}:${place.line}`,
   }
 }
 
-function whatText(of: string, { evaluation }: Assessment): string {
+function whatText({ requirement: { of }, title }: RequirementResult): string {
   const [first, name] = of.split('.')
-  if (of === 'total') return 'Total'
   if (first === 'occupancy') return `Final occupancy of ${name}`
-  if (first === 'margin') {
-    const title = evaluation.limits.find(limit => limit.id === name)?.title
-    return `Margin to the ${title === undefined ? `limit ${name}` : inSentence(title)}`
-  }
-  return evaluation.lines.find(line => line.id === of)?.title ?? of
+  if (first === 'margin') return `Margin to the ${title === null ? `limit ${name}` : inSentence(title)}`
+  return title ?? of
 }
 
 function numberOf(of: string, value: number, uncertainty: number, unit: string): string {
@@ -75,10 +80,10 @@ function numberOf(of: string, value: number, uncertainty: number, unit: string):
   return densityText(value, unit, uncertainty)
 }
 
-function whereText({ requirement: { where }, frequency }: RequirementResult, assessment: Assessment): string {
+function whereText({ requirement: { where }, frequency }: RequirementResult, spoken: Spoken): string {
   if (where === null) return ''
   if ('at' in where) return `at ${frequencyText(where.at, 12)}`
-  const worst = frequency === null ? '' : `, worst at ${spokenFrequency(assessment, frequency, where.to - where.from)}`
+  const worst = frequency === null ? '' : `, worst at ${spoken(frequency, where.to - where.from)}`
   return `from ${rangeText(where.from, where.to)}${worst}`
 }
 

@@ -19,7 +19,7 @@ function result(of: string, value: number, wanted: number, met: boolean): Requir
     about: null,
     place,
   } as const
-  return { requirement, value, spread, frequency: of.startsWith('occupancy') ? null : 1.243e6, met }
+  return { requirement, title: null, value, spread, frequency: of.startsWith('occupancy') ? null : 1.243e6, met }
 }
 
 const withResults = (...requirements: RequirementResult[]): Assessment => ({ ...fixtureAssessment(), requirements })

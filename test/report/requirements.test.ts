@@ -33,7 +33,7 @@ describe('requirements', () => {
   it('count decibels of a margin as they are, and say nothing of uncertainties that are not there', () => {
     const spread = { statistical: 0, systematic: 0, combined: 0 }
     const requirement = { ...results[0].requirement, of: 'margin.sql', value: 3, text: '3 dB' }
-    const row = rowOf({ ...results[0], requirement, value: 9.25, spread })
+    const row = rowOf({ ...results[0], title: 'Standard quantum limit', requirement, value: 9.25, spread })
     expect([row.what, plain(row.number), plain(row.distance)]).toEqual([
       'Margin to the standard quantum limit',
       '9.3 dB',

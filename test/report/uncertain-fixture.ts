@@ -25,7 +25,7 @@ const requirement = (id: string, of: string, value: number, text: string): Requi
 /** One met, one missed by a band, one of an occupancy, one that has no number here. */
 export const results: readonly RequirementResult[] = [
   {
-    ...{ requirement: requirement('proposal', 'total', 20e-18, '20 aN/√Hz'), value: 16.3e-18 },
+    ...{ requirement: requirement('proposal', 'total', 20e-18, '20 aN/√Hz'), title: 'Total', value: 16.3e-18 },
     ...{ spread: spread(0.1e-18), frequency: 1.2435e6, met: true },
   },
   {
@@ -33,14 +33,14 @@ export const results: readonly RequirementResult[] = [
       ...requirement('edge', 'shot', 300e-18, '300 aN/√Hz'),
       where: { from: 1.2e6, to: 1.3e6 },
     },
-    ...{ value: 450e-18, spread: spread(2e-18), frequency: 1.3e6, met: false },
+    ...{ title: 'Shot', value: 450e-18, spread: spread(2e-18), frequency: 1.3e6, met: false },
   },
   {
-    ...{ requirement: requirement('cold', 'occupancy.fundamental', 30, '30'), value: 26.4 },
+    ...{ requirement: requirement('cold', 'occupancy.fundamental', 30, '30'), title: 'fundamental', value: 26.4 },
     ...{ spread: spread(0.4), frequency: null, met: true },
   },
   {
-    ...{ requirement: requirement('none', 'margin.other', 3, '3 dB'), value: NaN },
+    ...{ requirement: requirement('none', 'margin.other', 3, '3 dB'), title: null, value: NaN },
     ...{ spread: { statistical: NaN, systematic: NaN, combined: NaN }, frequency: null, met: false },
   },
 ]

@@ -19,7 +19,7 @@ describe('check', () => {
   it('says one line for a budget that is right', () => {
     const { code, out, err } = floorbook(project({ tern: good }), 'check')
     expect({ code, err }).toEqual({ code: 0, err: '' })
-    expect(out).toMatch(/^tern: Best \d[^\n]* aN\/√Hz at 1\.24[^\n]*\n$/u)
+    expect(out).toMatch(/^tern: \d[^\n]* aN\/√Hz at 1\.24[^\n]*\n$/u)
   })
 
   it.each([
@@ -41,7 +41,7 @@ describe('check', () => {
   it('goes on after a budget that is wrong', () => {
     const { code, out, err } = floorbook(project({ avocet: misspelt, tern: good }), 'check')
     expect(code).toBe(2)
-    expect(out).toMatch(/^tern: Best /)
+    expect(out).toMatch(/^tern: \d/)
     expect(err).toMatch(/^budgets\/avocet\/budget\.yaml:/)
   })
 
@@ -53,7 +53,7 @@ describe('check', () => {
     expect(first).toMatchObject({
       budget: 'avocet',
       exitCode: 2,
-      best: null,
+      reference: null,
       fault: null,
       problems: expect.arrayContaining([
         expect.objectContaining({
@@ -65,7 +65,7 @@ describe('check', () => {
         }),
       ]),
     })
-    expect(second).toMatchObject({ budget: 'tern', exitCode: 0, best: { unit: 'N/√Hz', asd: expect.any(Number) } })
+    expect(second).toMatchObject({ budget: 'tern', exitCode: 0, reference: { unit: 'N/√Hz', asd: expect.any(Number) } })
   })
 
   it('takes a budget by its name, its folder and its file', () => {
@@ -78,7 +78,7 @@ describe('check', () => {
       join(folder, 'budgets/tern'),
     ]) {
       const { code, out } = floorbook(folder, 'check', name)
-      expect({ name, code, start: out.slice(0, 10) }).toEqual({ name, code: 0, start: 'tern: Best' })
+      expect({ name, code, start: /^tern: \d/.test(out) }).toEqual({ name, code: 0, start: true })
     }
     expect(floorbook(folder, 'check', 'elsewhere')).toMatchObject({ code: 0, err: '' })
   })
