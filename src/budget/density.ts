@@ -62,8 +62,34 @@ export class DensityReader {
     const path = `${spot.path.replace(/\.density$/, '')}.table`
     const read = this.tables.read(table, { of, path, values: this.values })
     if (read === null) return null
-    const named = { density: 'table', table: read.table } as const
-    return read.scale === null ? named : { ...named, scale: read.scale }
+    const estimate = this.#estimate(read.table, path)
+    return {
+      density: 'table',
+      table: read.table,
+      ...(read.scale !== null && { scale: read.scale }),
+      ...(estimate !== null && { estimate }),
+    }
+  }
+
+  /** A spectrum averaged n times is known to 1/√n of its power [Welch, IEEE Trans. Audio Electroacoust. 15, 70 (1967)], at all frequencies alike. */
+  #estimate(index: number, path: string): Slot | null {
+    const { averages, place } = this.tables.tables[index]
+    if (averages === null) return null
+    const { roots } = this.values.keeper
+    roots.push({
+      id: `${path}.averages`,
+      value: 1,
+      uncertainty: 1 / Math.sqrt(averages),
+      distribution: 'normal',
+      effect: 'statistical',
+      dimension: 'number',
+      text: `${averages} averages`,
+      about: 'factor of the measured power, with the uncertainty that its averaging leaves',
+      evidence: null,
+      measured: null,
+      place,
+    })
+    return { root: roots.length - 1 }
   }
 
   #refuseLaw(tree: Tree, instead: string): void {

@@ -37,10 +37,12 @@ export class Binder {
     return this.parameters(given as Parameters)
   }
 
-  #scaleOf({ scale }: Extract<DensitySpec, { density: 'table' }>): number {
-    if (scale === undefined) return 1
+  /** What a table's power density is multiplied by. */
+  #scaleOf({ scale, estimate }: Extract<DensitySpec, { density: 'table' }>): number {
+    const known = estimate === undefined ? 1 : this.number(estimate)
+    if (scale === undefined) return known
     const factor = this.number(scale.factor)
-    return scale.power ? factor : factor * factor
+    return known * (scale.power ? factor : factor * factor)
   }
 
   #shape(density: DensitySpec): Shape {

@@ -122,6 +122,8 @@ export type DensitySpec =
       readonly table: number
       /** What multiplies the table: its square, or with `power` itself, times `psd` is in canonical SI units. */
       readonly scale?: { readonly factor: Slot; readonly power: boolean }
+      /** A factor of the power, 1, that carries the standard uncertainty 1/√n of a spectrum averaged n times. */
+      readonly estimate?: Slot
     }
   | {
       readonly density: 'formula'

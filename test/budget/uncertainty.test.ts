@@ -1,7 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { assess } from '../../src/engine/assess.js'
 import type { Root } from '../../src/model/budget.js'
-import { changed, good, lines, read } from './read.js'
+import { changed, good, lines, read, small } from './read.js'
 
 function massOf(text: string): Root {
   const root = good(changed(['mass: 3.1(2) ng', `mass: ${text}`])).roots.find(({ id }) => id === 'drum.mass')
@@ -93,5 +94,24 @@ describe('correlations', () => {
       }),
       { numRuns: 60, seed: 20261201 },
     )
+  })
+})
+
+describe('a spectrum of n averages', () => {
+  // Welch, IEEE Trans. Audio Electroacoust. 15, 70 (1967): the power of n independent spectra is known to 1/√n, its root to half of it.
+  it('carries 1/√n of its power to the line and to the total', () => {
+    const noise =
+      'contributions:\n  tip: { kind: force-noise, into: drum, table: { file: tip.csv, units: [Hz, N/√Hz], averages: 25 } }\n'
+    const { budget } = read(
+      small.replace('3.1(2) ng', '3.1 ng').replace('band:', 'reference: 1.25 MHz\nband:') + noise,
+      {
+        'tip.csv': '1e6,3e-15\n2e6,3e-15\n',
+      },
+    )
+    const { lineSpreads, atReference, headlines } = assess(budget!, 'glance')
+    const tip = atReference.lines.findIndex(line => line.id === 'tip')
+    expect(lineSpreads[tip].combined / 3e-15).toBeCloseTo(0.5 / 5, 8)
+    const { asd, asdSpread } = headlines.reference!
+    expect(asdSpread.combined).toBeCloseTo((0.5 / 5) * (9e-30 / asd), 24)
   })
 })
