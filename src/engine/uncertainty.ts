@@ -75,7 +75,8 @@ export function bandsOf(budget: Budget, evaluation: Evaluation, list: readonly S
     for (let k = 0; k < n; k++) target[k] += factor * a.total[k] * b.total[k]
   }
   for (let k = 0; k < n; k++) {
-    const half = 2 * Math.sqrt(evaluation.total[k])
+    // Where nothing is left of the total there is nothing to be uncertain about.
+    const half = evaluation.total[k] > 0 ? 2 * Math.sqrt(evaluation.total[k]) : Infinity
     const { statistical, systematic, mixed } = {
       statistical: sum.statistical[k],
       systematic: sum.systematic[k],
