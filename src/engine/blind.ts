@@ -2,7 +2,8 @@ import type { Budget } from '../model/budget.js'
 import type { Network } from '../model/network.js'
 import { Refusal } from '../model/problem.js'
 import { add, magnitude, multiply } from '../physics/complex.js'
-import { denseAt, injectionColumn, solveDense } from './dense.js'
+import { solveDense } from '../physics/solve-dense.js'
+import { denseAt, injectionColumn } from './dense.js'
 
 /** What is left of terms that cancel is rounding below this part of them. */
 const rounding = 1e-12

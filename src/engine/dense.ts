@@ -1,5 +1,6 @@
 import type { Complex, Entry, Injection, Network } from '../model/network.js'
-import { add, complex, divide, magnitude, multiply, scale, subtract } from '../physics/complex.js'
+import { add, complex, multiply, scale, subtract } from '../physics/complex.js'
+import type { Dense } from '../physics/solve-dense.js'
 
 /** ω = 2π·anchor + shift, anchor in Hz and shift complex in rad/s, so that a pole next to a mode keeps its digits. */
 export interface ComplexFrequency {
@@ -27,8 +28,6 @@ function entryAt(entry: Entry, at: ComplexFrequency): { value: Complex; slope: C
   }
 }
 
-export type Dense = Complex[][]
-
 /** M(ω) and dM/dω. */
 export function denseAt(network: Network, at: ComplexFrequency): { matrix: Dense; slope: Dense } {
   const n = network.unknowns.length
@@ -41,39 +40,6 @@ export function denseAt(network: Network, at: ComplexFrequency): { matrix: Dense
     slope[row][column] = add(slope[row][column], here.slope)
   }
   return { matrix, slope }
-}
-
-/**
- * Solves A X = B for small complex matrices by elimination with row exchanges; rows are weighed by their largest entry, since
- * mechanical and field rows have different units. A pivot that vanishes is replaced by rounding noise, as inverse iteration wants.
- */
-export function solveDense(a: Dense, b: Dense): Dense {
-  const n = a.length
-  const weights = a.map(row => 1 / Math.max(...row.map(magnitude), Number.MIN_VALUE))
-  const rows = a.map((row, i) => ({ left: [...row], right: [...b[i]], weight: weights[i] }))
-  for (let k = 0; k < n; k++) {
-    let best = k
-    for (let i = k + 1; i < n; i++) {
-      if (magnitude(rows[i].left[k]) * rows[i].weight > magnitude(rows[best].left[k]) * rows[best].weight) best = i
-    }
-    ;[rows[k], rows[best]] = [rows[best], rows[k]]
-    const { left, right, weight } = rows[k]
-    if (magnitude(left[k]) === 0) left[k] = complex(Number.EPSILON / weight)
-    for (let i = k + 1; i < n; i++) {
-      const factor = divide(rows[i].left[k], left[k])
-      for (let j = k; j < n; j++) rows[i].left[j] = subtract(rows[i].left[j], multiply(factor, left[j]))
-      rows[i].right = rows[i].right.map((value, j) => subtract(value, multiply(factor, right[j])))
-    }
-  }
-  for (let k = n - 1; k >= 0; k--) {
-    const { left, right } = rows[k]
-    rows[k].right = right.map((value, j) => {
-      let sum = value
-      for (let i = k + 1; i < n; i++) sum = subtract(sum, multiply(left[i], rows[i].right[j]))
-      return divide(sum, left[k])
-    })
-  }
-  return rows.map(row => row.right)
 }
 
 export const transpose = (a: Dense): Dense => a.map((_, i) => a.map(row => row[i]))

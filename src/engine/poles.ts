@@ -1,6 +1,7 @@
 import type { Complex, Network } from '../model/network.js'
 import { add, complex, magnitude, reciprocal, scale, subtract } from '../physics/complex.js'
-import { denseAt, omegaOf, solveDense, type ComplexFrequency } from './dense.js'
+import { solveDense } from '../physics/solve-dense.js'
+import { denseAt, omegaOf, type ComplexFrequency } from './dense.js'
 import { poleGuesses } from './state-space.js'
 
 /** One pole of the network: z(t) ∝ e^{−iωt}. */

@@ -1,6 +1,7 @@
 import type { Complex, Injection, Network } from '../model/network.js'
 import { add, multiply } from '../physics/complex.js'
-import { denseAt, injectionColumn, solveDense, type ComplexFrequency } from './dense.js'
+import { solveDense } from '../physics/solve-dense.js'
+import { denseAt, injectionColumn, type ComplexFrequency } from './dense.js'
 import { filterAt } from './filter.js'
 
 /** R(ω): transfer of an injection to the record at a complex frequency. */
