@@ -2,7 +2,6 @@
 import type { Check } from './check.js'
 import { check as amplifier } from './checks/amplifier.js'
 import { check as cavity } from './checks/cavity.js'
-import { check as loss } from './checks/loss.js'
 import { check as resonator } from './checks/resonator.js'
 import { check as rigid } from './checks/rigid.js'
 
@@ -10,7 +9,6 @@ import { check as rigid } from './checks/rigid.js'
 export const checks: ReadonlyMap<string, Check> = new Map<string, Check>([
   ['amplifier', amplifier],
   ['cavity', cavity],
-  ['loss', loss],
   ['resonator', resonator],
   ['rigid', rigid],
 ])

@@ -16,6 +16,8 @@ export interface Output {
   senses(): string
   /** Phase ψ of the mean carrier in rad, or null where no carrier leaves. */
   carrier(): number | null
+  /** Frequency of the carrier in Hz, at which baths on the way count their quanta. */
+  frequency(): number
   /** True behind an amplifier whose gain is so large that no noise behind it matters. */
   amplified(): boolean
   /** Adds u·a_out + v·a_out† to the record, with all noise on the way. */

@@ -24,6 +24,7 @@ export const references = {
     year: 2001,
   },
   'caves-1982': { authors: 'C. M. Caves', where: 'Phys. Rev. D 26, 1817', year: 1982 },
+  'friis-1944': { authors: 'H. T. Friis', where: 'Proc. IRE 32, 419', year: 1944 },
   'braginsky-khalili-1992': {
     authors: 'V. B. Braginsky, F. Ya. Khalili',
     where: 'Quantum Measurement (Cambridge University Press)',

@@ -30,6 +30,7 @@ describe('the catalogue pages', () => {
   it('write references out', () => {
     expect(views.find(view => view.kind === 'amplifier')?.references).toEqual([
       'C. M. Caves, Phys. Rev. D 26, 1817 (1982)',
+      'H. T. Friis, Proc. IRE 32, 419 (1944)',
     ])
   })
 })

@@ -21,10 +21,17 @@ export const declaration = {
     temperature: {
       type: 'quantity',
       dimension: 'temperature',
+      symbol: 'T',
       range: 'non-negative',
       meaning: 'temperature of the lossy stretch',
     },
-    occupancy: { type: 'quantity', dimension: 'number', range: 'non-negative', meaning: 'quanta of its bath' },
+    occupancy: {
+      type: 'quantity',
+      dimension: 'number',
+      symbol: 'n',
+      range: 'non-negative',
+      meaning: 'quanta of its bath, none where neither is given',
+    },
   },
   exclusive: [{ keys: ['temperature', 'occupancy'], need: 'at most one' }],
   noises: [{ channel: 'loss', parts: true }],
@@ -33,8 +40,14 @@ export const declaration = {
       name: 'loss',
       tex: 'a_{\\mathrm{out}} = \\sqrt{\\eta}\\,a_{\\mathrm{in}} + \\sqrt{1-\\eta}\\,a_{\\mathrm{bath}},\\quad V = \\left(n+\\tfrac12\\right)\\begin{pmatrix}1&0\\\\0&1\\end{pmatrix}',
     },
+    { name: 'bath at a temperature', tex: 'n = \\frac{1}{e^{\\hbar\\omega_p/k_B T}-1}' },
   ],
-  symbols: { n: 'quanta of the bath', V: 'symmetrised covariance of the bath' },
-  references: ['clerk-2010'],
-  validity: 'A loss that is flat over the band.',
+  symbols: {
+    k_B: 'Boltzmann constant',
+    '\\omega_p': 'frequency of the carrier',
+    V: 'symmetrised covariance of the bath',
+  },
+  references: ['clerk-2010', 'callen-welton-1951'],
+  validity:
+    'A loss that is flat over the band, whose bath has the quanta of the carrier’s frequency on both sidebands.',
 } as const satisfies Declaration

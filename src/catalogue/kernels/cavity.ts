@@ -107,6 +107,7 @@ function addPort(
   net.output(id, {
     senses: () => instance.id,
     carrier: () => (vanishes ? null : phase(mean)),
+    frequency: () => instance.values.frequency + point.detuning / (2 * Math.PI),
     amplified: () => false,
     read(u, v) {
       net.record(fields[0], multiply(u, root))
