@@ -1,5 +1,4 @@
 import type { Complex } from '../model/network.js'
-import { EngineFault } from '../model/problem.js'
 import { add, complex, conjugate, divide, magnitude, multiply, scale, subtract } from './complex.js'
 import type { Dense } from './solve-dense.js'
 
@@ -88,7 +87,7 @@ function blockStart(a: Dense, end: number): number {
 /**
  * Eigenvalues of a small complex matrix in no particular order, by the shifted QR method on its Hessenberg form [Francis, Comput. J. 4, 265 (1961);
  * Wilkinson, The Algebraic Eigenvalue Problem (Oxford, 1965)], both cited from memory. Good to rounding of the largest entry where the matrix is balanced.
- * The input stays as it is. Throws `EngineFault` where it does not settle, which entries that are no numbers bring about.
+ * The input stays as it is. Throws where it does not settle, which entries that are no numbers bring about.
  */
 export function eigenvalues(matrix: Dense): Complex[] {
   const a = matrix.map(row => [...row])
@@ -101,7 +100,7 @@ export function eigenvalues(matrix: Dense): Complex[] {
       passes = 0
       continue
     }
-    if (++passes > 60) throw new EngineFault('the eigenvalues of a matrix do not settle')
+    if (++passes > 60) throw new Error('the eigenvalues of a matrix do not settle')
     // A shift from elsewhere now and then leads out of a cycle.
     const shift = passes % 15 === 0 ? complex(magnitude(a[end][end - 1])) : shiftAt(a, end)
     step(a, start, end, shift)
