@@ -28,7 +28,7 @@ describe('blocks of field noise', () => {
         fc.double({ min: 0, max: 20, noNaN: true }),
         fc.double({ min: -4, max: 4, noNaN: true }),
         (level, angle) => {
-          const block = squeezedBlock(half, level, angle)
+          const block = squeezedBlock(half, { level, angle })
           const ratio = 10 ** (level / 10)
           expect(quadrature(block, angle) / 2 / (1 / ratio)).toBeCloseTo(1, 10)
           expect(quadrature(block, angle + Math.PI / 2) / 2 / ratio).toBeCloseTo(1, 12)
@@ -43,7 +43,7 @@ describe('blocks of field noise', () => {
   })
 
   test('no squeezing is a thermal block', () => {
-    for (const [i, row] of squeezedBlock(0.7, 0, 1).entries()) {
+    for (const [i, row] of squeezedBlock(0.7, { level: 0, angle: 1 }).entries()) {
       for (const [j, value] of row.entries()) {
         expect(Math.hypot(value.re - thermalBlock(0.7)[i][j].re, value.im)).toBe(0)
       }

@@ -1,7 +1,11 @@
 import type { Check, Finding, Given, Surroundings } from '../check.js'
 
-/** Squeezed light enters with the carrier; g₀ = G·x_zp needs the zero-point motion of one oscillator. */
-export const check: Check = (given, around) => [...straySqueezing(given), ...couplingOfOne(given, around)]
+/** Squeezed light enters with the carrier and has at least as much antisqueezing; g₀ = G·x_zp needs the zero-point motion of one oscillator. */
+export const check: Check = (given, around) => [
+  ...straySqueezing(given),
+  ...tooPure(given),
+  ...couplingOfOne(given, around),
+]
 
 function straySqueezing(given: Given): Finding[] {
   const pumped = given.word('pump.port')
@@ -14,6 +18,22 @@ function straySqueezing(given: Given): Finding[] {
       code: 'squeezing-port',
       message: `the squeezing angle counts from the carrier that enters, and the carrier enters through \`${pumped}\`, not through \`${port}\`: squeeze \`${pumped}\` or pump through \`${port}\``,
     }))
+}
+
+/** The product of both quadratures is at least the vacuum's. */
+function tooPure(given: Given): Finding[] {
+  return given.names('ports').flatMap(port => {
+    const path = `ports.${port}.squeezing`
+    const [level = 0, anti] = [given.number(`${path}.level`), given.number(`${path}.antisqueezing`)]
+    if (anti === undefined || anti >= level) return []
+    return [
+      {
+        path: `${path}.antisqueezing`,
+        code: 'squeezing-bound',
+        message: `a quadrature ${level} dB below vacuum leaves at least ${level} dB above it in the other; \`antisqueezing\` says ${anti} dB`,
+      },
+    ]
+  })
 }
 
 function couplingOfOne(given: Given, around: Surroundings): Finding[] {

@@ -102,6 +102,20 @@ export const declaration = {
               required: true,
               meaning: 'noise power below vacuum in the squeezed quadrature',
             },
+            antisqueezing: {
+              type: 'quantity',
+              dimension: 'decibel',
+              range: 'non-negative',
+              meaning:
+                'noise power above vacuum in the other quadrature; as much as `level` where left out, a pure state',
+            },
+            injection_loss: {
+              type: 'quantity',
+              dimension: 'power-ratio',
+              symbol: '\\varepsilon',
+              range: 'fraction',
+              meaning: 'part of the power that vacuum replaces between the squeezer and the port, none where left out',
+            },
             angle: {
               type: 'quantity',
               dimension: 'angle',
@@ -162,6 +176,10 @@ export const declaration = {
       name: 'back-action',
       tex: 'S_F^{\\mathrm{ba}} = 2\\,f\\,V_j f^\\dagger,\\quad f=\\hbar G\\sqrt{\\bar n\\kappa_j}\\,\\big(\\chi_c(\\omega),\\,\\chi_c^*(-\\omega)\\big)',
     },
+    {
+      name: 'squeezed port with injection loss',
+      tex: 'V_j = (1-\\varepsilon)\\,V_{\\mathrm{sqz}} + \\tfrac12\\varepsilon',
+    },
     { name: 'pump', tex: 'P = \\hbar\\omega_p\\bar n\\,\\frac{\\kappa^2/4+\\Delta^2}{\\kappa_{\\mathrm{in}}}' },
   ],
   symbols: {
@@ -171,6 +189,8 @@ export const declaration = {
     '\\bar a': 'mean field, $\\sqrt{\\bar n}$, real',
     '\\kappa': 'total energy decay rate, $\\sum_j\\kappa_j$',
     '\\chi_c': 'response of the field',
+    'V_{\\mathrm{sqz}}':
+      'squeezed covariance, $n_j+\\tfrac12$ times $10^{-L/10}$ in the squeezed quadrature of level $L$ and $10^{A/10}$ in the other of antisqueezing $A$',
     V_j: 'symmetrised covariance of the noise at port $j$',
     't_{\\mathrm{imp}}': 'transfer to the detector with the motion clamped',
     R: 'transfer of the measurand to the detector',

@@ -2,7 +2,7 @@ import type { Complex, Covariance, Mode, WorkingPoint } from '../../model/networ
 import { Refusal } from '../../model/problem.js'
 import { complex, magnitude, multiply, phase, scale } from '../../physics/complex.js'
 import { reducedPlanckConstant } from '../../physics/constants.js'
-import { squeezedBlock, thermalBlock } from '../../physics/covariance.js'
+import { addBlocks, squeezedBlock, thermalBlock } from '../../physics/covariance.js'
 import { intracavityQuanta, pumpPower } from '../../physics/photons.js'
 import { occupancy } from '../../physics/quanta.js'
 import type { declaration } from '../declarations/cavity.js'
@@ -83,8 +83,9 @@ function addPort(
   const { occupancy: quanta, rate } = point.ports.find(p => p.id === name)!
   // The squeezing angle counts from the carrier that enters, whose phase in the frame of ā is arg(κ/2 − iΔ).
   const angle = (port.squeezing?.angle ?? 0) + Math.atan2(-point.detuning, point.kappa / 2)
+  const kept = 1 - (port.squeezing?.injection_loss ?? 0)
   const block = (strength: number): Covariance =>
-    port.squeezing ? squeezedBlock(strength, port.squeezing.level, angle) : thermalBlock(strength)
+    port.squeezing ? squeezedBlock(strength * kept, { ...port.squeezing, angle }) : thermalBlock(strength)
   const id = `${instance.id}.${name}`
   const root = complex(Math.sqrt(rate))
   net.source({
@@ -97,7 +98,7 @@ function addPort(
     ownUnit: 'quanta',
     ownFactor: quanta + 0.5,
     nodes: fields.map(row => ({ rows: [{ row, value: root }], direct: noDirect })),
-    vacuum: block(0.5),
+    vacuum: addBlocks(block(0.5), thermalBlock(0.5 * (1 - kept))),
     heating: quanta > 0 ? block(quanta) : null,
     shape: { form: 'constant', value: 1 },
     parted: true,
