@@ -93,12 +93,12 @@ const abilities: Readonly<Record<Exclude<NameField['of'], 'port'> | 'detector', 
   mode: {
     wanted: 'a mechanical mode',
     noun: 'mechanical mode',
-    test: declaration => declaration.nature === 'mechanical',
+    test: declaration => declaration.nature === 'mechanical' || declaration.moves === true,
   },
   sensing: {
     wanted: 'a component that senses motion (a cavity or a plain readout)',
     noun: 'component that senses motion',
-    test: declaration => hasField(declaration, type => type === 'weights'),
+    test: declaration => hasField(declaration, type => type === 'weights') || declaration.moves === true,
   },
   recorder: {
     wanted: 'a detector of light',

@@ -9,7 +9,7 @@ import type { Directory } from './directory.js'
 import type { Issues } from './issues.js'
 import { child, placeWithin, type Tree } from './tree.js'
 
-const quantities = ['force', 'acceleration', 'displacement'] as const
+const quantities = ['force', 'acceleration', 'displacement', 'strain'] as const
 
 /** Reads `measurand:`; null where it is none, which has been said. */
 export function readMeasurand(
@@ -93,9 +93,33 @@ export function checkMovedMass(measurand: MeasurandSpec, components: readonly Co
   }
 }
 
+/** A strain pushes a mode by ½ m L ω² h with the length L that the file must state; an interferometer knows its own. */
+export function checkStrainLength(
+  measurand: MeasurandSpec,
+  components: readonly ComponentSpec[],
+  issues: Issues,
+): void {
+  if (measurand.quantity !== 'strain') return
+  for (const component of pushed(measurand, components)) {
+    const declaration = declarations.get(component.kind)
+    if (declaration?.moves === true || component.parameters['strain_length'] !== undefined) continue
+    const remedy =
+      declaration?.fields['strain_length'] === undefined
+        ? 'push a `resonator` with a `strain_length` or an `interferometer` instead'
+        : 'give `strain_length`, 4/π² of its length for a bar'
+    const message = `a strain pushes \`${component.id}\` by its effective length, which is not known; ${remedy}`
+    issues.error('strain-length', component.place, message)
+  }
+}
+
 /** The mechanical components that a measurand pushes. */
 function pushed(measurand: MeasurandSpec, components: readonly ComponentSpec[]): ComponentSpec[] {
-  const modes = components.filter(component => declarations.get(component.kind)?.nature === 'mechanical')
+  const modes = components.filter(({ kind }) => {
+    const declaration = declarations.get(kind)
+    return declaration?.nature === 'mechanical' || declaration?.moves === true
+  })
+  const itself = modes.find(mode => mode.id === measurand.at)
+  if (itself !== undefined) return [itself]
   const sensing = components.find(component => component.id === measurand.at)?.parameters['modes']
   const ids =
     measurand.weights?.keys() ?? (sensing instanceof Map ? (sensing as ReadonlyMap<string, unknown>).keys() : null)

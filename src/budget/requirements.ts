@@ -148,6 +148,7 @@ const densityOf: Readonly<Record<MeasurandSpec['quantity'], DensityOf>> = {
   force: 'force',
   acceleration: 'acceleration',
   displacement: 'length',
+  strain: 'strain',
 }
 
 function scalarOf(tree: Tree): TreeScalar | null {

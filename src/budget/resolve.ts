@@ -11,7 +11,7 @@ import { FieldReader } from './fields.js'
 import type { Issues } from './issues.js'
 import { checkKinds } from './kind-checks.js'
 import { readLines } from './lines.js'
-import { checkMovedMass, readMeasurand } from './measurand.js'
+import { checkMovedMass, checkStrainLength, readMeasurand } from './measurand.js'
 import { revisionPattern } from './names.js'
 import { checkNames } from './namespace.js'
 import { impliedNoises } from './noises.js'
@@ -44,7 +44,10 @@ export function resolve(root: Tree, origin: Origin, issues: Issues): Budget | nu
   const reference = readReference(child(root, 'reference'), band, reader)
   const network = { components, lines, unsound, readout: readout?.id ?? null }
   checkNetwork(network, reader)
-  if (measurand !== null) checkMovedMass(measurand, components, issues)
+  if (measurand !== null) {
+    checkMovedMass(measurand, components, issues)
+    checkStrainLength(measurand, components, issues)
+  }
   const revision = readRevision(child(root, 'revision'), issues)
   const requirements =
     measurand === null || band === null

@@ -136,7 +136,7 @@ const measurand: Schema = {
   type: 'object',
   description: 'what the total is referred to',
   properties: {
-    quantity: { enum: ['force', 'acceleration', 'displacement'], description: 'what is measured' },
+    quantity: { enum: ['force', 'acceleration', 'displacement', 'strain'], description: 'what is measured' },
     mode: { ...name, description: 'the one mode that is pushed' },
     at: { ...name, description: 'pushes as this component senses' },
     weights: { ...userMap(short), description: 'share of the push that each mode takes: { first: 1, second: -0.5 }' },

@@ -74,7 +74,9 @@ export interface WeightsField extends Common {
  */
 export interface DensityField extends Common {
   readonly type: 'density'
-  readonly of: 'force' | 'length' | 'quanta'
+  readonly of: 'force' | 'length' | 'voltage' | 'current' | 'quanta' | 'relative-intensity' | 'phase' | 'frequency'
+  /** TeX of its symbol in the kind's equations. */
+  readonly symbol?: string
 }
 
 export type Fields = { readonly [name: string]: Field }
@@ -91,6 +93,8 @@ export interface ImpliedNoise {
   readonly channel: string
   /** A map field: one channel for each of its names. */
   readonly each?: string
+  /** Paths of fields of which one must be given for the noise to exist. */
+  readonly where?: readonly string[]
   /** Whether a line may claim `imprecision`, `back-action` or `heating` of it alone. */
   readonly parts: boolean
 }
@@ -104,6 +108,8 @@ export interface Declaration {
   readonly summary: string
   /** `mechanical`: may carry weights and be pushed; `field`: has ports; `chain`: reads a port or a chain element; `detector`: may be the readout. */
   readonly nature: 'mechanical' | 'field' | 'chain' | 'detector' | 'noise'
+  /** Brings a mechanical mode of its own, which answers to the component's id. */
+  readonly moves?: true
   /** Where a noise of its own enters, for contributions. */
   readonly family?: Family
   readonly fields: Fields

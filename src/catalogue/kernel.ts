@@ -57,6 +57,8 @@ export type Stage = 'mechanical' | 'field' | 'chain' | 'detector' | 'noise'
 export interface Kernel<Values = never> {
   /** When it is called: what it refers to at once must be there already. */
   readonly stage: Stage
+  /** Puts a mode of its own into the network, before any field asks for modes. */
+  move?(instance: Instance<Values>, net: Assembly): void
   assemble(instance: Instance<Values>, net: Assembly): void
 }
 

@@ -23,6 +23,18 @@ export const references = {
     where: 'Phys. Rev. D 65, 022002',
     year: 2001,
   },
+  'caves-1981': { authors: 'C. M. Caves', where: 'Phys. Rev. D 23, 1693', year: 1981 },
+  'putman-1992': {
+    authors: 'C. A. J. Putman, B. G. de Grooth, N. F. van Hulst, J. Greve',
+    where: 'J. Appl. Phys. 72, 6',
+    year: 1992,
+  },
+  'hsu-2004': {
+    authors: 'M. T. L. Hsu, V. Delaubert, P. K. Lam, W. P. Bowen',
+    where: 'J. Opt. B: Quantum Semiclass. Opt. 6, 495',
+    year: 2004,
+  },
+  'ieee-1139': { authors: 'IEEE', where: 'IEEE Std 1139, definitions of phase and frequency noise', year: 2008 },
   'caves-1982': { authors: 'C. M. Caves', where: 'Phys. Rev. D 26, 1817', year: 1982 },
   'friis-1944': { authors: 'H. T. Friis', where: 'Proc. IRE 32, 419', year: 1944 },
   'braginsky-khalili-1992': {

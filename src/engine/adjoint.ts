@@ -1,6 +1,6 @@
 import type { Entry, Injection, Network } from '../model/network.js'
 import { addForms, constantForm, isZeroForm, negateForm, scaleForm, zeroForm, type Form } from './form.js'
-import { filterForm } from './filter.js'
+import { filterForm, rootForm } from './filter.js'
 import { oscillator } from './oscillator.js'
 import type { Tape } from './tape.js'
 
@@ -18,7 +18,7 @@ export interface Adjoint {
   readonly full: readonly Form[]
   /** Over the fields with the mechanics clamped, zero at mechanical unknowns. */
   readonly clamped: readonly Form[]
-  /** full − clamped at the fields, formed without subtracting the two. */
+  /** full − clamped, formed without subtracting the two. */
   readonly moved: readonly Form[]
   /** Solves the clamped transposed field block for another row over the fields. */
   clampedRow(row: readonly { column: number; value: { re: number; im: number } }[]): readonly Form[]
@@ -160,22 +160,20 @@ export function adjoint(tape: Tape, network: Network): Adjoint {
     ),
   )
   const pushed = solveMechanics(tape, schur, right)
-  const moved = fields.map((_, fIndex) =>
+  const movedFields = fields.map((_, fIndex) =>
     mechanics.reduce(
       (sum, _k, kIndex) => addForms(sum, negateForm(tape.multiply(pulls[kIndex][fIndex], pushed[kIndex]))),
       zeroForm,
     ),
   )
-  const full = [
-    ...spread(
-      fields,
-      clamped.map((form, i) => addForms(form, moved[i])),
-    ).entries(),
-  ].map(([i, form]) => (mechanics.includes(i) ? pushed[mechanics.indexOf(i)] : form))
+  const moved = spread(fields, movedFields).map((form, i) =>
+    mechanics.includes(i) ? pushed[mechanics.indexOf(i)] : form,
+  )
+  const still = spread(fields, clamped)
   return {
-    full,
-    clamped: spread(fields, clamped),
-    moved: spread(fields, moved),
+    full: moved.map((form, i) => addForms(still[i], form)),
+    clamped: still,
+    moved,
     clampedRow: row => spread(fields, substitute(tape, factors, rowOver(row, fields))),
   }
 }
@@ -191,5 +189,6 @@ export function transfer(tape: Tape, row: readonly Form[], injection: Injection,
     const element = alone ? tape.single(row[r]) : row[r]
     return addForms(sum, scaleForm(element, value))
   }, start)
-  return injection.filter === undefined ? form : tape.multiply(form, filterForm(tape, injection.filter))
+  const filtered = injection.filter === undefined ? form : tape.multiply(form, filterForm(tape, injection.filter))
+  return injection.shape === undefined ? filtered : tape.multiply(filtered, rootForm(tape, injection.shape))
 }

@@ -144,12 +144,27 @@ function measurandInjection(budget: Budget, builder: Builder, sensing: Sensing):
     })
     return { rows, direct }
   }
+  if (quantity === 'strain') return strainInjection(budget, builder)
   const pushed =
     weights ?? new Map((at === null ? sensing : builder.sensingOf(at)).weights.map(w => [w.mode.id, w.weight]))
   return {
     rows: [...pushed].map(([id, weight]) => ({ row: builder.modeOf(id).unknown, value: complex(weight) })),
     direct,
   }
+}
+
+/** F = M ḧ on each pushed mode, M its strain moment: every mode that the file does not exclude by naming others. */
+function strainInjection({ measurand }: Budget, builder: Builder): Injection {
+  const { weights, at, place } = measurand
+  const sensed = at === null ? null : builder.sensingOf(at).weights.map(w => [w.mode.id, w.weight] as const)
+  const pushed = [...(weights ?? sensed ?? [...builder.modes.keys()].map(id => [id, 1] as const))]
+  const rows = pushed.map(([id, weight]) => {
+    const { unknown, strainMoment } = builder.modeOf(id)
+    if (strainMoment === undefined)
+      throw refuse('strain-length', place, `strain needs the \`strain_length\` of \`${id}\``)
+    return { row: unknown, value: complex(weight * strainMoment) }
+  })
+  return { rows, direct: complex(0), filter: { order: 2, constant: complex(1) } }
 }
 
 /**
@@ -162,6 +177,7 @@ export function assemble(budget: Budget, roots: Float64Array = rootValues(budget
   for (const stage of stages) {
     for (const part of all) {
       const kernel = (kernels as Record<string, Kernel>)[part.kind]
+      if (stage === 'mechanical') kernel.move?.(part.instance, builder)
       if (kernel.stage === stage) kernel.assemble(part.instance, builder)
     }
   }

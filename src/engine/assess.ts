@@ -10,13 +10,14 @@ import { Evaluator } from './evaluate.js'
 import { firstPoints, pointAt, refine } from './grid.js'
 import { bestIndex, headlinesOf } from './headlines.js'
 import { polesOf, type Pole } from './poles.js'
+import { refuseBeyondQuantum } from './quantum-bound.js'
 import { requirementResults } from './requirements.js'
 import { Changes } from './sensitivity.js'
 import { refuseUnstable } from './stability.js'
 import { cavityStates, modeStates } from './states.js'
 import { bandsOf, lineSpreadsAt, rootSharesAt, type Differentiated } from './uncertainty.js'
 
-const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz' } as const
+const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz', strain: '1/√Hz' } as const
 
 const everything = { sources: true, limits: true } as const
 
@@ -36,6 +37,7 @@ export function prepare(budget: Budget): Prepared {
   const poles = polesOf(network)
   refuseUnstable(network, poles)
   refuseBlind(budget, network)
+  refuseBeyondQuantum(budget, network)
   return { budget, network, poles }
 }
 
@@ -88,10 +90,13 @@ function checkLimits(evaluation: Evaluation): void {
   }
 }
 
+/** True where the network knows how the readout disturbs what it senses. */
+const actsBack = ({ sensing }: Network): boolean => sensing.light !== null || sensing.push !== undefined
+
 /** What a person should know beside the numbers. */
 export function warningsOf({ budget, network }: Prepared): Problem[] {
   const warnings = [...budget.warnings]
-  if (network.sensing.light === null) {
+  if (!actsBack(network)) {
     warnings.push({
       severity: 'warning',
       code: 'no-back-action',
@@ -111,7 +116,7 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   if (depth === 'glance') tryVariants(budget)
   const { network, poles } = prepared
   const evaluation = evaluateBand(prepared)
-  if (network.sensing.light !== null) checkLimits(evaluation)
+  if (actsBack(network)) checkLimits(evaluation)
   const changes = new Changes(budget)
   const at = (...frequencies: number[]): Differentiated => {
     const here = evaluateList(prepared, frequencies)

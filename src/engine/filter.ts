@@ -1,8 +1,9 @@
-import type { Complex, Filter } from '../model/network.js'
+import type { Complex, Filter, Shape } from '../model/network.js'
 import { add, complex, multiply, polar, reciprocal, scale } from '../physics/complex.js'
 import { omegaOf, type ComplexFrequency } from './dense.js'
 import { addForms, constantForm, scaleForm, type Form } from './form.js'
 import { blockBytes, memory } from './loops.js'
+import { shapeReal } from './shapes.js'
 import type { Tape } from './tape.js'
 
 const twoPi = 2 * Math.PI
@@ -39,7 +40,18 @@ export function filterForm(tape: Tape, { order, delay, constant, decays = [] }: 
   )
 }
 
-/** The same at one complex frequency. */
+/** √S of a shape, as a factor of a transfer. */
+export function rootForm(tape: Tape, shape: Shape): Form {
+  const root = tape.root(shapeReal(tape, shape))
+  if (root.array.kind === 'one') return constantForm(complex(root.scale))
+  const address = tape.written([root])
+  return tape.complex(['real', address], out => ({ n }) => {
+    memory.copyWithin(out / 8, address / 8, address / 8 + n)
+    memory.fill(0, (out + blockBytes) / 8, (out + blockBytes) / 8 + n)
+  })
+}
+
+/** A filter at one complex frequency. */
 export function filterAt({ order = 0, delay = 0, constant, decays = [] }: Filter, at: ComplexFrequency): Complex {
   const omega = omegaOf(at)
   const sum = decays.reduce((total, { coefficient, half, detuning }) => {

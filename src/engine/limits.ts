@@ -78,10 +78,25 @@ function loopForm(tape: Tape, stiffness: Form, chi: Form): Form {
   return addForms(constantForm({ re: 1, im: 0 }), negateForm(tape.multiply(stiffness, chi)))
 }
 
+/** ħ²/S_F of a readout that states the force with which it pushes. */
+function statedBound(tape: Tape, network: Network): Real | null {
+  const force = (network.sensing.push ?? []).map(({ source, force }) => {
+    const { vacuum } = network.sources.find(each => each.id === source)!
+    const none = network.unknowns.map(() => zeroForm)
+    return quadratic(
+      tape,
+      force.map(node => transfer(tape, none, { rows: [], ...node }, true)),
+      vacuum,
+    )
+  })
+  const shaken = tape.sum(force)
+  return shaken.scale === 0 ? null : tape.ratio(constantReal(hbar * hbar), shaken)
+}
+
 /** ħ²|1 − k_opt χ_s|²/S_F^ba as a displacement [Braginsky, Khalili 1992; Tsang et al. 2011]; null without light. */
 function energyBound(tape: Tape, network: Network, adjoint: Adjoint, chi: Form): Real | null {
   const { light, injection } = network.sensing
-  if (light === null) return null
+  if (light === null) return statedBound(tape, network)
   const row = adjoint.clampedRow(light)
   const stiffness = transfer(tape, row, injection, false)
   const force = network.sources

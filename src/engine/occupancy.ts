@@ -21,7 +21,7 @@ function whitened(shape: Shape, mode: Mode): Shape {
 
 /** The network whose record is the motion of one mode itself, shaken by everything that enters its equations. */
 function motionOf(network: Network, mode: Mode): Network {
-  const still = (node: Injection): Injection => ({ rows: node.rows, direct: complex(0) })
+  const still = (node: Injection): Injection => ({ ...node, direct: complex(0) })
   const ownerOf = (source: Source): Mode => network.modes.find(m => m.id === source.owner) ?? mode
   const sources: Source[] = network.sources
     .filter(source => source.nodes.some(node => node.rows.length > 0))
@@ -69,8 +69,10 @@ function poleAnchors(poles: readonly Pole[]): Anchor[] {
  * the pole keeps below 10/Q; a stated power law or table may rise faster, and motion slower than a thousandth of the pole is then drift.
  */
 function lowestOf({ sources }: Network): number {
-  if (sources.some(({ shape }) => shape.form === 'power' || shape.form === 'table')) return 1e-3
-  return sources.some(({ shape }) => shape.form === 'structural bath') ? 1e-6 : 0
+  const shapes = sources.flatMap(({ shape, nodes }) => [shape, ...nodes.flatMap(node => node.shape ?? [])])
+  const drifts = sources.some(({ nodes }) => nodes.some(({ filter }) => (filter?.order ?? 0) < 0))
+  if (drifts || shapes.some(({ form }) => form === 'power' || form === 'table')) return 1e-3
+  return shapes.some(shape => shape.form === 'structural bath') ? 1e-6 : 0
 }
 
 /** Ends of panels from `lowest` to `highest` in Hz: geometric around every pole, whatever other poles lie in between. */

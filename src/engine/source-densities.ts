@@ -38,7 +38,10 @@ export class SourceDensities {
 
   /** The density of the source before any transfer, in its own unit. */
   own(): Real {
-    return scaleReal(this.#shape, this.source.ownFactor)
+    const { ownFactor, ownShapes } = this.source
+    if (ownShapes === undefined) return scaleReal(this.#shape, ownFactor)
+    const product = ownShapes.map(shape => shapeReal(this.tape, shape)).reduce((a, b) => this.tape.product(a, b))
+    return scaleReal(this.tape.root(product), ownFactor)
   }
 
   all(): Real {

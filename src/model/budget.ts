@@ -176,7 +176,7 @@ export interface LineClaim {
 }
 
 export interface MeasurandSpec {
-  readonly quantity: 'force' | 'acceleration' | 'displacement'
+  readonly quantity: 'force' | 'acceleration' | 'displacement' | 'strain'
   /** Weights d_k of the pushed modes by component id; null: as the quantity's default says. */
   readonly weights: ReadonlyMap<string, number> | null
   /** `at: <component>`: pushes as that component senses. */

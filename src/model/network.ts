@@ -47,11 +47,15 @@ export interface Filter {
   readonly decays?: readonly { readonly coefficient: Complex; readonly half: number; readonly detuning: number }[]
 }
 
-/** Where a unit of something enters: into the equations of some unknowns, and straight into the record; all of it behind the filter. */
+/**
+ * Where a unit of something enters: into the equations of some unknowns, and straight into the record; all of it behind the filter, and times
+ * the root of the shape where one source has another density at each of its nodes.
+ */
 export interface Injection {
   readonly rows: readonly { readonly row: number; readonly value: Complex }[]
   readonly direct: Complex
   readonly filter?: Filter
+  readonly shape?: Shape
 }
 
 /** Hermitian, positive semidefinite, one row a node of the source; one-sided (2V for fields). */
@@ -68,6 +72,10 @@ export interface Source {
   readonly ownUnit: 'N²/Hz' | 'm²/Hz' | 'quanta'
   /** Times the shape: the own density in `ownUnit`. */
   readonly ownFactor: number
+  /** Where given, it is times the root of the product of these instead. */
+  readonly ownShapes?: readonly Shape[]
+  /** Of a readout that states its noise: what the quantum bound says of it. */
+  readonly claim?: QuantumClaim
   readonly nodes: readonly Injection[]
   /** Times the shape: the density block of the vacuum share (or of all, for a source without quanta). */
   readonly vacuum: Covariance
@@ -76,6 +84,17 @@ export interface Source {
   readonly shape: Shape
   /** Enters at fields or at the record, so that it has imprecision, back-action and correlation. */
   readonly parted: boolean
+}
+
+/** A stated pair of imprecision and back-action, held against √(S_xx S_FF)·factor ≥ ħ; the source's own density is √(S_xx S_FF)/2ħ. */
+export interface QuantumClaim {
+  /** √(1 − ρ′²) − |ρ″| of the correlation ρ = S_xF/√(S_xx S_FF) = ρ′ + iρ″. */
+  readonly factor: number
+  /** `√(S_xx S_FF)`, and what it is counted in: `ħ`. */
+  readonly product: string
+  readonly unit: string
+  readonly remedy: string
+  readonly place: Place
 }
 
 export interface Unknown {
@@ -102,6 +121,8 @@ export interface Mode {
   readonly zeroPoint: number | null
   /** Mass that the frame's acceleration moves; null where the file does not say. */
   readonly movedMass: number | null
+  /** F/ḧ in kg m: force on the mode for the second derivative of a strain; absent where the file does not say. */
+  readonly strainMoment?: number
 }
 
 /** The coordinate x_s = Σ c_k x_k that a cavity or a plain readout senses. */
@@ -113,6 +134,11 @@ export interface Sensing {
   readonly injection: Injection
   /** Force of the light on the coordinate as a row over the fields: F = Σ value·z; null without back-action. */
   readonly light: readonly { readonly column: number; readonly value: Complex }[] | null
+  /** Of a readout without fields: sources that push the coordinate, with the force on it of a unit at each of their nodes. */
+  readonly push?: readonly {
+    readonly source: string
+    readonly force: readonly Pick<Injection, 'direct' | 'filter' | 'shape'>[]
+  }[]
 }
 
 /** A cavity at its working point. */

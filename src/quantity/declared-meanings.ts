@@ -89,6 +89,18 @@ const table = {
     phrase: 'a voltage',
     example: '3 mV',
   },
+  'voltage-per-length': {
+    dimension: dimensionOf({ mass: 1, length: 1, time: -3, current: -1 }),
+    unit: 'V/m',
+    phrase: 'a voltage per length',
+    example: '2 V/µm',
+  },
+  'voltage-per-speed': {
+    dimension: dimensionOf({ mass: 1, length: 1, time: -2, current: -1 }),
+    unit: 'V s/m',
+    phrase: 'a voltage per speed',
+    example: '12 V s/m',
+  },
   resistance: {
     dimension: dimensionOf({ mass: 1, length: 2, time: -3, current: -2 }),
     unit: 'Ω',

@@ -65,9 +65,10 @@ function pointColumns({ frequency, anchor, offset, anchors }: Points): readonly 
   ]
 }
 
-/** `N/√Hz` → `N²/Hz`, `m/s²/√Hz` → `(m/s²)²/Hz`. */
+/** `N/√Hz` → `N²/Hz`, `m/s²/√Hz` → `(m/s²)²/Hz`, `1/√Hz` → `1/Hz`. */
 export function powerUnitOf(unit: string): string {
   const base = unit.replace(/\/√Hz$/, '')
+  if (base === '1') return '1/Hz'
   return `${/^\w+$/.test(base) ? base : `(${base})`}²/Hz`
 }
 

@@ -7,6 +7,10 @@ const densityUnits: ReadonlyMap<string, string> = new Map([
   ['force-power-density', 'N²/Hz'],
   ['length-amplitude-density', 'm/√Hz'],
   ['length-power-density', 'm²/Hz'],
+  ['voltage-amplitude-density', 'V/√Hz'],
+  ['voltage-power-density', 'V²/Hz'],
+  ['current-amplitude-density', 'A/√Hz'],
+  ['current-power-density', 'A²/Hz'],
 ])
 
 /** A root's value in the canonical unit of its dimension, without prefix: `3.1 × 10⁻¹² kg`. */

@@ -35,8 +35,9 @@ function claimed(source: SourceCurve, part: string | null): { readonly own: numb
   const { vacuum, heating } = source
   if (part === 'heating' && heating !== undefined)
     return { own: Math.max(0, source.own[0] - vacuumQuanta), psd: whole(heating) }
-  if (part === 'imprecision' && vacuum !== undefined) return { own: vacuumQuanta, psd: vacuum.imprecision[0] }
-  if (part === 'back-action' && vacuum !== undefined) return { own: vacuumQuanta, psd: vacuum.backAction[0] }
+  const share = heating === undefined ? source.own[0] : vacuumQuanta
+  if (part === 'imprecision' && vacuum !== undefined) return { own: share, psd: vacuum.imprecision[0] }
+  if (part === 'back-action' && vacuum !== undefined) return { own: share, psd: vacuum.backAction[0] }
   return { own: source.own[0], psd: source.psd[0] }
 }
 

@@ -111,7 +111,7 @@ const cases: readonly Case[] = [
     files: { [drum]: small.replace('quality:', 'qualty:') },
     told: [
       `[missing-key] ${drum}:8:3: \`drum\` needs \`quality\` or \`losses\``,
-      `[unknown-key] ${drum}:8:67: unknown key \`qualty\` in \`drum\`; allowed are \`kind\`, \`mass\`, \`frequency\`, \`quality\`, \`law\`, \`losses\`, \`temperature\`, \`moved_mass\`; did you mean \`quality\`?`,
+      `[unknown-key] ${drum}:8:67: unknown key \`qualty\` in \`drum\`; allowed are \`kind\`, \`mass\`, \`frequency\`, \`quality\`, \`law\`, \`losses\`, \`temperature\`, \`moved_mass\`, \`strain_length\`; did you mean \`quality\`?`,
     ],
   },
   {
@@ -246,7 +246,7 @@ const cases: readonly Case[] = [
     name: 'variant: a misspelt field',
     text: varied('drum.qualty: 1e9'),
     told: [
-      `[unknown-key] ${tern}:20:7: variant \`cold\`: unknown key \`qualty\` in \`drum\`; allowed are \`kind\`, \`mass\`, \`frequency\`, \`quality\`, \`law\`, \`losses\`, \`temperature\`, \`moved_mass\`; did you mean \`quality\`?`,
+      `[unknown-key] ${tern}:20:7: variant \`cold\`: unknown key \`qualty\` in \`drum\`; allowed are \`kind\`, \`mass\`, \`frequency\`, \`quality\`, \`law\`, \`losses\`, \`temperature\`, \`moved_mass\`, \`strain_length\`; did you mean \`quality\`?`,
     ],
   },
   {

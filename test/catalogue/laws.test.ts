@@ -127,6 +127,8 @@ const notation = new Set(
     'dagger',
     'dots',
     'text',
+    'dot',
+    'cos',
     'times',
     'coth',
   ].map(word => `\\${word}`),
@@ -233,7 +235,66 @@ const plain: Budget = budgetOf(
   { lines: [own('stray', 'force-noise', 'drum', level(1e-17))], band: { low: 1e4, high: 1e7, place } },
 )
 
-const budgets = { homodyne: everything(), sideband: everything({ detector: 'sideband' }), displacement: plain }
+/** The same mode read by a detector of another kind. */
+const readBy = (kind: string, parameters: ComponentSpec['parameters']): Budget => ({
+  ...plain,
+  components: [
+    plain.components[0],
+    component('detector', kind, { modes: new Map([['drum', slot(1)]]), ...parameters }),
+  ],
+})
+
+const partly = { real: slot(0.3), imaginary: slot(-0.2) }
+const beam = { power: slot(1e-3), wavelength: slot(1e-6), efficiency: slot(0.7) }
+
+const arms: Budget = budgetOf(
+  [
+    component('arms', 'interferometer', {
+      arm_length: slot(4e3),
+      mirror_mass: slot(40),
+      arm_power: slot(1e5),
+      wavelength: slot(1e-6),
+      bandwidth: slot(600),
+      detuning: slot(0),
+      ports: new Map([
+        ['dark', { share: slot(0.9), squeezing: { level: slot(6), angle: slot(1.2) } }],
+        ['lost', { share: slot(0.1) }],
+      ]),
+    }),
+    component('detector', 'homodyne', { reads: 'arms.dark', efficiency: slot(0.9), angle: slot(1.4) }),
+  ],
+  { measurand: { quantity: 'strain', weights: null, at: null, place }, band: { low: 1e4, high: 1e7, place } },
+)
+
+const budgets = {
+  homodyne: everything(),
+  sideband: everything({ detector: 'sideband' }),
+  displacement: plain,
+  'linear detector': readBy('linear-detector', {
+    imprecision: level(1e-17),
+    back_action: level(1e-16),
+    correlation: partly,
+  }),
+  'transducer of displacement': readBy('transducer', {
+    per_displacement: slot(1e9),
+    voltage_noise: level(1e-9),
+    current_noise: level(1e-13),
+    correlation: partly,
+  }),
+  'transducer of velocity': readBy('transducer', {
+    per_velocity: slot(1e3),
+    voltage_noise: level(1e-9),
+    current_noise: level(1e-13),
+  }),
+  'optical lever': readBy('lever', { ...beam, spot: slot(2e-5), arm: slot(1e-4), lift: slot(1), detection: 'split' }),
+  'free-space interferometer': readBy('free-space-interferometer', {
+    ...beam,
+    reflections: slot(1),
+    incidence: slot(0.1),
+    arrangement: 'michelson',
+  }),
+  interferometer: arms,
+}
 
 const frequencies = [1e4, 99999, 1e5, 3e5, 999999.5, 1e6, 1.1e7]
 

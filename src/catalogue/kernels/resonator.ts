@@ -86,7 +86,11 @@ function bathShape(channel: Channel, mass: number, omega0: number): Shape {
 }
 
 /** Puts a mode with a restoring force into the network; shared by all kinds that are one. */
-export function assembleMode(instance: Instance<ModeValues>, net: Assembly, movedMass: number | null): void {
+export function assembleMode(
+  instance: Instance<ModeValues>,
+  net: Assembly,
+  { movedMass, strainLength }: { movedMass: number | null; strainLength?: number },
+): void {
   const { mass, frequency } = instance.values
   const omega0 = 2 * Math.PI * frequency
   const channels = lossChannels(instance)
@@ -103,6 +107,7 @@ export function assembleMode(instance: Instance<ModeValues>, net: Assembly, move
     gamma,
     phi,
     movedMass,
+    ...(strainLength !== undefined && { strainMoment: (mass * strainLength) / 2 }),
     thermalOccupancy:
       channels.reduce((n, c) => n + c.angle * occupancy(omega0, c.temperature), 0) /
       channels.reduce((n, c) => n + c.angle, 0),
@@ -131,6 +136,7 @@ export function assembleMode(instance: Instance<ModeValues>, net: Assembly, move
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
   stage: 'mechanical',
   assemble(instance, net) {
-    assembleMode(instance, net, instance.values.moved_mass ?? null)
+    const { moved_mass: movedMass = null, strain_length: strainLength } = instance.values
+    assembleMode(instance, net, { movedMass, ...(strainLength !== undefined && { strainLength }) })
   },
 }

@@ -6,6 +6,6 @@ import { assembleMode } from './resonator.js'
 export const kernel: Kernel<ValuesOf<typeof declaration.fields>> = {
   stage: 'mechanical',
   assemble(instance, net) {
-    assembleMode(instance, net, instance.values.mass)
+    assembleMode(instance, net, { movedMass: instance.values.mass })
   },
 }
