@@ -16,14 +16,19 @@ export interface Step {
   readonly lower: Matrix
 }
 
+/** (s, z) a time later: propagator·(s, z) + a Gaussian vector of this covariance. */
+interface Passage {
+  readonly propagator: Matrix
+  readonly covariance: Matrix
+}
+
 /**
- * The linear system over one sample, without error of discretisation: with z in the state, e^{A dt} and the covariance
+ * The linear system over a time, without error of discretisation: with z in the state, e^{A dt} and the covariance
  * ∫e^{At} B Bᵀ e^{Aᵀt} dt come from one exponential of a matrix twice the size [Van Loan, IEEE Trans. Autom. Control 23,
- * 395 (1978)]. The record is averaged over the sample, so that white noise needs no cut-off.
+ * 395 (1978)].
  */
-export function discretise({ A, B, C, D }: Langevin, dt: number): Step {
-  const states = A.length
-  const all = states + C.length
+function passage({ A, B, C, D }: Langevin, dt: number): Passage {
+  const all = A.length + C.length
   const drift = [...A, ...C].map(row => [...row, ...new Array<number>(C.length).fill(0)])
   const noise = [...B, ...D]
   const diffusion = product(noise, transpose(noise))
@@ -37,11 +42,33 @@ export function discretise({ A, B, C, D }: Langevin, dt: number): Step {
   }
   const power = exponential(double)
   const propagator = transpose(power.slice(all).map(row => row.slice(all)))
-  const covariance = product(
-    propagator,
-    power.slice(0, all).map(row => row.slice(all)),
-  )
+  const corner = power.slice(0, all).map(row => row.slice(all))
+  return { propagator, covariance: product(propagator, corner) }
+}
+
+/** The record is averaged over the sample, so that white noise needs no cut-off. */
+function sampled({ propagator, covariance }: Passage, { A, C }: Langevin, dt: number): Step {
+  const states = A.length
   const mean = (rows: Matrix): number[][] => rows.map((row, i) => row.map(value => (i < states ? value : value / dt)))
   const step = mean(propagator.map(row => row.slice(0, states)))
   return { states, records: C.length, step, lower: mean(triangle(covariance)) }
+}
+
+/** One sample of a system with constant coefficients, exact. */
+export function discretise(system: Langevin, dt: number): Step {
+  return sampled(passage(system, dt), system, dt)
+}
+
+/** One sample of a system whose coefficients repeat with the sample: exact steps through its parts, one after the other, all of equal length. */
+export function discretisePeriodic(parts: readonly Langevin[], period: number): Step {
+  const whole = parts
+    .map(part => passage(part, period / parts.length))
+    .reduce((before, { propagator, covariance }) => {
+      const carried = product(product(propagator, before.covariance), transpose(propagator))
+      return {
+        propagator: product(propagator, before.propagator),
+        covariance: carried.map((row, i) => row.map((value, j) => value + covariance[i][j])),
+      }
+    })
+  return sampled(whole, parts[0], period)
 }

@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest'
 import { component, budgetOf, slot } from '../engine/budget-of.js'
 import type { ModeOf, ReadoutOf } from '../engine/readout-of.js'
 import { boltzmannConstant, reducedPlanckConstant as hbar } from '../../src/physics/constants.js'
-import { agreement, compare, type Agreement } from './agreement.js'
+import { agreement, compare, within } from './agreement.js'
 
 /*
  * Road: simulation. The Langevin equations run in time with fixed seeds; the averaged spectrum of the record must be the engine's
@@ -101,9 +101,6 @@ const points: Record<string, ReadoutOf> = {
     record: 1.3,
   },
 }
-
-/** Four standard deviations of χ², five of the farthest of a thousand bins. */
-const within = ({ chiSquared, farthest }: Agreement): boolean => Math.abs(chiSquared) < 4 && farthest < 5
 
 describe('the Langevin equations in time give the spectrum of the record', () => {
   test.each(Object.entries(points).map(([name, readout], i) => ({ name, readout, seed: i + 1 })))(
