@@ -1,4 +1,4 @@
-import type { Assessment } from '../model/assessment.js'
+import type { Assessment, CavityState } from '../model/assessment.js'
 import type { Budget, Variant } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
 import type { Network } from '../model/network.js'
@@ -15,6 +15,7 @@ import { requirementResults } from './requirements.js'
 import { Changes } from './sensitivity.js'
 import { refuseUnstable } from './stability.js'
 import { cavityStates, modeStates } from './states.js'
+import { leastNonlinear } from './working-point.js'
 import { bandsOf, lineSpreadsAt, rootSharesAt, type Differentiated } from './uncertainty.js'
 
 const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz', strain: '1/√Hz' } as const
@@ -107,6 +108,16 @@ export function warningsOf({ budget, network }: Prepared): Problem[] {
   return warnings
 }
 
+/** Cavities whose resonance the motion pulls over a good part of its linewidth: the linear equations then say too little. */
+function nonlinear({ network }: Prepared, cavities: readonly CavityState[]): Problem[] {
+  return cavities.flatMap(({ id, linearity }, k): Problem[] => {
+    if (linearity === null || linearity <= leastNonlinear) return []
+    const size = Number(linearity.toPrecision(2))
+    const message = `the rms motion pulls \`${id}\` by ${size} of half its linewidth; above ${leastNonlinear} the readout is not linear, and this budget takes it as linear`
+    return [{ severity: 'warning', code: 'nonlinear', place: network.cavities[k].place, message }]
+  })
+}
+
 /** How much is wanted: a report has uncertainties at every point of the band; a glance only those of its headline numbers, and no curves of variants. */
 export type Depth = 'report' | 'glance'
 
@@ -127,6 +138,7 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   const spots = at(reference, best)
   const counted = depth === 'report' || budget.requirements.some(({ of }) => of.startsWith('occupancy.'))
   const modes = modeStates(budget, network, { poles, changes: counted ? changes : null })
+  const cavities = cavityStates(network, modes)
   return {
     budget,
     evaluation,
@@ -138,9 +150,9 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
     requirements: requirementResults(budget, { band: evaluation, modes, at }),
     variants: depth === 'report' ? budget.variants.map(assessVariant) : [],
     modes,
-    cavities: cavityStates(network),
+    cavities,
     unit: unitOf(budget),
-    warnings: warningsOf(prepared),
+    warnings: [...warningsOf(prepared), ...nonlinear(prepared, cavities)],
   }
 }
 

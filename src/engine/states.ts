@@ -5,6 +5,7 @@ import { finalOccupancy } from './occupancy.js'
 import { energyDecay, polesOfModes, type Pole } from './poles.js'
 import type { Changes } from './sensitivity.js'
 import { spreadOf } from './uncertainty.js'
+import { decoherenceRate, linearity, measurementRate } from './working-point.js'
 
 const twoPi = 2 * Math.PI
 
@@ -63,6 +64,7 @@ export function modeStates(budget: Budget, network: Network, wanted: Wanted): Mo
   const final = occupancies(budget, network, wanted)
   return network.modes.map((mode, k) => {
     const pole = ofModes.get(mode.id)
+    const measured = measurementRate(network, mode)
     const linewidth = mode.gamma / twoPi + mode.frequency * mode.phi
     return {
       id: mode.id,
@@ -75,17 +77,20 @@ export function modeStates(budget: Budget, network: Network, wanted: Wanted): Mo
       finalOccupancySpread: final[k].spread,
       zeroPoint: mode.zeroPoint,
       cooperativity: cooperativity(network, mode),
+      measurementRate: measured === null ? null : measured / twoPi,
+      decoherenceRate: decoherenceRate(mode) / twoPi,
     }
   })
 }
 
-export function cavityStates(network: Network): CavityState[] {
+export function cavityStates(network: Network, modes: readonly ModeState[]): CavityState[] {
   return network.cavities.map(({ id, kappa, quanta, pumpPower, detuning, ports }) => ({
     id,
     linewidth: kappa / twoPi,
     quanta,
     pumpPower,
     detuning: detuning / twoPi,
+    linearity: id === network.sensing.id ? linearity(network, modes) : null,
     ports: ports.map(port => ({ id: port.id, rate: port.rate / twoPi, occupancy: port.occupancy })),
   }))
 }

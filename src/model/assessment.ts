@@ -66,6 +66,10 @@ export interface ModeState {
   readonly zeroPoint: number | null
   /** 4g²/κΓ; null without a cavity. */
   readonly cooperativity: number | null
+  /** (c x_zp)²/(2 S_x^imp) over 2π in Hz, one-sided imprecision at the bare frequency; null where the readout does not sense the mode. */
+  readonly measurementRate: number | null
+  /** Γ(n_th + ½) over 2π in Hz. */
+  readonly decoherenceRate: number
 }
 
 export interface CavityState {
@@ -77,6 +81,8 @@ export interface CavityState {
   readonly pumpPower: number
   /** Δ/2π in Hz. */
   readonly detuning: number
+  /** Frequency pulled by the rms motion over half the linewidth, G x_rms/(κ/2); null where it is not known. */
+  readonly linearity: number | null
   /** Ports with their occupancies as they are at this pump. */
   readonly ports: readonly { readonly id: string; readonly rate: number; readonly occupancy: number }[]
 }

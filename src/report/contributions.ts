@@ -16,14 +16,6 @@ export interface ContributionRow {
   readonly signed: boolean
 }
 
-export interface LimitRow {
-  readonly id: string
-  readonly title: string
-  readonly value: string
-  readonly bounds: string
-  readonly about: string
-}
-
 /** Every line with its value and share at the reference frequency, largest first. */
 export function contributionRows(assessment: Assessment): readonly ContributionRow[] {
   const at = assessment.atReference
@@ -77,16 +69,4 @@ function entersText(line: LineCurve, at: Evaluation): string {
 export function claimedSources(line: LineCurve, at: Evaluation): readonly SourceCurve[] {
   const ids = new Set(line.of.map(claim => claim.split(' ')[0]))
   return at.sources.filter(source => ids.has(source.id))
-}
-
-/** Every limit at the reference frequency. */
-export function limitRows({ atReference, unit }: Assessment): readonly LimitRow[] {
-  const bounds = { added: 'the added noise', total: 'the total', none: 'nothing strictly; shown to compare' }
-  return atReference.limits.map(limit => ({
-    id: limit.id,
-    title: limit.title,
-    value: densityText(Math.sqrt(limit.psd[0]), unit),
-    bounds: bounds[limit.bounds],
-    about: limit.about,
-  }))
 }

@@ -1,6 +1,6 @@
 import type { Assessment, CavityState, ModeState } from '../model/assessment.js'
 import { occupancyText } from './headlines.js'
-import { frequencyText, numberText } from './numbers.js'
+import { frequencyText, numberText, percentText } from './numbers.js'
 import { formatQuantity } from '../quantity/format.js'
 
 /** One fact about a mode or a cavity at the working point. */
@@ -26,15 +26,29 @@ function modeFacts(mode: ModeState): readonly Fact[] {
   return [
     fact('Frequency, bare', frequencyText(mode.frequency, 7)),
     fact('Frequency, light on', frequencyText(mode.effectiveFrequency, 7)),
+    ...shifted('Optical spring', mode.effectiveFrequency - mode.frequency, mode.linewidth),
     fact('Linewidth, bare', frequencyText(mode.linewidth, 3)),
     fact('Linewidth, light on', frequencyText(mode.effectiveLinewidth, 3)),
+    ...shifted('Optical damping', mode.effectiveLinewidth - mode.linewidth, mode.linewidth),
     fact('Quanta of its bath', occupancyText(mode.thermalOccupancy)),
     ...optional('Final occupancy', mode.finalOccupancy, quanta =>
       occupancyText(quanta, mode.finalOccupancySpread?.combined),
     ),
+    ...optional('In the ground state', mode.finalOccupancy, quanta => percentText(1 / (1 + quanta))),
     ...optional('Zero-point motion', mode.zeroPoint, value => formatQuantity(value, 'm')),
     ...optional('Cooperativity 4g²/κΓ', mode.cooperativity, value => numberText(value, 3)),
+    ...optional('Cooperativity over n_th + ½', mode.cooperativity, value =>
+      numberText(value / (mode.thermalOccupancy + 0.5), 3),
+    ),
+    ...optional('Measurement rate Γ_meas/2π', mode.measurementRate, value => frequencyText(value, 3)),
+    fact('Decoherence rate Γ(n_th + ½)/2π', frequencyText(mode.decoherenceRate, 3)),
   ]
+}
+
+/** A shift by the light, signed; left out where it is below a millionth of the bare linewidth. */
+function shifted(label: string, hertz: number, linewidth: number): readonly Fact[] {
+  if (Math.abs(hertz) <= 1e-6 * linewidth) return []
+  return [fact(label, `${hertz < 0 ? '−' : '+'}${frequencyText(Math.abs(hertz), 3)}`)]
 }
 
 export function cavityBlocks({ cavities }: Assessment): readonly StateBlock[] {
@@ -47,6 +61,7 @@ function cavityFacts(cavity: CavityState): readonly Fact[] {
     fact('Quanta of the pump', numberText(cavity.quanta, 3)),
     fact('Power at the port', formatQuantity(cavity.pumpPower, 'W')),
     fact('Detuning Δ/2π', frequencyText(cavity.detuning, 4)),
+    ...(cavity.linearity === null ? [] : [fact('Rms motion times G over κ/2', numberText(cavity.linearity, 2))]),
     ...cavity.ports.map(port =>
       fact(
         `Port ${port.id}`,

@@ -326,6 +326,8 @@ const mode: ModeState = {
   finalOccupancySpread: spread,
   zeroPoint: 1.475e-15,
   cooperativity: 2500,
+  measurementRate: 129,
+  decoherenceRate: 3560,
 }
 
 const cavity: CavityState = {
@@ -334,6 +336,7 @@ const cavity: CavityState = {
   quanta: 1.93e7,
   pumpPower: 3e-6,
   detuning: 0,
+  linearity: 0.0012,
   ports: [
     { id: 'front', rate: 600e3, occupancy: 0 },
     { id: 'back', rate: 90e3, occupancy: 0 },
