@@ -19,14 +19,18 @@ function anchorFor(network: Network, omega: Complex): number {
 }
 
 /**
- * Newton's method on det M(ω) = 0: ω ← ω − 1/tr(M⁻¹M′). It converges quadratically, so that a step of 1e-8 is the last one: at the root
- * itself M is singular to rounding and steps are noise. A guess on the imaginary axis, where the continued structural loss jumps, is
- * kept as it is.
+ * Newton's method on det M(ω) = 0: ω ← ω − 1/tr(M⁻¹M′). It converges quadratically, so that a step of 1e-8 is the last one. At the root
+ * itself M is singular to rounding and steps are noise, which happens where the guess is already as good as can be: then the smallest step
+ * decides. A guess on the imaginary axis, where the continued structural loss jumps, is kept as it is.
  */
 function polish(network: Network, guess: Complex): Pole {
   const anchor = anchorFor(network, guess)
   let shift = subtract(guess, complex(2 * Math.PI * anchor))
-  if (Math.abs(guess.re) < 1e-9 * magnitude(guess)) return { at: { anchor, shift }, omega: guess }
+  if (Math.abs(guess.re) < 1e-7 * magnitude(guess)) {
+    const omega = complex(0, guess.im)
+    return { at: { anchor: 0, shift: omega }, omega }
+  }
+  let best = { shift, size: Infinity }
   for (let i = 0; i < 50; i++) {
     const { matrix, slope } = denseAt(network, { anchor, shift })
     const product = solveDense(matrix, slope)
@@ -34,8 +38,10 @@ function polish(network: Network, guess: Complex): Pole {
     const size = magnitude(step)
     if (!Number.isFinite(size)) break
     shift = subtract(shift, step)
+    if (size < best.size) best = { shift, size }
     if (size <= 1e-8 * magnitude(shift)) break
   }
+  shift = best.shift
   const at = { anchor, shift }
   return { at, omega: omegaOf(at) }
 }

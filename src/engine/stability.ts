@@ -1,6 +1,7 @@
 import type { Network } from '../model/network.js'
 import { Refusal } from '../model/problem.js'
 import { energyDecay, type Pole } from './poles.js'
+import { fastestRate } from './state-space.js'
 
 const plain = (hertz: number): string => `${Number(hertz.toPrecision(4))} Hz`
 
@@ -13,7 +14,10 @@ export function refuseUnstable(network: Network, poles: readonly Pole[]): void {
   if (point === undefined) return
   const worst = poles.reduce((a, b) => (energyDecay(b) < energyDecay(a) ? b : a))
   const growth = -energyDecay(worst)
-  if (growth <= 1e-13 * Math.hypot(worst.omega.re, worst.omega.im)) return
+  const size = Math.hypot(worst.omega.re, worst.omega.im)
+  if (growth <= 1e-13 * size) return
+  // A free mass has a double pole at zero, which comes out as far from it as the root of rounding.
+  if (network.modes.some(mode => mode.frequency === 0) && size <= 1e-7 * fastestRate(network)) return
   const frequency = Math.abs(worst.omega.re) / (2 * Math.PI)
   const how =
     frequency > 0

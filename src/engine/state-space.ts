@@ -1,9 +1,11 @@
-import { EigenvalueDecomposition, Matrix } from 'ml-matrix'
 import type { Complex, Network } from '../model/network.js'
-import { add, complex, multiply, scale } from '../physics/complex.js'
+import { add, complex, magnitude, multiply, scale } from '../physics/complex.js'
 import { reducedPlanckConstant } from '../physics/constants.js'
+import { eigenvalues } from '../physics/eigenvalues.js'
+import { isolate } from '../physics/isolate.js'
+import type { Dense } from '../physics/solve-dense.js'
 
-/** Amplitudes of a state in terms of the unknowns: a mode has displacement and velocity, a field its two quadratures. */
+/** Amplitudes of a state in terms of the unknowns: a mode has displacement and velocity, a field its amplitude. */
 interface State {
   readonly unknown: number
   readonly derivative: boolean
@@ -17,10 +19,10 @@ function scalesOf(network: Network, unknown: number, fastest: number): { length:
 }
 
 /**
- * Drift matrix of dz/dt = A z over displacements, velocities and quadratures, in units of `fastest`. Structural loss stands in as
+ * Drift matrix of dz/dt = A z over displacements, velocities and fields, in units of `fastest`. Structural loss stands in as
  * viscous damping Ωφ: good enough for a first guess at its poles.
  */
-function driftMatrix(network: Network, fastest: number): Matrix {
+function driftMatrix(network: Network, fastest: number): Dense {
   const states: State[] = network.unknowns.flatMap(({ nature }, unknown) =>
     nature === 'mechanical'
       ? [
@@ -29,7 +31,6 @@ function driftMatrix(network: Network, fastest: number): Matrix {
         ]
       : [{ unknown, derivative: false }],
   )
-  const size = states.length
   const a: Complex[][] = states.map(() => states.map(() => complex(0)))
   const indexOf = (unknown: number, derivative: boolean): number =>
     states.findIndex(s => s.unknown === unknown && s.derivative === derivative)
@@ -54,11 +55,11 @@ function driftMatrix(network: Network, fastest: number): Matrix {
       a[i][j] = add(a[i][j], scale(entry.value, -scaleOf(column) / unit))
     }
   }
-  return realDrift(network, states, a, size, fastest)
+  return realDrift(network, states, a, fastest)
 }
 
 /** Changes fields (a, a†) to quadratures, in which A is real. */
-function realDrift(network: Network, states: readonly State[], a: Complex[][], size: number, fastest: number): Matrix {
+function realDrift(network: Network, states: readonly State[], a: Complex[][], fastest: number): Dense {
   const root = Math.SQRT1_2
   const u: Complex[][] = states.map((_, i) => states.map((__, j) => complex(i === j ? 1 : 0)))
   const inverse = u.map(row => [...row])
@@ -75,16 +76,27 @@ function realDrift(network: Network, states: readonly State[], a: Complex[][], s
   const product = (p: Complex[][], q: Complex[][]): Complex[][] =>
     p.map(row => states.map((_, j) => row.reduce((sum, value, k) => add(sum, multiply(value, q[k][j])), complex(0))))
   const drift = product(inverse, product(a, u))
-  return new Matrix(Array.from({ length: size }, (_, i) => drift[i].map(value => value.re / fastest)))
+  // What is left of terms that cancel in the change of basis would hide that a row or a column stands alone.
+  const sizes = product(modulusOf(inverse), product(modulusOf(a), modulusOf(u)))
+  return drift.map((row, i) =>
+    row.map((value, j) => complex(Math.abs(value.re) < 1e-15 * sizes[i][j].re ? 0 : value.re / fastest)),
+  )
 }
 
-/** First guesses of all poles as complex angular frequencies, e^{−iωt}: Im ω < 0 decays. Good to rounding of the fastest rate. */
-export function poleGuesses(network: Network): Complex[] {
+const modulusOf = (matrix: Complex[][]): Complex[][] => matrix.map(row => row.map(value => complex(magnitude(value))))
+
+/** The largest rate of a network in rad/s. */
+export function fastestRate(network: Network): number {
   const rates = network.entries.map(({ entry }) => {
     if (entry.form === 'decay') return Math.hypot(entry.half, entry.detuning)
     return entry.form === 'oscillator' ? 2 * Math.PI * entry.frequency : 0
   })
-  const fastest = Math.max(...rates, 1e-3)
-  const { realEigenvalues, imaginaryEigenvalues } = new EigenvalueDecomposition(driftMatrix(network, fastest))
-  return realEigenvalues.map((real, i) => complex(-imaginaryEigenvalues[i] * fastest, real * fastest))
+  return Math.max(...rates, 1e-3)
+}
+
+/** First guesses of all poles as complex angular frequencies, e^{−iωt}: Im ω < 0 decays. Good to rounding of the fastest rate. */
+export function poleGuesses(network: Network): Complex[] {
+  const fastest = fastestRate(network)
+  const { values, rest } = isolate(driftMatrix(network, fastest))
+  return [...values, ...(rest.length === 0 ? [] : eigenvalues(rest))].map(s => complex(-s.im * fastest, s.re * fastest))
 }

@@ -108,3 +108,19 @@ describe('poles of modes', () => {
     expect(polesOfModes(network, polesOf(network)).size).toBe(0)
   })
 })
+
+// Two equal modes among four in a cavity far wider than their frequencies: an iteration without bound stood still on this matrix.
+test('equal modes in a wide cavity', () => {
+  const mode = { mass: 4e-9, frequency: 1.409e6, quality: 8e7 }
+  const modes = {
+    one: mode,
+    other: mode,
+    third: { ...mode, frequency: 1.93e6 },
+    fourth: { ...mode, frequency: 2.49e6 },
+  }
+  const readout = { modes, coupling: 2.4e9, ports: { front: { rate: 1.97e9 } }, quanta: 1, detuning: 0.98e9 }
+  const poles = polesOf(networkOf(readout))
+  expect(poles.length).toBe(10)
+  const found = poles.map(({ omega }) => omega.re / turn).filter(f => f > 0 && f < 1e8)
+  expect(found.toSorted((a, b) => a - b).map(f => Math.round(f / 1e3))).toEqual([1409, 1409, 1930, 2490])
+})
