@@ -1,4 +1,4 @@
-import type { Assessment, CavityState } from '../model/assessment.js'
+import type { Assessment, ModeState } from '../model/assessment.js'
 import type { Budget, Variant } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
 import type { Network } from '../model/network.js'
@@ -10,12 +10,13 @@ import { Evaluator } from './evaluate.js'
 import { firstPoints, pointAt, refine } from './grid.js'
 import { bestIndex, headlinesOf } from './headlines.js'
 import { polesOf, type Pole } from './poles.js'
+import { pumpRange } from './power-sweep.js'
 import { refuseBeyondQuantum } from './quantum-bound.js'
 import { requirementResults } from './requirements.js'
 import { Changes } from './sensitivity.js'
 import { refuseUnstable } from './stability.js'
 import { cavityStates, modeStates } from './states.js'
-import { leastNonlinear } from './working-point.js'
+import { leastNonlinear, linearity } from './working-point.js'
 import { bandsOf, lineSpreadsAt, rootSharesAt, type Differentiated } from './uncertainty.js'
 
 const units = { force: 'N/√Hz', acceleration: 'm/s²/√Hz', displacement: 'm/√Hz', strain: '1/√Hz' } as const
@@ -108,14 +109,17 @@ export function warningsOf({ budget, network }: Prepared): Problem[] {
   return warnings
 }
 
-/** Cavities whose resonance the motion pulls over a good part of its linewidth: the linear equations then say too little. */
-function nonlinear({ network }: Prepared, cavities: readonly CavityState[]): Problem[] {
-  return cavities.flatMap(({ id, linearity }, k): Problem[] => {
-    if (linearity === null || linearity <= leastNonlinear) return []
-    const size = Number(linearity.toPrecision(2))
-    const message = `the rms motion pulls \`${id}\` by ${size} of half its linewidth; above ${leastNonlinear} the readout is not linear, and this budget takes it as linear`
-    return [{ severity: 'warning', code: 'nonlinear', place: network.cavities[k].place, message }]
-  })
+/**
+ * The motion pulls the resonance over a good part of its linewidth: the linear equations then say too little. Motion slower than the band is
+ * left out, since a lock follows it.
+ */
+function nonlinear({ budget, network }: Prepared, modes: readonly ModeState[]): Problem[] {
+  const cavity = network.cavities.find(({ id }) => id === network.sensing.id)
+  const pulled = linearity(network, modes, budget.band.low)
+  if (cavity === undefined || pulled === null || pulled <= leastNonlinear) return []
+  const size = Number(pulled.toPrecision(2))
+  const message = `the rms motion pulls \`${cavity.id}\` by ${size} of half its linewidth; above ${leastNonlinear} the readout is not linear, and this budget takes it as linear`
+  return [{ severity: 'warning', code: 'nonlinear', place: cavity.place, message }]
 }
 
 /** How much is wanted: a report has uncertainties at every point of the band; a glance only those of its headline numbers, and no curves of variants. */
@@ -131,28 +135,28 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   const changes = new Changes(budget)
   const at = (...frequencies: number[]): Differentiated => {
     const here = evaluateList(prepared, frequencies)
-    return { evaluation: here, slopes: changes.sensitivities(here) }
+    return { evaluation: here, slopes: changes.sensitivities(here, 'spot') }
   }
   const best = evaluation.points.frequency[bestIndex(evaluation)]
   const reference = budget.reference ?? best
   const spots = at(reference, best)
   const counted = depth === 'report' || budget.requirements.some(({ of }) => of.startsWith('occupancy.'))
   const modes = modeStates(budget, network, { poles, changes: counted ? changes : null })
-  const cavities = cavityStates(network, modes)
   return {
     budget,
     evaluation,
     atReference: evaluateList(prepared, [reference]),
     headlines: headlinesOf(budget, evaluation, spots),
-    bands: depth === 'report' ? bandsOf(budget, evaluation, changes.sensitivities(evaluation)) : null,
+    bands: depth === 'report' ? bandsOf(budget, evaluation, changes.sensitivities(evaluation, 'band')) : null,
     rootShares: rootSharesAt(budget, spots, 0),
     lineSpreads: lineSpreadsAt(budget, spots, 0),
     requirements: requirementResults(budget, { band: evaluation, modes, at }),
     variants: depth === 'report' ? budget.variants.map(assessVariant) : [],
     modes,
-    cavities,
+    cavities: cavityStates(network, modes),
+    pumpRange: depth === 'report' ? pumpRange(budget, reference) : null,
     unit: unitOf(budget),
-    warnings: [...warningsOf(prepared), ...nonlinear(prepared, cavities)],
+    warnings: [...warningsOf(prepared), ...nonlinear(prepared, modes)],
   }
 }
 

@@ -41,15 +41,17 @@ export const decoherenceRate = ({ gamma, phi, frequency, thermalOccupancy }: Mod
 
 /**
  * G x_rms/(κ/2) of the readout's cavity, x_rms² = Σ c²x_zp²(2n_f + 1) over the modes that it senses, as if position and momentum had the
- * same share; null without a cavity, or where an occupancy is not known.
+ * same share; null without a cavity, or where an occupancy is not known. Modes slower than `slowest` in Hz are left out.
  */
 export function linearity(
   network: Network,
   states: readonly Pick<ModeState, 'id' | 'finalOccupancy'>[],
+  slowest = 0,
 ): number | null {
   const cavity = network.cavities.find(({ id }) => id === network.sensing.id)
   if (cavity === undefined) return null
-  const squares = network.sensing.weights.map(({ mode, weight }) => {
+  const sensed = network.sensing.weights.filter(({ mode }) => mode.frequency >= slowest)
+  const squares = sensed.map(({ mode, weight }) => {
     const final = states.find(({ id }) => id === mode.id)?.finalOccupancy ?? null
     return final === null || mode.zeroPoint === null ? null : (weight * mode.zeroPoint) ** 2 * (2 * final + 1)
   })

@@ -116,6 +116,25 @@ export interface RequirementResult {
   readonly met: boolean
 }
 
+/** The pump at which the total at a frequency is least. */
+export interface BestPump {
+  /** Times the present pump. */
+  readonly factor: number
+  /** Amplitude density of the total there. */
+  readonly asd: number
+}
+
+/** What a weaker or stronger pump would do at one frequency, by factors of the present pump. */
+export interface PumpRange {
+  /** In Hz. */
+  readonly frequency: number
+  /** Null where the least total lies at an end of the range looked at. */
+  readonly best: BestPump | null
+  /** The last stable pump; null where it is stable up to the farthest. */
+  readonly stableUpTo: number | null
+  readonly farthest: number
+}
+
 /** All that a report says about one budget. */
 export interface Assessment {
   readonly budget: Budget
@@ -135,6 +154,8 @@ export interface Assessment {
   readonly variants: readonly { readonly id: string; readonly title: string; readonly assessment: Assessment }[]
   readonly modes: readonly ModeState[]
   readonly cavities: readonly CavityState[]
+  /** Null without a cavity, or where only a glance was asked for. */
+  readonly pumpRange: PumpRange | null
   /** Unit of the measurand's amplitude density: `N/√Hz`. */
   readonly unit: string
   readonly warnings: readonly Problem[]

@@ -1,6 +1,6 @@
 import type { Assessment, CavityState, ModeState } from '../model/assessment.js'
 import { occupancyText } from './headlines.js'
-import { frequencyText, numberText, percentText } from './numbers.js'
+import { densityText, frequencyText, numberText, percentText } from './numbers.js'
 import { formatQuantity } from '../quantity/format.js'
 
 /** One fact about a mode or a cavity at the working point. */
@@ -51,8 +51,27 @@ function shifted(label: string, hertz: number, linewidth: number): readonly Fact
   return [fact(label, `${hertz < 0 ? '−' : '+'}${frequencyText(Math.abs(hertz), 3)}`)]
 }
 
-export function cavityBlocks({ cavities }: Assessment): readonly StateBlock[] {
-  return cavities.map(cavity => ({ id: cavity.id, facts: cavityFacts(cavity) }))
+export function cavityBlocks(assessment: Assessment): readonly StateBlock[] {
+  const { cavities } = assessment
+  return cavities.map(cavity => ({
+    id: cavity.id,
+    facts: [...cavityFacts(cavity), ...(cavities.length === 1 ? pumpFacts(assessment) : [])],
+  }))
+}
+
+/** The best pump and the end of stability, as factors of the present one. */
+function pumpFacts({ pumpRange, unit }: Assessment): readonly Fact[] {
+  if (pumpRange === null) return []
+  const { best, frequency, stableUpTo, farthest } = pumpRange
+  const least =
+    best === null
+      ? 'outside of the range looked at'
+      : `${numberText(best.factor, 2)} times the present: ${densityText(best.asd, unit)}`
+  const edge =
+    stableUpTo === null
+      ? `up to ${numberText(farthest, 2)} times the present at least`
+      : `up to ${numberText(stableUpTo, 3)} times the present`
+  return [fact(`Best pump at ${frequencyText(frequency)}`, least), fact('Stable with a pump', edge)]
 }
 
 function cavityFacts(cavity: CavityState): readonly Fact[] {
@@ -61,7 +80,9 @@ function cavityFacts(cavity: CavityState): readonly Fact[] {
     fact('Quanta of the pump', numberText(cavity.quanta, 3)),
     fact('Power at the port', formatQuantity(cavity.pumpPower, 'W')),
     fact('Detuning Δ/2π', frequencyText(cavity.detuning, 4)),
-    ...(cavity.linearity === null ? [] : [fact('Rms motion times G over κ/2', numberText(cavity.linearity, 2))]),
+    ...(cavity.linearity === null
+      ? []
+      : [fact('Rms motion times G over κ/2, without a lock', numberText(cavity.linearity, 2))]),
     ...cavity.ports.map(port =>
       fact(
         `Port ${port.id}`,

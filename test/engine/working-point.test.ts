@@ -70,4 +70,11 @@ describe('linearity', () => {
     expect(cavities[0].linearity).toBeGreaterThan(0.1)
     expect(warnings.find(({ code }) => code === 'nonlinear')?.message).toContain('the readout is not linear')
   })
+
+  test('of motion slower than the band, which a lock follows, is told without a warning', () => {
+    const slow = { ...mode, temperature: 300, frequency: 8e5 }
+    const { cavities, warnings } = stateOf({ modes: { drum: slow }, coupling: 1e19, quanta: 1 })
+    expect(cavities[0].linearity).toBeGreaterThan(0.1)
+    expect(warnings.map(({ code }) => code)).not.toContain('nonlinear')
+  })
 })

@@ -367,6 +367,7 @@ export function fixtureAssessment(sensor = 'fixture'): Assessment {
     },
     modes: [mode],
     cavities: [cavity],
+    pumpRange: null,
     unit: 'N/√Hz',
     warnings: [
       { severity: 'warning', code: 'fixture', place: place(31), message: 'the detuning is left out; 0 Hz is taken' },
