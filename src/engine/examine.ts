@@ -47,7 +47,7 @@ function groundsOf(budget: Budget, prepared: ReturnType<typeof prepare>): Ground
     modes: counted ? modeStates(budget, prepared.network, { poles: prepared.poles, changes }) : [],
     at: (frequency): Differentiated => {
       const evaluation = evaluateList(prepared, [frequency])
-      return { evaluation, slopes: changes.sensitivities(evaluation) }
+      return { evaluation, slopes: changes.sensitivities(evaluation, 'spot') }
     },
   }
 }

@@ -7,6 +7,7 @@ import { Arena } from './arena.js'
 import { assemble } from './assemble.js'
 import { rootValues } from './bind.js'
 import { Evaluator } from './evaluate.js'
+import { Following, type Reach } from './following.js'
 import { polesOf, type Pole } from './poles.js'
 
 /** Derivatives of power densities (unit²/Hz) by one root, in the order of the evaluation's curves. */
@@ -75,32 +76,45 @@ export class Changes {
     })
   }
 
-  /** Derivatives of all curves of an evaluation by each uncertain root. */
-  sensitivities(evaluation: Evaluation): Sensitivity[] {
+  /**
+   * Derivatives of all curves of an evaluation by each uncertain root. A frequency stands still, except next to a resonance whose place is
+   * uncertain by more than its width: see `Following`.
+   */
+  sensitivities(evaluation: Evaluation, reach: Reach): Sensitivity[] {
     const limits = evaluation.limits.length > 0
     const lines = evaluation.lines.length
-    return this.list.map(({ root, step, up, down }) => {
-      const high = this.#curves(up, evaluation.points, { limits, arena: this.#arenas[0] })
-      const low = this.#curves(down, evaluation.points, { limits, arena: this.#arenas[1] })
+    const { points } = evaluation
+    const places = this.list.map(({ up, down }) => [this.#places(up, points), this.#places(down, points)] as const)
+    const following = new Following(points, this.#anchorSpreads(points, places), reach)
+    return this.list.map(({ root, step, up, down }, k) => {
+      const high = this.#curves(up, following.moved(places[k][0]), { limits, arena: this.#arenas[0] })
+      const low = this.#curves(down, following.moved(places[k][1]), { limits, arena: this.#arenas[1] })
       const [total, added, ...rest] = high.map((curve, c) => curve.map((value, i) => (value - low[c][i]) / (2 * step)))
       return { root, total, added, lines: rest.slice(0, lines), limits: rest.slice(lines) }
     })
   }
 
-  /**
-   * Curves of a changed network, on points that go along with their modes: a point is an offset from its anchor, and the anchor is where
-   * the changed parameters put it. So the band of a sharp resonance is that of its depth, not of its place.
-   */
+  /** Where each anchor is in a changed network, in Hz. */
+  #places(changed: Changed, { anchors }: Points): number[] {
+    const moving = anchors.some(anchor => anchor.nature === 'pole')
+    return followAnchors(anchors, changed.network, moving ? changed.poles : []).map(({ frequency }) => frequency)
+  }
+
+  /** Standard uncertainty of each anchor's frequency, in Hz; correlations are left out, since only its size matters here. */
+  #anchorSpreads({ anchors }: Points, places: readonly (readonly [number[], number[]])[]): number[] {
+    return anchors.map((_, a) =>
+      Math.hypot(
+        ...this.list.map(({ root, step }, k) => {
+          const slope = (places[k][0][a] - places[k][1][a]) / (2 * step)
+          return slope * this.budget.roots[root].uncertainty
+        }),
+      ),
+    )
+  }
+
   #curves(changed: Changed, points: Points, { limits, arena }: { limits: boolean; arena: Arena }): Float64Array[] {
-    const moving = points.anchors.some(anchor => anchor.nature === 'pole')
-    const anchors = followAnchors(points.anchors, changed.network, moving ? changed.poles : [])
-    const frequency = points.frequency.map((f, i) => {
-      const anchor = points.anchor[i]
-      return anchor < 0 ? f : anchors[anchor].frequency + points.offset[i]
-    })
-    const moved = { anchors, frequency, anchor: points.anchor, offset: points.offset }
     const evaluator = new Evaluator(this.budget, changed.network, { sources: false, limits })
-    const { total, added, lines, limits: bounds } = evaluator.at(moved, arena)
+    const { total, added, lines, limits: bounds } = evaluator.at(points, arena)
     return [total, added, ...lines.map(line => line.psd), ...bounds.map(limit => limit.psd)]
   }
 }

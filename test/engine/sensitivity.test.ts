@@ -116,7 +116,7 @@ describe('derivatives of the total by its roots', () => {
     budget,
     offsets.map(offset => 1e6 + offset),
   )
-  const slopes = new Changes(budget).sensitivities(evaluation)
+  const slopes = new Changes(budget).sensitivities(evaluation, 'band')
 
   // Road: closed form, differentiated by hand. Central differences with a step of 3e-5 leave about 1e-9.
   test.each([...offsets.entries()])('point %d, %d Hz from the mode, to 1e-7', i => {
@@ -196,5 +196,48 @@ describe('an assessed budget', () => {
     const glance = assess(budget, 'glance')
     expect(glance.bands).toBeNull()
     expect(glance.headlines).toEqual(assess(budget).headlines)
+  })
+})
+
+describe('what stands still and what goes along', () => {
+  /** One mode at 1.006(2) MHz, read with a white displacement noise; far below its frequency √S ∝ Ω² − ω². */
+  const far = (): Budget => {
+    const roots = [root('frequency', 1.006e6, 2e3)]
+    return budgetOf(
+      [
+        component('mode', 'resonator', {
+          mass: { constant: 1e-12 },
+          frequency: { root: 0 },
+          quality: { constant: 1e8 },
+          law: 'viscous',
+          temperature: { constant: 1e-3 },
+        }),
+        component('detector', 'displacement', {
+          modes: new Map([['mode', { constant: 1 }]]),
+          noise: {
+            density: 'level',
+            level: { constant: 1e-15 },
+            power: false,
+            exponent: { constant: 0 },
+            reference: null,
+          },
+        }),
+      ],
+      { roots, band: { low: 0.9e6, high: 1.1e6, place }, reference: 1e6 },
+    )
+  }
+
+  // Road: by hand. ∂ ln √S/∂Ω = 2Ω/(Ω² − ω²), so u(√S)/√S = 2·1.006·0.002/(1.006² − 1) = 0.3343.
+  test('a named frequency beside the resonance stands still', () => {
+    const { reference } = assess(far(), 'glance').headlines
+    expect(reference!.asdSpread.combined / reference!.asd).toBeCloseTo((2 * 1.006 * 0.002) / (1.006 ** 2 - 1), 4)
+  })
+
+  test('the band does not jump, and stays below the total', () => {
+    const { evaluation, bands } = assess(far())
+    const relative = bands!.combined.map((u, i) => u / Math.sqrt(evaluation.total[i]))
+    const steps = [...relative.keys()].slice(1).map(i => Math.abs(relative[i] - relative[i - 1]))
+    expect(Math.max(...relative)).toBeLessThan(1)
+    expect(Math.max(...steps)).toBeLessThan(0.05)
   })
 })
