@@ -93,8 +93,6 @@ export interface ImpliedNoise {
   readonly channel: string
   /** A map field: one channel for each of its names. */
   readonly each?: string
-  /** Paths of fields of which one must be given for the noise to exist. */
-  readonly where?: readonly string[]
   /** Whether a line may claim `imprecision`, `back-action` or `heating` of it alone. */
   readonly parts: boolean
 }

@@ -34,7 +34,6 @@ export const references = {
     where: 'J. Opt. B: Quantum Semiclass. Opt. 6, 495',
     year: 2004,
   },
-  'ieee-1139': { authors: 'IEEE', where: 'IEEE Std 1139, definitions of phase and frequency noise', year: 2008 },
   'caves-1982': { authors: 'C. M. Caves', where: 'Phys. Rev. D 26, 1817', year: 1982 },
   'friis-1944': { authors: 'H. T. Friis', where: 'Proc. IRE 32, 419', year: 1944 },
   'braginsky-khalili-1992': {

@@ -1,14 +1,15 @@
-import type { Io } from './io.js'
+import { exitCodes, type Io } from './io.js'
 
 /**
  * The process's own streams. Whoever reads the output may stop early (`| head -1`): the write then fails with EPIPE,
- * which is no error of this program, so it ends at once and quietly.
+ * which is no error of this program, so it ends at once and quietly. A full disk is told in a line.
  */
 export function terminal(): Io {
   for (const stream of [process.stdout, process.stderr]) {
     stream.on('error', (error: NodeJS.ErrnoException) => {
       if (error.code === 'EPIPE') process.exit(process.exitCode ?? 0)
-      throw error
+      process.stderr.write(`floorbook: the output could not be written: ${error.message}\n`)
+      process.exit(exitCodes.fault)
     })
   }
   return {

@@ -55,6 +55,14 @@ export function evaluateBand({ budget, network, poles }: Prepared): Evaluation {
   return new Evaluator(budget, network, everything).at(refine(curves, start))
 }
 
+/** Refuses a budget whose numbers leave double precision: nothing that is not a number may reach a page. */
+export function refuseBeyondNumbers(budget: Budget, { total, points }: Evaluation): void {
+  const bad = total.findIndex(value => !Number.isFinite(value))
+  if (bad < 0) return
+  const message = `at ${points.frequency[bad]} Hz the noise is no finite number: some value of this budget is far too large or too small for what it is; look at masses, rates and densities`
+  throw new Refusal([{ severity: 'error', code: 'no-number', place: budget.band.place, message }])
+}
+
 /** All curves exactly at given frequencies in Hz, in the order given. */
 export function evaluateAtFrequencies(budget: Budget, frequencies: ArrayLike<number>): Evaluation {
   return evaluateList(prepare(budget), frequencies)
@@ -131,6 +139,7 @@ export function assess(budget: Budget, depth: Depth = 'report'): Assessment {
   if (depth === 'glance') tryVariants(budget)
   const { network, poles } = prepared
   const evaluation = evaluateBand(prepared)
+  refuseBeyondNumbers(budget, evaluation)
   if (actsBack(network)) checkLimits(evaluation)
   const changes = new Changes(budget)
   const at = (...frequencies: number[]): Differentiated => {

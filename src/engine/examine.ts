@@ -1,7 +1,7 @@
 import type { RequirementResult } from '../model/assessment.js'
 import type { Budget } from '../model/budget.js'
 import type { Problem } from '../model/problem.js'
-import { evaluateBand, evaluateList, prepare, tryVariants, unitOf, warningsOf } from './assess.js'
+import { evaluateBand, evaluateList, prepare, refuseBeyondNumbers, tryVariants, unitOf, warningsOf } from './assess.js'
 import { requirementResults, type Grounds } from './requirements.js'
 import { Changes } from './sensitivity.js'
 import { modeStates } from './states.js'
@@ -24,6 +24,7 @@ export function examine(budget: Budget): Examination {
   const prepared = prepare(budget)
   tryVariants(budget)
   const { reference } = budget
+  refuseBeyondNumbers(budget, evaluateList(prepared, [reference ?? budget.band.low]))
   return {
     reference:
       reference === null

@@ -104,8 +104,8 @@ function within(points: Points, i: number, part: number): Point {
 
 /** All curves that must be straight between points. */
 function followed(evaluation: Evaluation): Float64Array[] {
-  const { total, lines, limits } = evaluation
-  return [total, ...lines.map(line => line.psd), ...limits.map(limit => limit.psd)]
+  const { total, added, lines, limits } = evaluation
+  return [total, added, ...lines.map(line => line.psd), ...limits.map(limit => limit.psd)]
 }
 
 /** log(f_probe/f_left)/log(f_right/f_left) from hertz differences, exact next to a resonance. */

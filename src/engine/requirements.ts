@@ -1,6 +1,7 @@
 import type { ModeState, RequirementResult, Spread } from '../model/assessment.js'
 import type { Budget, Requirement } from '../model/budget.js'
 import type { Evaluation } from '../model/evaluation.js'
+import { Refusal, type Problem } from '../model/problem.js'
 import { totalMargin } from './headlines.js'
 import { spreadAt, type Differentiated } from './uncertainty.js'
 
@@ -64,19 +65,26 @@ function held(budget: Budget, requirement: Requirement, grounds: Grounds): Held 
   return worst === null ? null : heldAt(budget, grounds.at(worst), of, 0)
 }
 
+/** What is wanted of a budget that has no such number. */
+function withoutNumber({ id, of, place }: Requirement): Problem {
+  const why = of.startsWith('occupancy.')
+    ? 'an occupancy needs a cavity, and a frequency of every mode'
+    : 'this readout has no such limit'
+  const message = `the requirement \`${id}\` asks for \`${of}\`, which this budget does not have: ${why}; ask for \`total\` or a line`
+  return { severity: 'error', code: 'requirement', place, message }
+}
+
 /**
- * Holds each requirement against its number. The number itself decides, not its uncertainty, which stands beside it. One that has no
- * number here (a margin where there is no limit) counts as missed, with NaN.
+ * Holds each requirement against its number. The number itself decides, not its uncertainty, which stands beside it. Throws a `Refusal` for
+ * those that ask for a number that the budget does not have.
  */
 export function requirementResults(budget: Budget, grounds: Grounds): RequirementResult[] {
-  return budget.requirements.map(requirement => {
-    const { title, value, spread, frequency } = held(budget, requirement, grounds) ?? {
-      title: null,
-      value: NaN,
-      spread: { statistical: NaN, systematic: NaN, combined: NaN },
-      frequency: null,
-    }
-    const met = requirement.bound === 'below' ? value <= requirement.value : value >= requirement.value
-    return { requirement, title, value, spread, frequency, met }
+  const all = budget.requirements.map(requirement => ({ requirement, found: held(budget, requirement, grounds) }))
+  const missing = all.filter(({ found }) => found === null)
+  if (missing.length > 0) throw new Refusal(missing.map(({ requirement }) => withoutNumber(requirement)))
+  return all.flatMap(({ requirement, found }) => {
+    if (found === null) return []
+    const met = requirement.bound === 'below' ? found.value <= requirement.value : found.value >= requirement.value
+    return [{ requirement, ...found, met }]
   })
 }

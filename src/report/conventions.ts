@@ -49,6 +49,6 @@ export const conventions: readonly Convention[] = [
   {
     id: 'uncertainty',
     title: 'Uncertainties',
-    text: 'A number in brackets is the standard uncertainty in units of the last digits: 3.1(2) ng is 3.1 ng with a standard uncertainty of 0.2 ng. Results carry theirs by the law of propagation of the GUM (JCGM 100:2008, 5.1 and 5.2) to first order; statistical and systematic causes are added up apart. A number that no uncertain value reaches has none.',
+    text: 'A number in brackets is the standard uncertainty in units of the last digits: 3.1(2) ng is 3.1 ng with a standard uncertainty of 0.2 ng. Results carry theirs by the law of propagation of the GUM (JCGM 100:2008, 5.1 and 5.2) to first order; statistical and systematic causes are added up apart. A number that no uncertain value reaches has none. A frequency stands still while values change, except within thirty half widths of a resonance whose place is uncertain by more than its width (in the shaded band, within ten standard uncertainties of it): there a frequency means the distance from the resonance.',
   },
 ]
