@@ -1,15 +1,51 @@
 import { Ajv, type ErrorObject, type ValidateFunction } from 'ajv'
+import { declarations } from '../catalogue/declarations.js'
 import type { Issues } from './issues.js'
 import { keysOf, parameterOf, problemOf } from './messages.js'
 import { nearest } from './nearest.js'
 import { budgetSchema } from './schema.js'
-import { plainValue, type Tree } from './tree.js'
+import { child, plainValue, type Tree } from './tree.js'
 
-let compiled: ValidateFunction | null = null
+/** Validators and the kinds that each knows. */
+const compiled: { readonly kinds: ReadonlySet<string>; readonly validate: ValidateFunction }[] = []
 
-/** Compiled at the first use and kept: it costs more than everything else at the border. */
-function validator(): ValidateFunction {
-  if (compiled !== null) return compiled
+/** Files that differ in their kinds have validators of their own up to this many; then one for all kinds is made. */
+const most = 3
+
+/** Kinds that a file names, as far as they are words: in `components`, `contributions` and what a part or a variant may add. */
+function kindsIn(tree: Tree, found = new Set<string>()): Set<string> {
+  if (tree.type === 'list') for (const item of tree.items) kindsIn(item, found)
+  if (tree.type !== 'map') return found
+  for (const { key, value } of tree.entries.values()) {
+    if (key === 'kind' && value.type === 'scalar') found.add(value.text)
+    else kindsIn(value, found)
+  }
+  return found
+}
+
+/** Every map of `components` says what it is; otherwise the sentence about it lists all kinds. */
+const allNamed = (tree: Tree): boolean => {
+  const components = child(tree, 'components')
+  if (components?.type !== 'map') return false
+  return [...components.entries.values()].every(({ value }) => child(value, 'kind')?.type === 'scalar')
+}
+
+/**
+ * A validator for the kinds of a file, compiled at the first use and kept: it costs more than everything else at the border, and in
+ * proportion to the kinds that it knows. A file with a kind that does not exist is judged by all of them.
+ */
+function validatorFor(tree: Tree): ValidateFunction {
+  const used = kindsIn(tree)
+  const known = allNamed(tree) && [...used].every(kind => declarations.has(kind))
+  const kinds = known && compiled.length < most ? used : new Set(declarations.keys())
+  const enough = compiled.find(each => [...(known ? used : kinds)].every(kind => each.kinds.has(kind)))
+  if (enough !== undefined && (known || enough.kinds.size === declarations.size)) return enough.validate
+  const validate = compile(kinds)
+  compiled.push({ kinds, validate })
+  return validate
+}
+
+function compile(kinds: ReadonlySet<string>): ValidateFunction {
   const ajv = new Ajv({
     allErrors: true,
     strict: true,
@@ -25,13 +61,12 @@ function validator(): ValidateFunction {
     validateSchema: false,
     addUsedSchema: false,
   })
-  compiled = ajv.compile(budgetSchema())
-  return compiled
+  return ajv.compile(budgetSchema(kinds))
 }
 
 /** Judges the shape of a budget file: keys, types, words; every error becomes a problem at its place. */
 export function validateShape(tree: Tree, issues: Issues): void {
-  const validate = validator()
+  const validate = validatorFor(tree)
   if (validate(plainValue(tree))) return
   for (const error of withoutMisspelt(relevant(validate.errors ?? []))) issues.add(problemOf(error, tree))
 }
