@@ -4,7 +4,7 @@ import { writeFile } from 'node:fs/promises'
 import { fileURLToPath } from 'node:url'
 import wabt from 'wabt'
 
-const blockLength = 512
+const blockLength = 1024
 const blockBytes = blockLength * 8
 
 /** Loads of a register's first (real) and second (imaginary) array at the loop index. */

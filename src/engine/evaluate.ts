@@ -2,8 +2,9 @@ import type { Budget } from '../model/budget.js'
 import type { Evaluation, Parts } from '../model/evaluation.js'
 import type { Network, Source } from '../model/network.js'
 import type { Points } from '../model/points.js'
-import { adjoint, transfer } from './adjoint.js'
+import { adjoint, transfer, type Adjoint } from './adjoint.js'
 import { Arena } from './arena.js'
+import type { Form } from './form.js'
 import { gridArrays } from './grid-arrays.js'
 import { planLimits, type LimitPlan } from './limits.js'
 import { planLines, type LinePlan } from './lines.js'
@@ -16,29 +17,23 @@ import { Tape } from './tape.js'
 export interface Wanted {
   readonly sources: boolean
   readonly limits: boolean
-  /** Amplitude densities of the total and of the lines beside the power densities. */
-  readonly amplitudes?: boolean
 }
 
 /** Makes one curve after a run: addresses of registers are turned into arrays in the order in which they were planned. */
 class Harvest {
   readonly addresses: number[] = []
-  readonly planned: (readonly Real[])[] = []
   #next = 0
   #arrays: Float64Array[] = []
 
   constructor(readonly tape: Tape) {}
 
   plan(...terms: Real[]): void {
-    this.planned.push(terms)
     this.addresses.push(this.tape.written(terms))
   }
 
-  /** Amplitude densities of the total, which was planned first, and of lines that were planned from `first` on. */
-  planRoots(first: number, lines: number): void {
-    for (const terms of [this.planned[0], ...this.planned.slice(first, first + lines)]) {
-      this.addresses.push(this.tape.written([this.tape.root(this.tape.sum(terms))]))
-    }
+  /** √ of the sum, shared where sums differ by a factor alone. */
+  planRoot(terms: readonly Real[]): void {
+    this.addresses.push(this.tape.written([this.tape.root(this.tape.sum(terms))]))
   }
 
   planParts({ imprecision, backAction, correlation }: RealParts): void {
@@ -63,6 +58,46 @@ class Harvest {
   }
 }
 
+/** What the sources of a network give on a tape, referred to the measurand. */
+interface Referred {
+  readonly rows: Adjoint
+  readonly response: Form
+  readonly inverseResponse: Real
+  readonly densities: ReadonlyMap<Source, SourceDensities>
+}
+
+function refer(tape: Tape, network: Network): Referred {
+  const rows = adjoint(tape, network)
+  const response = transfer(tape, rows.full, network.measurand, true)
+  const inverseResponse = tape.inverseAbs2(response)
+  const densities = new Map(network.sources.map(s => [s, new SourceDensities(tape, s, rows, inverseResponse)]))
+  return { rows, response, inverseResponse, densities }
+}
+
+const termsOf = ({ pieces }: LinePlan, densities: Referred['densities']): Real[] =>
+  pieces.flatMap(({ source, piece }) => densities.get(source)!.piece(piece))
+
+/** Amplitude densities alone, of the total and of the lines, in unit/√Hz: what a sweep over many values of the roots looks at. */
+export class Amplitudes {
+  readonly #harvest = new Harvest(new Tape())
+  readonly #lines: number
+
+  constructor(budget: Pick<Budget, 'lines'>, network: Network) {
+    const { densities } = refer(this.#harvest.tape, network)
+    const lines = planLines(budget, network)
+    this.#lines = lines.length
+    this.#harvest.planRoot([...densities.values()].map(d => d.all()))
+    for (const line of lines) this.#harvest.planRoot(termsOf(line, densities))
+  }
+
+  /** The total first, then the lines in their order, NaN where a signed one is negative; an arena's arrays are overwritten. */
+  at(points: Points, arena = new Arena()): Float64Array[] {
+    arena.reset()
+    this.#harvest.run(points, arena)
+    return Array.from({ length: 1 + this.#lines }, () => this.#harvest.take())
+  }
+}
+
 /**
  * The engine's primitive, prepared for one network: `at(points)` gives all curves there. Power densities, one-sided, at the
  * measurand (unit²/Hz): every source's density is t S t†/|R|², with t and R from one adjoint solution at each point.
@@ -72,28 +107,20 @@ export class Evaluator {
   readonly #sources: readonly Source[]
   readonly #lines: readonly LinePlan[]
   readonly #limits: readonly LimitPlan[]
-  readonly #amplitudes: boolean
 
   constructor(budget: Pick<Budget, 'lines'>, network: Network, wanted: Wanted) {
     const tape = new Tape()
-    const rows = adjoint(tape, network)
-    const response = transfer(tape, rows.full, network.measurand, true)
-    const inverseResponse = tape.inverseAbs2(response)
-    const all = new Map(network.sources.map(s => [s, new SourceDensities(tape, s, rows, inverseResponse)]))
+    const { rows, response, inverseResponse, densities: all } = refer(tape, network)
     this.#harvest = new Harvest(tape)
     this.#sources = wanted.sources ? network.sources : []
     this.#lines = planLines(budget, network)
     this.#limits = wanted.limits ? planLimits(tape, network, rows, inverseResponse) : []
     this.#harvest.plan(...[...all.values()].map(d => d.all()))
     this.#harvest.plan(...[...all.values()].filter(d => d.source.readout).map(d => d.all()))
-    for (const { pieces } of this.#lines) {
-      this.#harvest.plan(...pieces.flatMap(({ source, piece }) => all.get(source)!.piece(piece)))
-    }
+    for (const line of this.#lines) this.#harvest.plan(...termsOf(line, all))
     for (const source of this.#sources) this.#planSource(all.get(source)!)
     for (const limit of this.#limits) this.#harvest.plan(limit.psd)
     this.#harvest.plan(tape.abs2(response))
-    this.#amplitudes = wanted.amplitudes === true
-    if (this.#amplitudes) this.#harvest.planRoots(2, this.#lines.length)
   }
 
   #planSource(densities: SourceDensities): void {
@@ -133,7 +160,6 @@ export class Evaluator {
       })),
       limits: this.#limits.map(({ psd: _, ...limit }) => ({ ...limit, psd: h.take() })),
       response: h.take(),
-      ...(this.#amplitudes && { asd: { total: h.take(), lines: this.#lines.map(() => h.take()) } }),
     }
   }
 }

@@ -3,7 +3,7 @@ import { plainLoops } from './plain-loops.js'
 import { blockLength, simdModule } from './simd-module.js'
 
 /** Blocks that all registers together may take. */
-const capacity = 4096
+const capacity = 2048
 
 function instantiate(): { memory: Float64Array; loops: Loops } {
   const bytes = capacity * blockLength * 8

@@ -70,6 +70,4 @@ export interface Evaluation {
   readonly limits: readonly LimitCurve[]
   /** |R|²: power response of the detector to the measurand, in quanta (or m²) at the detector per measurand². */
   readonly response: Float64Array
-  /** Amplitude densities, unit/√Hz, where they were asked for; of a signed line NaN where it is negative. */
-  readonly asd?: { readonly total: Float64Array; readonly lines: readonly Float64Array[] }
 }

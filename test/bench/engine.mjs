@@ -9,7 +9,7 @@ import { fileURLToPath } from 'node:url'
 const at = name => new URL(`../../dist/engine/${name}.js`, import.meta.url).href
 const { assemble } = await import(at('assemble'))
 const { Arena } = await import(at('arena'))
-const { Evaluator } = await import(at('evaluate'))
+const { Amplitudes } = await import(at('evaluate'))
 const { absolutePoints } = await import(at('points'))
 
 const points = 10_000
@@ -109,9 +109,7 @@ const arena = new Arena()
 
 /** One evaluation from the budget's numbers: the network, its tape, all curves, their amplitude densities. */
 function evaluate() {
-  const wanted = { sources: false, limits: false, amplitudes: true }
-  const { asd } = new Evaluator(budget, assemble(budget), wanted).at(grid, arena)
-  return [asd.total, ...asd.lines]
+  return new Amplitudes(budget, assemble(budget)).at(grid, arena)
 }
 
 function timed() {

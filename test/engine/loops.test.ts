@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest'
 import type { Loops } from '../../src/engine/array-loops.js'
-import { blockBytes, blockLength, loops, memory } from '../../src/engine/loops.js'
+import { blockBytes, blockCapacity, blockLength, loops, memory } from '../../src/engine/loops.js'
 import { plainLoops } from '../../src/engine/plain-loops.js'
 import { seeded } from './promise.js'
 
@@ -64,7 +64,7 @@ test('every loop is called', () => {
 })
 
 test('the loops in use are the vector loops, not the plain ones', () => {
-  expect(memory.buffer.byteLength).toBe(4096 * blockBytes)
+  expect(memory.buffer.byteLength).toBe(blockCapacity * blockBytes)
   expect(String(loops.multiply)).toContain('native code')
 })
 
