@@ -1,6 +1,6 @@
 import { createRequire } from 'node:module'
 import type { Citation } from '../model/budget.js'
-import { EngineFault, type Place, type Problem } from '../model/problem.js'
+import { EngineFault, Refusal, type Place, type Problem } from '../model/problem.js'
 import { scanBibtex, type BibEntry, type BibFile } from './bibtex.js'
 import { citationLink, citationText, isCitable, type ReadEntry } from './citation-text.js'
 import { FileRefusal, type FileSource } from './file-source.js'
@@ -52,9 +52,28 @@ function cite(scalar: TreeScalar, shelf: Shelf, issues: Issues): Citation | null
     issues.error('bibtex', second.place, message)
   }
   if (entry === undefined || second !== undefined || !isSound(entry, book, issues)) return null
+  if (shelf.files.hurried === true) return postponed(entry, book)
   const citation = citationOf(entry, book)
   if ('severity' in citation) issues.add(citation)
   return 'severity' in citation ? null : citation
+}
+
+/** A citation that is read when somebody looks at it; a fault that only the library sees is refused then. */
+function postponed(entry: BibEntry, book: BibFile): Citation {
+  const now = (): Citation => {
+    const citation = citationOf(entry, book)
+    if ('severity' in citation) throw new Refusal([citation])
+    return citation
+  }
+  return {
+    key: entry.key,
+    get text() {
+      return now().text
+    },
+    get link() {
+      return now().link
+    },
+  }
 }
 
 function unknown(key: string, books: readonly BibFile[]): string {

@@ -4,6 +4,8 @@ export interface FileSource {
   read(path: string): Uint8Array
   /** Names in a folder, sorted by code unit; throws `FileRefusal` when it is not a folder inside the root. */
   list(path: string): readonly Entry[]
+  /** True where works cited are not going to be printed: their entries are then checked for being there, and typeset only if asked for. */
+  readonly hurried?: boolean
 }
 
 export interface Entry {

@@ -11,6 +11,7 @@ const openFlags = constants.O_RDONLY | (constants.O_NOFOLLOW ?? 0) | (constants.
 /** Files below one folder of the disk; links are refused wherever they stand below it, also such that stay inside. */
 export class NodeFiles implements FileSource {
   readonly #root: string
+  hurried = false
 
   constructor(root: string) {
     this.#root = realpathSync(root)

@@ -1,3 +1,4 @@
+import { NodeFiles } from '../../budget/node-files.js'
 import { visible } from '../../budget/format-problem.js'
 import type { Assessment } from '../../model/assessment.js'
 import type { Evaluation } from '../../model/evaluation.js'
@@ -21,7 +22,10 @@ const sideBySide = 3
 /** Prints one budget: at its reference frequency or exactly where the call asks, as a table or as data. */
 export async function show(options: ShowOptions, io: Io): Promise<ExitCode> {
   const points = pointsAsked(options, io)
-  const target = targetNamed(projectAround(options.root, io), options.budget, io)
+  const project = projectAround(options.root, io)
+  // A table prints no works cited.
+  if (project?.files instanceof NodeFiles) project.files.hurried = options.json !== true
+  const target = targetNamed(project, options.budget, io)
   // The published file has uncertainties at every point; a table shows none of them.
   const outcome = await assessTarget(target, options.json ? 'report' : 'glance')
   const { assessment } = outcome
