@@ -3,7 +3,8 @@ import { assemble } from '../../src/engine/assemble.js'
 import { evaluateAtFrequencies } from '../../src/engine/assess.js'
 import type { ComponentSpec, Parameters } from '../../src/model/budget.js'
 import { Refusal } from '../../src/model/problem.js'
-import { leastAddedQuanta, quantaOfNoiseTemperature, temperatureOfNoiseFigure } from '../../src/physics/chain.js'
+import { addedQuantaOfNoiseTemperature } from '../../src/physics/chain.js'
+import { leastAddedQuanta, noiseTemperatureOfFigure } from '../../src/physics/electronics.js'
 import { budgetOf, component, slot } from '../engine/budget-of.js'
 
 /* Chains of losses and amplifiers against Friis's formula, and noise temperatures against numbers of their own. */
@@ -68,12 +69,12 @@ describe('noise temperature', () => {
     ['planck', 6.4455],
     ['source', 6.4575],
   ] as const)('%s: 2 K at 6 GHz are %f quanta', (convention, quanta) => {
-    expect(quantaOfNoiseTemperature(turn * 6e9, 2, convention)).toBeCloseTo(quanta, 3)
+    expect(addedQuantaOfNoiseTemperature(turn * 6e9, 2, convention)).toBeCloseTo(quanta, 3)
   })
 
   test('a noise figure of 3.0103 dB is 290 K [Friis 1944]', () => {
-    expect(temperatureOfNoiseFigure(10 * Math.log10(2))).toBeCloseTo(290, 9)
-    expect(temperatureOfNoiseFigure(0)).toBe(0)
+    expect(noiseTemperatureOfFigure(10 * Math.log10(2))).toBeCloseTo(290, 9)
+    expect(noiseTemperatureOfFigure(0)).toBe(0)
   })
 
   test('least added noise: half a quantum at large gain, none at gain 1 [Caves 1982]', () => {

@@ -1,4 +1,4 @@
-import { leastAddedQuanta } from '../../physics/chain.js'
+import { leastAddedQuanta } from '../../physics/electronics.js'
 import type { Check, Finding, Given, Surroundings } from '../check.js'
 
 /** Added noise of a phase-preserving amplifier, in quanta at its input: at least ½|1 − 1/G| [Caves 1982]. */

@@ -1,5 +1,6 @@
 import { Refusal } from '../../model/problem.js'
-import { leastAddedQuanta, quantaOfNoiseTemperature, temperatureOfNoiseFigure } from '../../physics/chain.js'
+import { addedQuantaOfNoiseTemperature } from '../../physics/chain.js'
+import { leastAddedQuanta, noiseTemperatureOfFigure } from '../../physics/electronics.js'
 import { scale } from '../../physics/complex.js'
 import { thermalBlock } from '../../physics/covariance.js'
 import type { declaration } from '../declarations/amplifier.js'
@@ -13,8 +14,8 @@ type Values = ValuesOf<typeof declaration.fields>
 function addedQuanta(instance: Instance<Values>, frequency: number): number {
   const { added, noise_temperature: stated, noise_figure: figure = 0, convention, gain = Infinity } = instance.values
   if (added !== undefined) return added
-  const temperature = stated ?? temperatureOfNoiseFigure(figure)
-  const quanta = quantaOfNoiseTemperature(2 * Math.PI * frequency, temperature, convention ?? 'callen-welton')
+  const temperature = stated ?? noiseTemperatureOfFigure(figure)
+  const quanta = addedQuantaOfNoiseTemperature(2 * Math.PI * frequency, temperature, convention ?? 'callen-welton')
   const least = leastAddedQuanta(gain)
   if (quanta >= least * (1 - 1e-12)) return quanta
   const field = stated === undefined ? 'noise_figure' : 'noise_temperature'
