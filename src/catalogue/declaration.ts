@@ -74,9 +74,7 @@ export interface WeightsField extends Common {
  */
 export interface DensityField extends Common {
   readonly type: 'density'
-  readonly of: 'force' | 'length' | 'voltage' | 'current' | 'quanta' | 'relative-intensity' | 'phase' | 'frequency'
-  /** TeX of its symbol in the kind's equations. */
-  readonly symbol?: string
+  readonly of: 'force' | 'length' | 'voltage' | 'current' | 'quanta'
 }
 
 export type Fields = { readonly [name: string]: Field }
