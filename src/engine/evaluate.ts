@@ -77,6 +77,15 @@ function refer(tape: Tape, network: Network): Referred {
 const termsOf = ({ pieces }: LinePlan, densities: Referred['densities']): Real[] =>
   pieces.flatMap(({ source, piece }) => densities.get(source)!.piece(piece))
 
+/** The power density of the total alone, unit²/Hz, at given points: what a search or an integral looks at. */
+export function totalDensity(network: Network, points: Points): Float64Array {
+  const harvest = new Harvest(new Tape())
+  const { densities } = refer(harvest.tape, network)
+  harvest.plan(...[...densities.values()].map(d => d.all()))
+  harvest.run(points, new Arena())
+  return harvest.take()
+}
+
 /** Amplitude densities alone, of the total and of the lines, in unit/√Hz: what a sweep over many values of the roots looks at. */
 export class Amplitudes {
   readonly #harvest = new Harvest(new Tape())

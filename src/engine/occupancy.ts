@@ -2,10 +2,10 @@ import type { Injection, Mode, Network, Shape, Source } from '../model/network.j
 import { complex } from '../physics/complex.js'
 import { boltzmannConstant, reducedPlanckConstant } from '../physics/constants.js'
 import { gaussLegendre } from '../physics/gauss-legendre.js'
-import { Evaluator } from './evaluate.js'
-import { makePoints, type Point } from './points.js'
+import { totalDensity } from './evaluate.js'
+import type { Point } from './points.js'
 import { energyDecay, type Pole } from './poles.js'
-import type { Anchor } from '../model/points.js'
+import type { Anchor, Points } from '../model/points.js'
 
 /**
  * A viscous bath as the white force that it is next to the resonance of its own mode, 4ħΩ(n(Ω,T)+½)mΓ. Taken literally, the zero point of a viscous
@@ -49,6 +49,8 @@ interface Panel {
 const growth = 4
 
 const nodesPerPanel = 12
+
+const rule = gaussLegendre(nodesPerPanel)
 
 /** Poles at positive frequencies as anchors, ascending; one at zero frequency stands for those on the imaginary axis. */
 function poleAnchors(poles: readonly Pole[]): Anchor[] {
@@ -120,6 +122,29 @@ function panelsOver(anchors: readonly Anchor[], lowest: number, highest: number)
   })
 }
 
+/** Nodes of the rule on all panels, ascending as the panels are, with their weights. */
+function nodesOver(anchors: readonly Anchor[], panels: readonly Panel[]): { points: Points; weights: Float64Array } {
+  const size = panels.length * nodesPerPanel
+  const points = {
+    anchors,
+    frequency: new Float64Array(size),
+    anchor: new Int32Array(size),
+    offset: new Float64Array(size),
+  }
+  const weights = new Float64Array(size)
+  for (const [i, { anchor, from, to }] of panels.entries()) {
+    for (let k = 0; k < nodesPerPanel; k++) {
+      const at = i * nodesPerPanel + k
+      const offset = (from + to) / 2 + (rule.nodes[k] * (to - from)) / 2
+      points.anchor[at] = anchor
+      points.offset[at] = offset
+      points.frequency[at] = anchors[anchor].frequency + offset
+      weights[at] = (rule.weights[k] * (to - from)) / 2
+    }
+  }
+  return { points, weights }
+}
+
 /**
  * Final occupancy n_f = (⟨q²⟩ + ⟨p²⟩)/2 − ½ about the bare frequency, light on, q = x/(√2 x_zp) and p likewise, from
  * ⟨x²⟩ = ∫S_x df and ⟨p²⟩ = m²∫ω²S_x df over one-sided S_x of the actual motion, by Gauss–Legendre panels around the poles of the network.
@@ -131,24 +156,12 @@ export function finalOccupancy(network: Network, poles: readonly Pole[], mode: M
   const motion = motionOf(network, mode)
   const lowest =
     lowestOf(motion) * Math.min(...anchors.filter(a => a.frequency > 0).map(a => a.frequency), mode.frequency)
-  const panels = panelsOver(anchors, lowest, 1e9 * fastest)
-  const rule = gaussLegendre(nodesPerPanel)
-  const list: Point[] = []
-  const weights: number[] = []
-  for (const { anchor, from, to } of panels) {
-    for (const [k, node] of rule.nodes.entries()) {
-      list.push({ anchor, offset: (from + to) / 2 + (node * (to - from)) / 2 })
-      weights.push((rule.weights[k] * (to - from)) / 2)
-    }
-  }
-  // Points come out in the order of frequency, panels overlap nowhere: the weights are sorted along with them.
-  const order = list.map((_, i) => i).sort((i, j) => frequencyOf(anchors, list[i]) - frequencyOf(anchors, list[j]))
-  const points = makePoints(anchors, list)
-  const { total } = new Evaluator({ lines: [] }, motion, { sources: false, limits: false }).at(points)
+  const { points, weights } = nodesOver(anchors, panelsOver(anchors, lowest, 1e9 * fastest))
+  const total = totalDensity(motion, points)
   let x = 0
   let p = 0
-  for (const [i, from] of order.entries()) {
-    const density = total[i] * weights[from]
+  for (let i = 0; i < total.length; i++) {
+    const density = total[i] * weights[i]
     x += density
     p += density * (2 * Math.PI * points.frequency[i]) ** 2
   }

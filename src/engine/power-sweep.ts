@@ -2,7 +2,7 @@ import type { BestPump, PumpRange } from '../model/assessment.js'
 import type { Budget, ComponentSpec, Parameters, Slot } from '../model/budget.js'
 import { Refusal } from '../model/problem.js'
 import { assemble } from './assemble.js'
-import { Evaluator } from './evaluate.js'
+import { totalDensity } from './evaluate.js'
 import { modeAnchors } from './anchors.js'
 import { makePoints } from './points.js'
 import { pointAt } from './grid.js'
@@ -43,7 +43,7 @@ export function totalAt(budget: Budget, factor: number, frequency: number): numb
     refuseUnstable(network, poles)
     const anchors = modeAnchors(network, poles, { low: 0, high: Infinity })
     const points = makePoints(anchors, [pointAt(anchors, frequency)])
-    return new Evaluator({ lines: [] }, network, { sources: false, limits: false }).at(points).total[0]
+    return totalDensity(network, points)[0]
   } catch (error) {
     if (error instanceof Refusal) return null
     throw error
